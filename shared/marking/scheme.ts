@@ -1,0 +1,126 @@
+/** All that decides the mark of one item. Plain data: it is stored, named by the hash of its content, and never changed. */
+
+/** The seven readings without a value. */
+export const codes = [
+  'blank',
+  'cannot-read',
+  'crossed-out',
+  'two-answers',
+  'elsewhere',
+  'wrong-page',
+  'ask-the-lead',
+] as const;
+export type Code = (typeof codes)[number];
+
+export const conventions = [
+  'slater',
+  'slater-035-in-1s',
+  'slater-d-at-1',
+  'core-count',
+  'scf',
+  'ionisation-energy',
+  'typed',
+] as const;
+export type ConventionName = (typeof conventions)[number];
+
+export const quantities = [
+  'zeff',
+  'sigma',
+  'difference',
+  'energy-ev',
+  'energy-kj-mol',
+  'radius-pm',
+  'electronegativity',
+] as const;
+export type QuantityName = (typeof quantities)[number];
+
+/** Species, electron, quantity and convention: what fixes the key of a computed item. */
+export interface Asked {
+  readonly symbol: string;
+  readonly charge: number;
+  /** Such as `3p`. */
+  readonly electron: string;
+  readonly quantity: QuantityName;
+  readonly convention: ConventionName;
+  /** A typed configuration, such as `1s2 2s2 2p5 3s1`, where the ground state is not meant. */
+  readonly configuration?: string;
+}
+
+export interface Key {
+  /** The exact value as a reduced fraction, `61/10`. */
+  readonly value: string;
+  /** As printed, `6.10`. */
+  readonly text: string;
+  /** The decimals an answer must show to meet the key itself; its trailing zeros are information. */
+  readonly decimals: number;
+}
+
+export interface RoundingPolicy {
+  /** The fewest decimals still accepted; null when only the key's own decimals are. */
+  readonly downToDecimals: number | null;
+  /** Whether cutting off the places counts like rounding them. */
+  readonly truncation: boolean;
+}
+
+export type BandKind = 'absolute' | 'relative' | 'decimal-places' | 'significant-figures';
+
+/** Closed at both ends, round the key only. Nested: the innermost that contains the value counts. */
+export interface Band {
+  readonly name: string;
+  readonly kind: BandKind;
+  /** absolute: half width, `1/20`; relative: share of |key|, `1/20` is 5 %; the other kinds: the count of places or figures. */
+  readonly width: string;
+  readonly grains: number;
+}
+
+/** Another value the lead accepts, with the same roundings as the key. */
+export interface Alternative {
+  readonly name: string;
+  readonly value: string;
+  readonly text: string;
+  readonly decimals: number;
+  readonly grains: number;
+  readonly reason: string;
+  readonly convention?: ConventionName;
+}
+
+/** What becomes of an answer that was crossed out, or of two left standing. */
+export type AnswerPolicy = 'ask' | 'none';
+
+export interface ItemScheme {
+  readonly kind: 'numeric';
+  readonly asked: Asked;
+  readonly maxGrains: number;
+  readonly key: Key;
+  /** The closed list of units an answer may carry; empty for a pure number. */
+  readonly units: readonly string[];
+  readonly roundings: RoundingPolicy;
+  readonly alternatives: readonly Alternative[];
+  readonly bands: readonly Band[];
+  readonly crossedOut: AnswerPolicy;
+  readonly twoAnswers: AnswerPolicy;
+}
+
+/** What one person typed for one answer: the verbatim text or a code, never both. */
+export type Given = { readonly text: string } | { readonly code: Code };
+
+export const isCode = (given: Given): given is { readonly code: Code } => 'code' in given;
+
+/** What else a verdict rests on besides the answer itself; empty for an item that follows from no other. */
+export interface MarkingContext {
+  readonly [name: string]: string;
+}
+
+export const emptyContext: MarkingContext = {};
+
+/** The rule that gave the mark, in the order in which a tie is settled. */
+export const rules = ['code', 'key', 'rounding', 'alternative', 'band', 'nothing'] as const;
+export type RuleName = (typeof rules)[number];
+
+/** The stored result of marking one distinct reading: grains null when a person has to decide. */
+export interface Verdict {
+  readonly grains: number | null;
+  readonly rule: RuleName;
+  /** The numbers behind the rule, such as { key: '6.10', decimals: '1' }; put into words when shown. */
+  readonly numbers: Readonly<Record<string, string>>;
+}
