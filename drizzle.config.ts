@@ -1,3 +1,3 @@
 import { defineConfig } from 'drizzle-kit';
 
-export default defineConfig({ dialect: 'sqlite', schema: './db/schema/index.ts', out: './db/migrations' });
+export default defineConfig({ dialect: 'sqlite', schema: './db/schema/index.ts', out: './db/migrations', casing: 'snake_case' });

@@ -1,0 +1,58 @@
+import { index, integer, primaryKey, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core';
+import type { ItemScheme } from '../../shared/marking/scheme';
+import { id, instant, rev } from './columns';
+import { person } from './people';
+import { sitting } from './sittings';
+
+/** Identity of an item and what is printed; all that decides its mark is in a scheme. */
+export const item = sqliteTable(
+  'item',
+  {
+    id: id(),
+    sitting: text().notNull().references(() => sitting.id),
+    number: integer().notNull(),
+    prompt: text().notNull(),
+    kind: text({ enum: ['numeric'] }).notNull().default('numeric'),
+    maxGrains: integer().notNull(),
+    rev: rev(),
+  },
+  (table) => [index('item_by_sitting').on(table.sitting, table.number)],
+);
+
+/** What the editor changes before the lock. */
+export const itemDraft = sqliteTable('item_draft', {
+  item: text().primaryKey().references(() => item.id),
+  body: text({ mode: 'json' }).$type<ItemScheme>().notNull(),
+  rev: rev(),
+});
+
+/** Append-only. Named by the hash of its content: amended and amended back is the same row. */
+export const itemScheme = sqliteTable('item_scheme', {
+  hash: text().primaryKey(),
+  body: text({ mode: 'json' }).$type<ItemScheme>().notNull(),
+});
+
+/** Append-only. */
+export const schemeVersion = sqliteTable(
+  'scheme_version',
+  {
+    id: id(),
+    sitting: text().notNull().references(() => sitting.id),
+    ordinal: integer().notNull(),
+    madeBy: text().notNull().references(() => person.id),
+    madeAt: instant().notNull(),
+    reason: text(),
+  },
+  (table) => [uniqueIndex('scheme_version_ordinal').on(table.sitting, table.ordinal)],
+);
+
+/** Append-only. */
+export const schemeVersionItem = sqliteTable(
+  'scheme_version_item',
+  {
+    version: text().notNull().references(() => schemeVersion.id),
+    item: text().notNull().references(() => item.id),
+    itemScheme: text().notNull().references(() => itemScheme.hash),
+  },
+  (table) => [primaryKey({ columns: [table.version, table.item] })],
+);

@@ -1,0 +1,81 @@
+import { sql } from 'drizzle-orm';
+import { index, integer, primaryKey, real, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core';
+import { boxUses, scriptOrigins } from '../../shared/contracts/enums';
+import { id, instant } from './columns';
+import { item } from './papers';
+import { candidate, sitting } from './sittings';
+
+/** Where on the pages the answers stand. A layout that pages arrived for is never changed: a new one gets the next ordinal. */
+export const layout = sqliteTable(
+  'layout',
+  {
+    id: id(),
+    sitting: text().notNull().references(() => sitting.id),
+    ordinal: integer().notNull(),
+    origin: text({ enum: ['printed', 'drawn'] }).notNull(),
+  },
+  (table) => [uniqueIndex('layout_ordinal').on(table.sitting, table.ordinal)],
+);
+
+/** One page of the paper: its size in millimetres, and the sample image regions are drawn on. */
+export const layoutPage = sqliteTable(
+  'layout_page',
+  {
+    layout: text().notNull().references(() => layout.id),
+    pageNo: integer().notNull(),
+    widthMm: real().notNull(),
+    heightMm: real().notNull(),
+    sample: text(),
+  },
+  (table) => [primaryKey({ columns: [table.layout, table.pageNo] })],
+);
+
+/** x, y, w, h in millimetres from the top left of the page. */
+export const box = sqliteTable(
+  'box',
+  {
+    id: id(),
+    layout: text().notNull().references(() => layout.id),
+    pageNo: integer().notNull(),
+    item: text().references(() => item.id),
+    use: text({ enum: boxUses }).notNull(),
+    x: real().notNull(),
+    y: real().notNull(),
+    w: real().notNull(),
+    h: real().notNull(),
+  },
+  (table) => [index('box_by_layout').on(table.layout, table.pageNo)],
+);
+
+export const script = sqliteTable(
+  'script',
+  {
+    id: id(),
+    sitting: text().notNull().references(() => sitting.id),
+    number: integer().notNull(),
+    layout: text().references(() => layout.id),
+    candidate: text().references(() => candidate.id),
+    origin: text({ enum: scriptOrigins }).notNull(),
+    voidReason: text(),
+    mergedInto: text(),
+  },
+  (table) => [
+    uniqueIndex('script_number').on(table.sitting, table.number),
+    uniqueIndex('script_one_live_per_candidate').on(table.candidate).where(sql`"void_reason" is null and "merged_into" is null`),
+  ],
+);
+
+/** The place of a page, there before any image: due, in or excused, never guessed. */
+export const page = sqliteTable(
+  'page',
+  {
+    id: id(),
+    script: text().notNull().references(() => script.id),
+    pageNo: integer().notNull(),
+    /** The page image that is placed here. */
+    image: text(),
+    excusedReason: text(),
+    excusedAt: instant(),
+  },
+  (table) => [uniqueIndex('page_place').on(table.script, table.pageNo)],
+);

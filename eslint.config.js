@@ -1,0 +1,69 @@
+import { createTypeScriptImportResolver } from 'eslint-import-resolver-typescript';
+import { importX } from 'eslint-plugin-import-x';
+import reactHooks from 'eslint-plugin-react-hooks';
+import tseslint from 'typescript-eslint';
+
+const rooms = [
+  'app', 'server', 'db', 'tests',
+  'shared/chemistry', 'shared/marking', 'shared/contracts', 'shared/client', 'shared/ui', 'shared/screens',
+];
+
+/** A room may import itself and the rooms named. */
+const only = (target, ...allowed) => ({ target: `./${target}`, from: rooms.filter((room) => room !== target && !allowed.includes(room)).map((room) => `./${room}`) });
+const never = (target, ...from) => ({ target: `./${target}`, from: from.map((room) => `./${room}`) });
+
+/** Who may import whom; the table of rooms in DEVELOPERS.md says the same in words. */
+const zones = [
+  only('shared/chemistry'),
+  only('shared/marking', 'shared/chemistry'),
+  only('shared/contracts', 'shared/marking', 'shared/chemistry'),
+  only('shared/client', 'shared/contracts', 'shared/marking', 'shared/chemistry'),
+  only('shared/ui'),
+  only('shared/screens', 'shared/chemistry', 'shared/marking', 'shared/contracts', 'shared/client', 'shared/ui'),
+  only('app', 'shared/client', 'shared/ui', 'shared/screens'),
+  only('db', 'shared/chemistry', 'shared/marking', 'shared/contracts'),
+  only('server', 'db', 'shared/chemistry', 'shared/marking', 'shared/contracts'),
+  never('server/routes', 'db'),
+  never('server/services', 'server/routes', 'server/http'),
+  never('server/ingest', 'server/routes', 'server/services', 'db'),
+  never('server/storage', 'server/routes', 'server/services', 'db'),
+  never('server/jobs', 'server/routes', 'server/services'),
+  never('server/auth', 'server/routes', 'server/services'),
+  never('server/http', 'server/routes', 'server/services'),
+].map((zone) => ({ ...zone, message: 'This room may not reach into that one: see the table of rooms in DEVELOPERS.md.' }));
+
+export default tseslint.config(
+  { ignores: ['node_modules', 'dist', 'uploads', 'coverage', '.expo', 'db/migrations', 'expo-env.d.ts'] },
+  ...tseslint.configs.recommended,
+  {
+    files: ['**/*.{ts,tsx}'],
+    plugins: { 'import-x': importX, 'react-hooks': reactHooks },
+    settings: { 'import-x/resolver-next': [createTypeScriptImportResolver({ noWarnOnMultipleProjects: true, project: ['tsconfig.json', 'tsconfig.server.json'] })] },
+    rules: {
+      'import-x/no-restricted-paths': ['error', { zones }],
+      'import-x/no-cycle': ['error', { maxDepth: 8 }],
+      'react-hooks/rules-of-hooks': 'error',
+      'react-hooks/exhaustive-deps': 'error',
+      '@typescript-eslint/no-explicit-any': 'error',
+      '@typescript-eslint/consistent-type-imports': ['error', { disallowTypeAnnotations: false }],
+      '@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_', varsIgnorePattern: '^_' }],
+    },
+  },
+  {
+    files: ['shared/chemistry/**/*.ts', 'shared/marking/**/*.ts'],
+    ignores: ['**/*.test.ts', 'shared/chemistry/data/generate.ts'],
+    rules: {
+      // Typed answers never pass through binary floats.
+      'no-restricted-globals': ['error', { name: 'parseFloat', message: 'Read typed text with the grammar of shared/marking.' }],
+    },
+  },
+  {
+    files: ['shared/**/*.{ts,tsx}', 'app/**/*.tsx'],
+    rules: {
+      'no-restricted-imports': [
+        'error',
+        { patterns: [{ group: ['@react-navigation/*'], message: 'expo-router has its own entry points.' }] },
+      ],
+    },
+  },
+);

@@ -1,0 +1,69 @@
+import { randomBytes } from 'node:crypto';
+import { existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { join, resolve } from 'node:path';
+import { z } from 'zod';
+
+const environment = z.object({
+  NODE_ENV: z.enum(['development', 'production', 'test']).default('production'),
+  PORT: z.coerce.number().int().min(0).max(65535).default(8080),
+  HOST: z.string().min(1).default('127.0.0.1'),
+  DATA_DIR: z.string().min(1).default('uploads'),
+  WEB_DIR: z.string().min(1).default('dist'),
+  SESSION_SECRET: z.string().min(32).optional(),
+  SESSION_HOURS: z.coerce.number().positive().max(168).default(12),
+  PUBLIC_ORIGIN: z.url().optional(),
+  COOKIE_SECURE: z.enum(['true', 'false']).default('false'),
+  LOG_LEVEL: z.enum(['silent', 'error', 'warn', 'info', 'debug']).default('warn'),
+  DEMO: z.enum(['true', 'false']).default('true'),
+  SIGN_IN_TRIES: z.coerce.number().int().min(1).default(5),
+});
+
+export interface Config {
+  readonly mode: 'development' | 'production' | 'test';
+  readonly port: number;
+  readonly host: string;
+  readonly dataDir: string;
+  readonly webDir: string;
+  readonly sessionSecret: string;
+  readonly sessionMs: number;
+  readonly publicOrigin: string | null;
+  readonly cookieSecure: boolean;
+  readonly logLevel: string;
+  readonly demo: boolean;
+  /** Refused sign-ins a quarter of an hour before the next waits. */
+  readonly signInTries: number;
+}
+
+/** A secret of this installation, made in the data folder on first start. */
+function installationSecret(dataDir: string): string {
+  const file = join(dataDir, 'session-secret');
+  if (!existsSync(file)) writeFileSync(file, randomBytes(48).toString('base64url'), { mode: 0o600 });
+  return readFileSync(file, 'utf8');
+}
+
+/** Checks the environment, the only reader of it. Throws one sentence for each variable that is wrong. */
+export function readConfig(variables: NodeJS.ProcessEnv = process.env): Config {
+  const filled = Object.fromEntries(Object.entries(variables).filter(([, value]) => value !== ''));
+  const parsed = environment.safeParse(filled);
+  if (!parsed.success) {
+    const lines = parsed.error.issues.map((issue) => `  ${issue.path.join('.')}: ${issue.message}`);
+    throw new Error(`The environment is not usable:\n${lines.join('\n')}\nEvery variable is described in .env.example.`);
+  }
+  const env = parsed.data;
+  const dataDir = resolve(env.DATA_DIR);
+  mkdirSync(dataDir, { recursive: true });
+  return {
+    mode: env.NODE_ENV,
+    port: env.PORT,
+    host: env.HOST,
+    dataDir,
+    webDir: resolve(env.WEB_DIR),
+    sessionSecret: env.SESSION_SECRET ?? installationSecret(dataDir),
+    sessionMs: env.SESSION_HOURS * 3_600_000,
+    publicOrigin: env.PUBLIC_ORIGIN ?? null,
+    cookieSecure: env.COOKIE_SECURE === 'true',
+    logLevel: env.LOG_LEVEL,
+    demo: env.DEMO === 'true',
+    signInTries: env.SIGN_IN_TRIES,
+  };
+}

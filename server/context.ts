@@ -1,0 +1,22 @@
+import type { Logger } from 'pino';
+import type { Database } from '../db/client';
+import type { Config } from './config/config';
+import type { Jobs } from './jobs/jobs';
+import type { Storage } from './storage/storage';
+
+export interface Clock {
+  /** UTC milliseconds. */
+  now(): number;
+}
+
+/** The one object handed around. */
+export interface Context {
+  readonly config: Config;
+  readonly db: Database;
+  readonly storage: Storage;
+  readonly jobs: Jobs;
+  readonly clock: Clock;
+  readonly log: Logger;
+}
+
+export const systemClock: Clock = { now: () => Date.now() };

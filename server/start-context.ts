@@ -1,0 +1,32 @@
+import { mkdirSync } from 'node:fs';
+import { join } from 'node:path';
+import { pino } from 'pino';
+import { openDatabase } from '../db/client';
+import { migrateDatabase } from '../db/migrate';
+import type { Config } from './config/config';
+import { systemClock, type Clock, type Context } from './context';
+import { createSqliteJobs } from './jobs/sqlite-jobs';
+import { createLocalStorage } from './storage/local-storage';
+
+interface Started {
+  readonly context: Context;
+  close(): Promise<void>;
+}
+
+/** Opens and migrates the database in the data folder and builds the context on it. */
+export function startContext(config: Config, clock: Clock = systemClock): Started {
+  mkdirSync(config.dataDir, { recursive: true });
+  const log = pino({ level: config.logLevel });
+  const db = openDatabase(join(config.dataDir, 'meniscus.sqlite'));
+  migrateDatabase(db);
+  const storage = createLocalStorage(join(config.dataDir, 'blobs'));
+  const jobs = createSqliteJobs({ db, clock, log, lanes: 2 });
+  const context: Context = { config, db, storage, jobs, clock, log };
+  return {
+    context,
+    close: async () => {
+      await jobs.stop();
+      db.$client.close();
+    },
+  };
+}

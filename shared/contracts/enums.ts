@@ -1,0 +1,73 @@
+/** Closed lists of words that the database, the interface and the screens share. */
+
+export const membershipRoles = ['lead', 'reader', 'external'] as const;
+export type MembershipRole = (typeof membershipRoles)[number];
+
+export const sittingStatuses = ['draft', 'moderated', 'provisional', 'released'] as const;
+export const deskModes = ['covered'] as const;
+export const secondPolicies = ['none', 'all'] as const;
+export type SecondPolicy = (typeof secondPolicies)[number];
+export const totalRoundings = ['none', 'half', 'whole'] as const;
+export type TotalRounding = (typeof totalRoundings)[number];
+export const attendances = ['expected', 'present', 'absent', 'withdrawn', 'deferred', 'late'] as const;
+export type Attendance = (typeof attendances)[number];
+
+export const boxUses = ['answer', 'working', 'number'] as const;
+export const scriptOrigins = ['printed', 'spare', 'unprinted', 'by-hand'] as const;
+
+export const batchStates = ['open', 'done', 'cancelled'] as const;
+/** sending: parts still to come; received: whole and waiting for work; done, refused and duplicate are ends. */
+export const uploadStates = ['sending', 'received', 'done', 'refused', 'duplicate', 'cancelled'] as const;
+export const pageImageStates = ['waiting', 'placed', 'loose', 'refused', 'discarded'] as const;
+export const evidenceKinds = ['none', 'in', 'doubtful'] as const;
+export const jobStates = ['waiting', 'running', 'done', 'dead', 'cancelled'] as const;
+
+export const answerStates = [
+  'not-read',
+  'one-reading',
+  'concordant',
+  'discordant',
+  'cannot-read',
+  'blank',
+  'set-aside',
+  'ruled',
+] as const;
+export type AnswerState = (typeof answerStates)[number];
+
+export const leasePurposes = ['live'] as const;
+export const readingPurposes = ['live', 'third'] as const;
+export const readingEndings = ['taken-back', 'reopened', 'surplus'] as const;
+export const rulingKinds = ['value', 'code', 'mark'] as const;
+export type RulingKind = (typeof rulingKinds)[number];
+export const scoreCauses = ['settled', 'ruled', 'amended', 'taken-back'] as const;
+
+export const auditActs = [
+  'signed-in',
+  'sign-in-refused',
+  'signed-out',
+  'signed-out-everywhere',
+  'sitting-made',
+  'sitting-changed',
+  'item-made',
+  'item-changed',
+  'item-removed',
+  'items-ordered',
+  'paper-locked',
+  'class-list-imported',
+  'attendance-changed',
+  'layout-changed',
+  'batch-made',
+  'batch-cancelled',
+  'file-received',
+  'file-refused',
+  'page-placed',
+  'page-turned',
+  'page-discarded',
+  'reading-recorded',
+  'reading-taken-back',
+  'third-reading-recorded',
+  'ruled',
+  'ruling-taken-back',
+  'marks-exported',
+] as const;
+export type AuditAct = (typeof auditActs)[number];
