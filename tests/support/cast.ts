@@ -1,0 +1,1 @@
+export { cast, castPassword, type CastName } from '../../db/seed/cast';
