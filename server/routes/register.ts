@@ -1,6 +1,7 @@
 import type { Router } from 'express';
 import type { AppPassport } from '../auth/passport';
 import type { Context } from '../context';
+import { deskRoutes } from './desk';
 import { serviceRoutes } from './service';
 import { sessionRoutes } from './session';
 
@@ -8,4 +9,5 @@ import { sessionRoutes } from './session';
 export function registerRoutes(router: Router, context: Context, passport: AppPassport): void {
   serviceRoutes(router, context);
   sessionRoutes(router, context, passport);
+  deskRoutes(router, context);
 }

@@ -1,3 +1,4 @@
+import { deskRoutes } from './desk';
 import type { RouteContract } from './route';
 import { serviceRoutes } from './service';
 import { sessionRoutes } from './session';
@@ -6,4 +7,5 @@ import { sessionRoutes } from './session';
 export const allRoutes: Readonly<Record<string, RouteContract>> = {
   ...serviceRoutes,
   ...sessionRoutes,
+  ...deskRoutes,
 };

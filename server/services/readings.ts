@@ -1,0 +1,117 @@
+import { inTransaction } from '../../db/client';
+import { endLeaseAt, endReading, findLease, findReading, hasOpenLease, insertReading, ownLiveReading, readingTarget } from '../../db/queries/desk';
+import { liveReadings, standingRuling } from '../../db/queries/settling';
+import { toFractionText } from '../../shared/chemistry/exact';
+import type { DeskLease, SentReading } from '../../shared/contracts/desk';
+import { codeCanonical } from '../../shared/marking/canonical';
+import { grammarVersion, readAnswer } from '../../shared/marking/read-answer';
+import type { Code } from '../../shared/marking/scheme';
+import { requireCourseRole, type Actor, type CourseAccess } from '../auth/access';
+import type { Context } from '../context';
+import { conflict, invalidRequest, notFound } from '../errors';
+import { recordAct } from './audit';
+import { describeLeases, giveLease } from './desk';
+import { settleAnswers } from './settle';
+import { schemeInForce } from './verdicts';
+
+const readerRoles = ['reader', 'lead'] as const;
+
+type Target = NonNullable<ReturnType<typeof readingTarget>>;
+
+export interface Understood {
+  readonly text: string | null;
+  readonly code: Code | null;
+  readonly canonical: string;
+  readonly value: string | null;
+}
+
+/** A typed text or a code as it is stored; a text that the grammar refuses is named with its place. */
+export function understand(given: { text?: string | undefined; code?: Code | undefined }, units: readonly string[]): Understood {
+  if (given.code !== undefined) return { text: null, code: given.code, canonical: codeCanonical(given.code), value: null };
+  const text = given.text ?? '';
+  const read = readAnswer(text, units);
+  if (!read.ok) {
+    const message = 'message' in read ? read.message : 'This is not yet a value.';
+    throw invalidRequest(message, { text: message });
+  }
+  return { text, code: null, canonical: read.canonical, value: toFractionText(read.value) };
+}
+
+function requireTarget(context: Context, actor: Actor, answerId: string): { target: Target; access: CourseAccess } {
+  const target = readingTarget(context.db, answerId);
+  if (!target) throw notFound();
+  return { target, access: requireCourseRole(context, actor, target.course, readerRoles) };
+}
+
+/** A repeat of a reading that is already here is fine; another reading under the same id is not. */
+function isRepeat(context: Context, actor: Actor, id: string, sent: SentReading): boolean {
+  const known = findReading(context.db, id);
+  if (!known) return false;
+  if (known.reader !== actor.personId) throw notFound();
+  const same = known.answer === sent.answerId && known.text === (sent.text ?? null) && known.code === (sent.code ?? null);
+  if (!same) throw conflict('Another reading was stored under this id. Yours was not stored.', { text: known.text, code: known.code });
+  return true;
+}
+
+/** A reading counts for the pair unless the pair is full and it says the same, or a ruling stands. */
+function isSurplus(context: Context, target: Target, canonical: string): boolean {
+  if (standingRuling(context.db, target.answer)) return true;
+  const others = liveReadings(context.db, target.answer);
+  const wanted = target.secondPolicy === 'all' ? 2 : 1;
+  return others.length >= wanted && others.every((other) => other.canonical === canonical);
+}
+
+/** Records one reading and settles its answer; on disk when this returns. A late one, its lease run out, is kept too. */
+export function recordReading(context: Context, actor: Actor, id: string, sent: SentReading): void {
+  const { db, clock } = context;
+  const { target, access } = requireTarget(context, actor, sent.answerId);
+  const lease = findLease(db, sent.leaseId);
+  if (!lease || lease.reader !== actor.personId || lease.answer !== sent.answerId) throw notFound();
+  if (target.schemeVersion === null) throw conflict('The paper is still open to change.');
+  const scheme = schemeInForce(db, target.schemeVersion, target.item);
+  const understood = understand(sent, scheme.body.units);
+  inTransaction(db, () => {
+    if (isRepeat(context, actor, id, sent)) return;
+    const own = ownLiveReading(db, sent.answerId, actor.personId);
+    if (own) {
+      const stored = findReading(db, own.id);
+      throw conflict('You have read this answer already. This reading was not stored.', { text: stored?.text ?? null, code: stored?.code ?? null });
+    }
+    const at = clock.now();
+    const surplus = isSurplus(context, target, understood.canonical);
+    insertReading(db, {
+      id,
+      answer: sent.answerId,
+      reader: actor.personId,
+      purpose: 'live',
+      ...understood,
+      note: sent.note ?? null,
+      knewKey: access.roles.has('lead'),
+      lease: lease.id,
+      openedAt: sent.openedAt,
+      recordedAt: at,
+      grammar: grammarVersion,
+    });
+    if (lease.endedAt === null) endLeaseAt(db, lease.id, at);
+    if (surplus) endReading(db, { reading: id, why: 'surplus', by: actor.personId, at });
+    recordAct(context, { actor: actor.personId, act: 'reading-recorded', sitting: target.sitting, subject: sent.answerId, after: { reading: id } });
+    settleAnswers(context, [sent.answerId]);
+  });
+}
+
+/** Ends an own reading and gives its answer back to the reader, unless another reader holds it by now. */
+export function takeBackReading(context: Context, actor: Actor, id: string): DeskLease | null {
+  const { db, clock } = context;
+  const reading = findReading(db, id);
+  if (!reading || reading.reader !== actor.personId || reading.purpose !== 'live') throw notFound();
+  const { target } = requireTarget(context, actor, reading.answer);
+  return inTransaction(db, () => {
+    if (ownLiveReading(db, reading.answer, actor.personId)?.id !== id) throw conflict('This reading was taken back already, or no longer counts.');
+    if (standingRuling(db, reading.answer)) throw conflict('A lead has ruled on this answer. It can no longer be taken back here.');
+    endReading(db, { reading: id, why: 'taken-back', by: actor.personId, at: clock.now() });
+    recordAct(context, { actor: actor.personId, act: 'reading-taken-back', sitting: target.sitting, subject: reading.answer, before: { reading: id } });
+    settleAnswers(context, [reading.answer]);
+    if (hasOpenLease(db, reading.answer)) return null;
+    return describeLeases(db, [giveLease(context, reading.answer, actor.personId)])[0] ?? null;
+  });
+}
