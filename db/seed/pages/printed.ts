@@ -2,12 +2,12 @@ import { outline, pathData } from './outlines';
 import type { PrintFont } from './outlines';
 import {
   FRAME_MM,
-  ITEMS_PER_PAGE,
   LEFT_MM,
   PAGE_HEIGHT_MM,
   PAGE_WIDTH_MM,
   RIGHT_MM,
   CORNER_MM,
+  pageCount,
   pageOfItem,
   placeOfItem,
 } from './sheet-layout';
@@ -126,7 +126,7 @@ export function printedPage(sheet: PrintedSheet, pageNo: number): string {
   const known = pages.get(pageNo);
   if (known) return known;
   const items = sheet.items.filter((item) => pageOfItem(item.number) === pageNo);
-  const pageCount = Math.ceil(sheet.items.length / ITEMS_PER_PAGE);
+  const count = pageCount(sheet.items.length);
   const left = CORNER_MM + 3;
   const right = PAGE_WIDTH_MM - CORNER_MM - 3;
   const foot = PAGE_HEIGHT_MM - 17;
@@ -136,13 +136,13 @@ export function printedPage(sheet: PrintedSheet, pageNo: number): string {
   const words = [
     text(sheet.title, { x: left, baseline: 14, sizeMm: 4.1 }, 'semibold'),
     ...sheet.lines.map((line, index) => text(line, { x: left, baseline: 18.6 + index * 4, sizeMm: 3 })),
-    text(`page ${pageNo} of ${pageCount}`, { x: right, baseline: 18.6, sizeMm: 3, align: 'right' }),
+    text(`page ${pageNo} of ${count}`, { x: right, baseline: 18.6, sizeMm: 3, align: 'right' }),
     text('One answer a box, in pen or soft pencil.', { x: 105, baseline: 37.4, sizeMm: 3 }),
     text('To change it, cross it out and write again in the box.', { x: 105, baseline: 41.6, sizeMm: 3 }),
     text('Candidate', { x: LEFT_MM, baseline: 33.4, sizeMm: 3 }),
     text(over, { x: left, baseline: foot, sizeMm: 2.9 }),
     text('Nothing outside the boxes is read as an answer.', { x: left, baseline: foot + 4.2, sizeMm: 2.9 }),
-    text(`page ${pageNo} of ${pageCount}`, { x: right, baseline: foot + 4.2, sizeMm: 2.9, align: 'right' }),
+    text(`page ${pageNo} of ${count}`, { x: right, baseline: foot + 4.2, sizeMm: 2.9, align: 'right' }),
   ];
   const made = inked(words) + items.map((item) => inked(itemText(item))).join('') + itemLines(items);
   pages.set(pageNo, made);

@@ -41,6 +41,8 @@ export interface ItemPlace {
   readonly working: SheetBox;
 }
 
+export const pageCount = (itemCount: number): number => Math.ceil(itemCount / ITEMS_PER_PAGE);
+
 export const pageOfItem = (itemNumber: number): number => Math.ceil(itemNumber / ITEMS_PER_PAGE);
 
 export function placeOfItem(itemNumber: number): ItemPlace {
