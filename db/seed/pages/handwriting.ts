@@ -186,14 +186,14 @@ const start = (x: number, y: number): Piece => ({ letter: 'M', points: [{ x, y }
 /** Figures that could be either of two, as pen lines one digit high: x to the right, y downwards from the baseline. */
 const betweenShapes: Readonly<Record<string, readonly Piece[]>> = {
   // A 1 with a long flag, or a narrow 7.
-  '{1/7}': [start(0.03, -0.83), curve(0.14, -0.88, 0.3, -0.93, 0.46, -0.97), curve(0.42, -0.66, 0.34, -0.33, 0.26, 0.01)],
+  '{1/7}': [start(0.08, -0.8), curve(0.17, -0.86, 0.31, -0.92, 0.45, -0.97), curve(0.41, -0.66, 0.34, -0.33, 0.26, 0.01)],
   // A 4 that closes at the top, or a 9 with a pointed bowl.
   '{4/9}': [
-    start(0.47, -0.92),
-    curve(0.32, -0.86, 0.11, -0.64, 0.09, -0.48),
-    curve(0.11, -0.36, 0.33, -0.4, 0.48, -0.5),
-    start(0.49, -0.96),
-    curve(0.49, -0.62, 0.46, -0.3, 0.4, 0.03),
+    start(0.41, -0.97),
+    curve(0.27, -0.8, 0.11, -0.6, 0.08, -0.45),
+    curve(0.14, -0.37, 0.34, -0.38, 0.5, -0.45),
+    start(0.51, -0.88),
+    curve(0.5, -0.6, 0.46, -0.3, 0.41, 0.03),
   ],
 };
 
