@@ -17,7 +17,7 @@ const sheet: PrintedSheet = {
   items: Array.from({ length: 12 }, (_, index) => ({
     number: index + 1,
     marks: 2,
-    prompt: "By Slater's rules, find Z_eff for a 2p electron of the Mg^2+ ion, to two decimals.",
+    prompt: "By Slater's rules, find Z_eff for a 2p electron of the Mg²⁺ ion, to two decimals.",
   })),
 };
 
@@ -147,7 +147,7 @@ describe('the page as printed', () => {
   });
 
   it('sets quantities, subshells and charges as a printer would', () => {
-    const runs = promptRuns('Find Z_eff for a 2p electron of Mg^2+.');
+    const runs = promptRuns('Find Z_eff for a 2p electron of Mg²⁺.');
     expect(runs.map((run) => run.text)).toEqual(['Find ', 'Z', 'eff', ' for a ', '2', 'p', ' electron of Mg', '2+', '.']);
     expect(runs.filter((run) => run.font === 'serif-italic').map((run) => run.text)).toEqual(['Z', 'p']);
     expect(runs[7]?.rise).toBeGreaterThan(0);

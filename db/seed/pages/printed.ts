@@ -15,7 +15,7 @@ import {
 export interface PrintedItem {
   readonly number: number;
   readonly marks: number;
-  /** Plain text; `Z_eff`, `3p`, sigma and charges such as `Mg^2+` are set as a printer would. */
+  /** Plain text; `Z_eff`, `3p`, sigma and raised charges such as `Mg²⁺` are set as a printer would. */
   readonly prompt: string;
 }
 
@@ -44,12 +44,12 @@ const plain = (text: string, font: PrintFont = 'regular'): Run => ({ text, font,
 export function promptRuns(prompt: string): readonly Run[] {
   const runs: Run[] = [];
   let from = 0;
-  for (const found of prompt.matchAll(/Z_eff|σ|\b([1-7])([spdf])\b|\^(\d*[+-])/g)) {
+  for (const found of prompt.matchAll(/Z_eff|σ|\b([1-7])([spdf])\b|([⁰¹²³⁴-⁹]*[⁺⁻])/g)) {
     if (found.index > from) runs.push(plain(prompt.slice(from, found.index)));
     const [whole, shell, subshell, charge] = found;
     if (whole === 'Z_eff') runs.push(plain('Z', 'serif-italic'), { text: 'eff', font: 'regular', scale: 0.7, rise: -0.16 });
     else if (shell && subshell) runs.push(plain(shell), plain(subshell, 'serif-italic'));
-    else if (charge) runs.push({ text: charge.replace('-', '−'), font: 'regular', scale: 0.66, rise: 0.36 });
+    else if (charge) runs.push({ text: lowered(charge), font: 'regular', scale: 0.66, rise: 0.36 });
     else runs.push(plain(whole, 'serif-italic'));
     from = found.index + whole.length;
   }
@@ -68,6 +68,12 @@ const inked = (prints: readonly Print[]): string =>
   [...new Set(prints.map(({ ink }) => ink))]
     .map((ink) => `<path transform="scale(.01)" fill="${ink}" d="${prints.map((print) => (print.ink === ink ? print.data : '')).join('')}"/>`)
     .join('');
+
+const raisedFigures = '⁰¹²³⁴⁵⁶⁷⁸⁹';
+
+/** Raised figures as plain ones, to be set smaller and higher: few fonts draw them all alike. */
+const lowered = (charge: string): string =>
+  [...charge].map((mark) => (mark === '⁺' ? '+' : mark === '⁻' ? '−' : String(raisedFigures.indexOf(mark)))).join('');
 
 interface Setting {
   readonly x: number;
