@@ -146,6 +146,21 @@ export const insertVerdict = (db: Database, row: typeof verdict.$inferInsert): v
 
 export const findScore = (db: Database, id: string): ScoreRow | undefined => statements(db).score.get({ id });
 
+export type ScoreSource = Pick<ScoreRow, 'answer' | 'schemeVersion' | 'reading' | 'ruling' | 'verdict' | 'grains'>;
+
+/** Same source, same version, same mark: then one row serves. */
+export const isSameScore = (one: ScoreSource, other: ScoreSource): boolean =>
+  one.answer === other.answer &&
+  one.schemeVersion === other.schemeVersion &&
+  one.reading === other.reading &&
+  one.ruling === other.ruling &&
+  one.verdict === other.verdict &&
+  one.grains === other.grains;
+
+/** The oldest score of the answer that is the same. */
+export const findEqualScore = (db: Database, like: ScoreSource): ScoreRow | undefined =>
+  db.select().from(score).where(eq(score.answer, like.answer)).orderBy(asc(score.at), asc(score.id)).all().find((row) => isSameScore(row, like));
+
 export const insertScore = (db: Database, row: ScoreRow): void => void statements(db).insertScore.run({ ...row });
 
 export interface DerivedState {

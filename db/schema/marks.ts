@@ -53,6 +53,8 @@ export const ruling = sqliteTable(
     value: text(),
     grains: integer(),
     reason: text(),
+    /** The ruling this one took the place of; taking this one back puts that one in force again. */
+    replaces: text(),
     by: text().notNull().references(() => person.id),
     at: instant().notNull(),
   },

@@ -1,6 +1,9 @@
 import { index, integer, primaryKey, sqliteTable, text } from 'drizzle-orm/sqlite-core';
-import { auditActs } from '../../shared/contracts/enums';
-import { instant } from './columns';
+import { auditActs, exportKinds } from '../../shared/contracts/enums';
+import { id, instant } from './columns';
+import { person } from './people';
+import { blob } from './scans';
+import { sitting } from './sittings';
 
 /** Append-only. Written in the transaction of the act; ids, never names; each entry hashed with the one before. */
 export const auditEntry = sqliteTable(
@@ -34,4 +37,21 @@ export const idempotency = sqliteTable(
     at: instant().notNull(),
   },
   (table) => [primaryKey({ columns: [table.person, table.key] }), index('idempotency_by_age').on(table.at)],
+);
+
+/** A file made of the marks as they stood; its bytes are a blob. */
+export const exportFile = sqliteTable(
+  'export_file',
+  {
+    id: id(),
+    sitting: text().notNull().references(() => sitting.id),
+    kind: text({ enum: exportKinds }).notNull(),
+    fileName: text().notNull(),
+    blob: text().notNull().references(() => blob.sha256),
+    /** The number of change of the sitting that the file shows. */
+    asOf: integer().notNull(),
+    by: text().notNull().references(() => person.id),
+    at: instant().notNull(),
+  },
+  (table) => [index('export_by_sitting').on(table.sitting)],
 );

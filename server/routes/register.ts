@@ -2,6 +2,7 @@ import type { Router } from 'express';
 import type { AppPassport } from '../auth/passport';
 import type { Context } from '../context';
 import { deskRoutes } from './desk';
+import { ledgerRoutes } from './ledger';
 import { serviceRoutes } from './service';
 import { sessionRoutes } from './session';
 
@@ -10,4 +11,5 @@ export function registerRoutes(router: Router, context: Context, passport: AppPa
   serviceRoutes(router, context);
   sessionRoutes(router, context, passport);
   deskRoutes(router, context);
+  ledgerRoutes(router, context);
 }

@@ -2,7 +2,9 @@ import { v7 as uuidv7 } from 'uuid';
 import type { Database } from '../../db/client';
 import { findSitting } from '../../db/queries/sittings';
 import {
+  findEqualScore,
   findScore,
+  isSameScore,
   insertScore,
   liveReadings,
   saveDerivedState,
@@ -56,20 +58,16 @@ function standingMark(db: Database, scheme: SchemeInForce, settled: Settlement, 
   return { reading: ruling ? null : source.id, ruling: ruling?.id ?? null, verdict: verdict.id, grains: verdict.grains };
 }
 
-/** Keeps the score that stands when nothing of it changed; else appends a new one. */
+/** Keeps the score that stands when nothing of it changed; a take-back points to the earlier row; else a new one is appended. */
 function scoreFor({ db, clock }: Pick<Context, 'db' | 'clock'>, facts: Facts, version: string, standing: Standing | null, cause: Cause): string | null {
   if (!standing) return null;
+  const wanted = { answer: facts.id, schemeVersion: version, ...standing };
   const known = facts.score === null ? undefined : findScore(db, facts.score);
-  const same =
-    known !== undefined &&
-    known.schemeVersion === version &&
-    known.reading === standing.reading &&
-    known.ruling === standing.ruling &&
-    known.verdict === standing.verdict &&
-    known.grains === standing.grains;
-  if (same) return known.id;
+  if (known && isSameScore(known, wanted)) return known.id;
+  const earlier = cause === 'taken-back' ? findEqualScore(db, wanted) : undefined;
+  if (earlier) return earlier.id;
   const id = uuidv7();
-  insertScore(db, { id, answer: facts.id, schemeVersion: version, ...standing, cause, at: clock.now() });
+  insertScore(db, { id, ...wanted, cause, at: clock.now() });
   return id;
 }
 

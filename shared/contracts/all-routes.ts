@@ -1,4 +1,5 @@
 import { deskRoutes } from './desk';
+import { ledgerRoutes } from './ledger';
 import type { RouteContract } from './route';
 import { serviceRoutes } from './service';
 import { sessionRoutes } from './session';
@@ -8,4 +9,5 @@ export const allRoutes: Readonly<Record<string, RouteContract>> = {
   ...serviceRoutes,
   ...sessionRoutes,
   ...deskRoutes,
+  ...ledgerRoutes,
 };

@@ -41,6 +41,8 @@ export const rulingKinds = ['value', 'code', 'mark'] as const;
 export type RulingKind = (typeof rulingKinds)[number];
 export const scoreCauses = ['settled', 'ruled', 'amended', 'taken-back'] as const;
 
+export const exportKinds = ['marks-csv'] as const;
+
 export const auditActs = [
   'signed-in',
   'sign-in-refused',

@@ -1,0 +1,133 @@
+import {
+  answerHead,
+  cropsOfAnswer,
+  pageOfAnswer,
+  readersOfSitting,
+  scoreWithVerdict,
+  thirdReadingOf,
+} from '../../db/queries/answers';
+import { readingsOfAnswers, uncoveredBy } from '../../db/queries/ledger';
+import { standingRuling } from '../../db/queries/settling';
+import { absolute, exactDecimals, fromFractionText, subtract, toDecimals } from '../../shared/chemistry/exact';
+import { work } from '../../shared/chemistry/work';
+import type { AnswerView } from '../../shared/contracts/ledger';
+import { reasonInWords } from '../../shared/marking/reasons';
+import { scaleOf } from '../../shared/marking/scale';
+import type { GuardRole } from '../../shared/contracts/route';
+import type { Actor } from '../auth/access';
+import type { Context } from '../context';
+import { notFound } from '../errors';
+import { isCovered, shownGiven } from './covers';
+import { requireSitting, type SittingAccess } from './sitting-access';
+import { schemeInForce, verdictFor, type SchemeInForce } from './verdicts';
+
+export type AnswerHead = NonNullable<ReturnType<typeof answerHead>>;
+
+export interface AnswerAccess extends SittingAccess {
+  readonly head: AnswerHead;
+  readonly scheme: SchemeInForce;
+}
+
+/** The answer with the scheme in force, for an actor with one of the roles in its course. */
+export function requireAnswer(context: Context, actor: Actor, answerId: string, roles: readonly GuardRole[]): AnswerAccess {
+  const head = answerHead(context.db, answerId);
+  if (!head) throw notFound();
+  const { sitting, access } = requireSitting(context, actor, head.sitting, roles);
+  if (sitting.schemeVersion === null) throw notFound();
+  return { sitting, access, head, scheme: schemeInForce(context.db, sitting.schemeVersion, head.item) };
+}
+
+/** Readers by number, steady within the sitting; a lead's names are for the people pages. */
+export function pseudonyms(context: Pick<Context, 'db'>, sittingId: string): (personId: string) => string {
+  const numbers = new Map(readersOfSitting(context.db, sittingId).map((id, index) => [id, index + 1]));
+  return (personId) => (numbers.has(personId) ? `reader ${numbers.get(personId)}` : 'lead');
+}
+
+type Reading = ReturnType<typeof readingsOfAnswers>[number];
+
+/** The distance between the two values furthest apart, exact where a short decimal says it. */
+function gapOf(readings: readonly Reading[]): string | null {
+  const values = readings.flatMap(({ value }) => (value === null ? [] : [fromFractionText(value)]));
+  const [first, second] = [values[0], values.find((value) => values[0] && subtract(value, values[0]).n !== 0n)];
+  if (!first || !second) return null;
+  const gap = absolute(subtract(first, second));
+  return toDecimals(gap, Math.max(2, Math.min(6, exactDecimals(gap) ?? 6)));
+}
+
+function rulingView(context: Context, actor: Actor, answerId: string): AnswerView['ruling'] {
+  const ruling = standingRuling(context.db, answerId);
+  if (!ruling) return null;
+  const { id, kind, text, code, grains, reason, at } = ruling;
+  return { id, kind, text, code, grains, reason, isOwn: ruling.by === actor.personId, at };
+}
+
+function scoreView(context: Context, head: AnswerHead): AnswerView['score'] {
+  const found = head.score === null ? undefined : scoreWithVerdict(context.db, head.score);
+  if (!found) return null;
+  const why = found.rule && found.numbers ? reasonInWords({ grains: found.grains, rule: found.rule, numbers: found.numbers }) : { head: 'ruled by hand', detail: 'A mark given by a person, not by a rule.' };
+  return { grains: found.grains, why, schemeOrdinal: found.ordinal };
+}
+
+function mineView(context: Context, actor: Actor, { head, scheme }: AnswerAccess): AnswerView['mine'] {
+  const third = thirdReadingOf(context.db, head.id, actor.personId);
+  if (!third) return null;
+  const verdict = verdictFor(context.db, scheme, third.canonical, third.code === null ? { text: third.text ?? '' } : { code: third.code });
+  return { id: third.id, text: third.text, code: third.code, grains: verdict.grains };
+}
+
+/** Why this person may not settle the answer: who read it cannot. */
+export function cannotSettle(actor: Actor, isLead: boolean, readings: readonly Reading[]): string | null {
+  if (!isLead) return 'Only a lead can rule.';
+  return readings.some((reading) => reading.reader === actor.personId) ? 'You read this answer yourself. Another lead has to settle it.' : null;
+}
+
+/** One answer whole, as this person may see it. */
+export function answerView(context: Context, actor: Actor, answerId: string): AnswerView {
+  const { db } = context;
+  const found = requireAnswer(context, actor, answerId, ['lead', 'external']);
+  const { head, scheme, access } = found;
+  const readings = readingsOfAnswers(db, [answerId]);
+  const mine = mineView(context, actor, found);
+  const third = mine ? thirdReadingOf(db, answerId, actor.personId) : undefined;
+  const covered = isCovered(head.state, head.readingsDue, uncoveredBy(db, actor.personId, [answerId]).has(answerId));
+  const crops = cropsOfAnswer(db, answerId);
+  const nameOf = pseudonyms(context, head.sitting);
+  const worked = work(scheme.body.asked);
+  const answerCrop = crops.find((crop) => crop.use === 'answer') ?? crops[0];
+  return {
+    answerId,
+    sittingId: head.sitting,
+    candidateNumber: head.candidateNumber ?? '',
+    itemId: head.item,
+    itemNumber: head.itemNumber,
+    label: `${scheme.body.asked.symbol} ${scheme.body.asked.electron}`,
+    prompt: head.prompt,
+    units: [...scheme.body.units],
+    maxGrains: head.maxGrains,
+    state: head.state,
+    isCovered: covered,
+    cannotSettle: cannotSettle(actor, access.roles.has('lead'), readings),
+    crops: crops.flatMap(({ box, use, widthPx, heightPx }) => (use === 'number' ? [] : [{ box, use, widthPx, heightPx }])),
+    pageImageId: answerCrop ? (pageOfAnswer(db, head.script, answerCrop.pageNo)?.image ?? null) : null,
+    pageNo: answerCrop?.pageNo ?? null,
+    readings: readings.map((reading) => ({
+      id: reading.id,
+      reader: nameOf(reading.reader),
+      given: shownGiven(reading, head.state, covered),
+      note: covered ? null : reading.note,
+      recordedAt: reading.recordedAt,
+      isAsMine: covered || !third ? null : third.canonical === reading.canonical,
+    })),
+    mine,
+    gap: covered ? null : gapOf(readings),
+    ruling: rulingView(context, actor, answerId),
+    score: scoreView(context, head),
+    scheme: {
+      key: scheme.body.key.text,
+      convention: scheme.body.asked.convention,
+      scale: scaleOf(scheme.body),
+      derivation: worked.ok ? worked.value.derivation : null,
+    },
+    rev: head.rev,
+  };
+}

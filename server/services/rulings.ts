@@ -1,0 +1,149 @@
+import { v7 as uuidv7 } from 'uuid';
+import { inTransaction } from '../../db/client';
+import { endRuling, insertRuling, insertUncovered, rulingById } from '../../db/queries/answers';
+import { findReading, insertReading } from '../../db/queries/desk';
+import { readingsOfAnswers, uncoveredBy } from '../../db/queries/ledger';
+import { standingRuling, type RulingRow } from '../../db/queries/settling';
+import { whole, multiply } from '../../shared/chemistry/exact';
+import type { AnswerView, RulingBody } from '../../shared/contracts/ledger';
+import { GRAINS_PER_MARK } from '../../shared/marking/grains';
+import { grammarVersion, readAnswer } from '../../shared/marking/read-answer';
+import type { Code } from '../../shared/marking/scheme';
+import type { Actor } from '../auth/access';
+import type { Context } from '../context';
+import { conflict, invalidRequest, notAllowed, notFound } from '../errors';
+import { answerView, cannotSettle, requireAnswer, type AnswerAccess } from './answers';
+import { recordAct } from './audit';
+import { isCovered } from './covers';
+import { understand } from './readings';
+import { settleAnswers } from './settle';
+import { verdictFor } from './verdicts';
+
+interface TypedThird {
+  readonly text?: string | undefined;
+  readonly code?: Code | undefined;
+  readonly openedAt: number;
+}
+
+function requireSettling(context: Context, actor: Actor, answerId: string): AnswerAccess {
+  const found = requireAnswer(context, actor, answerId, ['lead']);
+  const refusal = cannotSettle(actor, true, readingsOfAnswers(context.db, [answerId]));
+  if (refusal) throw notAllowed(refusal);
+  return found;
+}
+
+/** Stores what the lead reads from the image; from then on the readings are uncovered to that lead. */
+export function recordThirdReading(context: Context, actor: Actor, answerId: string, readingId: string, typed: TypedThird): AnswerView {
+  const { db, clock } = context;
+  const { head, scheme, sitting } = requireSettling(context, actor, answerId);
+  const understood = understand(typed, scheme.body.units);
+  inTransaction(db, () => {
+    const known = findReading(db, readingId);
+    if (known) {
+      const same = known.answer === answerId && known.reader === actor.personId && known.canonical === understood.canonical;
+      if (!same) throw conflict('Another reading was stored under this id. Yours was not stored.');
+      return;
+    }
+    const at = clock.now();
+    insertReading(db, {
+      id: readingId,
+      answer: answerId,
+      reader: actor.personId,
+      purpose: 'third',
+      ...understood,
+      note: null,
+      knewKey: true,
+      lease: null,
+      openedAt: typed.openedAt,
+      recordedAt: at,
+      grammar: grammarVersion,
+    });
+    insertUncovered(db, { answer: answerId, person: actor.personId, thirdReading: readingId, at });
+    recordAct(context, { actor: actor.personId, act: 'third-reading-recorded', sitting: sitting.id, subject: head.id, after: { reading: readingId } });
+  });
+  return answerView(context, actor, answerId);
+}
+
+/** Marks as typed, `1.5` or `1/2`, in grains; refused when they are no whole grains or out of range. */
+function grainsOf(marks: string, maxGrains: number): number {
+  const read = readAnswer(marks, []);
+  if (!read.ok) throw invalidRequest('Marks are a number, such as 1.5.', { marks: 'A number, such as 1.5.' });
+  const grains = multiply(read.value, whole(GRAINS_PER_MARK));
+  if (grains.d !== 1n) throw invalidRequest('This share of a mark cannot be kept exactly.', { marks: 'Halves to sixths, eighths, tenths and hundredths.' });
+  if (grains.n < 0n || grains.n > BigInt(maxGrains)) throw invalidRequest('Marks go from 0 to what the item is worth.', { marks: 'Out of range.' });
+  return Number(grains.n);
+}
+
+type Ruled = Pick<RulingRow, 'kind' | 'text' | 'code' | 'canonical' | 'value' | 'grains'>;
+
+/** What the ruling says, checked against the scheme: a code it leaves to a person cannot be ruled, only a mark. */
+function ruledBy(context: Context, { head, scheme }: AnswerAccess, body: RulingBody): Ruled {
+  if (body.kind === 'mark') return { kind: 'mark', text: null, code: null, canonical: null, value: null, grains: grainsOf(body.marks, head.maxGrains) };
+  const understood = understand(body, scheme.body.units);
+  const given = understood.code === null ? { text: understood.text ?? '' } : { code: understood.code };
+  if (verdictFor(context.db, scheme, understood.canonical, given).grains === null) {
+    throw invalidRequest('The scheme leaves this code to a person. Rule a mark, with a reason.', { code: 'Rule a mark instead.' });
+  }
+  return { kind: body.kind, ...understood, grains: null };
+}
+
+/** A reason is asked for a mark, for a ruling that is neither reading, and for changing what stands. */
+function requireReason(ruled: Ruled, body: RulingBody, readings: ReturnType<typeof readingsOfAnswers>, isHeld: boolean, replaces: boolean): void {
+  if (body.reason !== undefined) return;
+  const isOneOfThem = ruled.canonical !== null && readings.some((reading) => reading.canonical === ruled.canonical);
+  if (isOneOfThem && isHeld && !replaces) return;
+  throw invalidRequest('Say why: this ruling is neither of the readings, or changes a mark that stands.', { reason: 'A reason is needed here.' });
+}
+
+/** Rules on one answer. Someone who has not typed a covered answer cannot; an old rev is a conflict with what is there now. */
+export function ruleAnswer(context: Context, actor: Actor, answerId: string, seenRev: number, body: RulingBody): AnswerView {
+  const { db, clock } = context;
+  inTransaction(db, () => {
+    const found = requireSettling(context, actor, answerId);
+    const { head, sitting } = found;
+    if (sitting.status === 'released') throw conflict('The marks are released. They change by a settled case or an amendment only.');
+    if (head.rev !== seenRev) throw conflict('Someone changed this answer meanwhile. Yours was not stored.', answerView(context, actor, answerId));
+    const hasTyped = uncoveredBy(db, actor.personId, [answerId]).has(answerId);
+    if (isCovered(head.state, head.readingsDue, hasTyped)) throw conflict('Type what the image says first. The readings are uncovered then.');
+    const readings = readingsOfAnswers(db, [answerId]);
+    const before = standingRuling(db, answerId);
+    const ruled = ruledBy(context, found, body);
+    const isHeld = ['discordant', 'cannot-read', 'set-aside'].includes(head.state);
+    requireReason(ruled, body, readings, isHeld, before !== undefined);
+    const at = clock.now();
+    const id = uuidv7();
+    if (before) endRuling(db, { ruling: before.id, why: 'replaced', by: actor.personId, at });
+    insertRuling(db, { id, answer: answerId, thirdReading: null, ...ruled, reason: body.reason ?? null, replaces: before?.id ?? null, by: actor.personId, at });
+    settleAnswers(context, [answerId], 'ruled');
+    recordAct(context, {
+      actor: actor.personId,
+      act: 'ruled',
+      sitting: sitting.id,
+      subject: answerId,
+      ...(before && { before: { ruling: before.id } }),
+      after: { ruling: id, kind: ruled.kind, grains: ruled.grains },
+      ...(body.reason && { reason: body.reason }),
+    });
+  });
+  return answerView(context, actor, answerId);
+}
+
+/** Ends an own ruling; the one it replaced, if any, stands again. */
+export function takeBackRuling(context: Context, actor: Actor, rulingId: string): AnswerView {
+  const { db, clock } = context;
+  const ruling = rulingById(db, rulingId);
+  if (!ruling) throw notFound();
+  const { sitting } = requireAnswer(context, actor, ruling.answer, ['lead']);
+  inTransaction(db, () => {
+    if (standingRuling(db, ruling.answer)?.id !== rulingId) throw conflict('This ruling no longer stands.', answerView(context, actor, ruling.answer));
+    if (ruling.by !== actor.personId) throw notAllowed('Only who ruled can take it back. Rule anew instead, with a reason.');
+    if (sitting.status === 'released') throw conflict('The marks are released. They change by a settled case or an amendment only.');
+    const at = clock.now();
+    endRuling(db, { ruling: rulingId, why: 'taken-back', by: actor.personId, at });
+    const earlier = ruling.replaces === null ? undefined : rulingById(db, ruling.replaces);
+    if (earlier) insertRuling(db, { ...earlier, id: uuidv7(), at });
+    settleAnswers(context, [ruling.answer], 'taken-back');
+    recordAct(context, { actor: actor.personId, act: 'ruling-taken-back', sitting: sitting.id, subject: ruling.answer, before: { ruling: rulingId } });
+  });
+  return answerView(context, actor, ruling.answer);
+}
