@@ -17,9 +17,9 @@ const listen = (app: ReturnType<typeof createApp>, { port, host }: Config): Prom
   });
 
 /** Opens the context, listens, works off jobs; stop() ends all of it cleanly. */
-export async function startServer(config: Config): Promise<RunningServer> {
+export async function startServer(config: Config, handlers: Parameters<typeof createApp>[1] = {}): Promise<RunningServer> {
   const { context, close } = startContext(config);
-  const server = await listen(createApp(context), config);
+  const server = await listen(createApp(context, handlers), config);
   context.jobs.run();
   const { port } = server.address() as AddressInfo;
   return {

@@ -15,6 +15,7 @@ const environment = z.object({
   COOKIE_SECURE: z.enum(['true', 'false']).default('false'),
   LOG_LEVEL: z.enum(['silent', 'error', 'warn', 'info', 'debug']).default('warn'),
   DEMO: z.enum(['true', 'false']).default('true'),
+  DEV_WEB_ORIGIN: z.url().optional(),
   SIGN_IN_TRIES: z.coerce.number().int().min(1).default(5),
 });
 
@@ -30,6 +31,8 @@ export interface Config {
   readonly cookieSecure: boolean;
   readonly logLevel: string;
   readonly demo: boolean;
+  /** While developing: where Metro serves the web app, which this server passes on. */
+  readonly devWebOrigin: string | null;
   /** Refused sign-ins a quarter of an hour before the next waits. */
   readonly signInTries: number;
 }
@@ -64,6 +67,7 @@ export function readConfig(variables: NodeJS.ProcessEnv = process.env): Config {
     cookieSecure: env.COOKIE_SECURE === 'true',
     logLevel: env.LOG_LEVEL,
     demo: env.DEMO === 'true',
+    devWebOrigin: env.NODE_ENV === 'development' ? (env.DEV_WEB_ORIGIN ?? null) : null,
     signInTries: env.SIGN_IN_TRIES,
   };
 }
