@@ -81,16 +81,20 @@ interface Setting {
   readonly sizeMm: number;
   readonly ink?: string;
   readonly align?: 'left' | 'right';
+  /** Words that would run past this are set smaller. */
+  readonly maxWidth?: number;
 }
 
-function printed(runs: readonly Run[], { x, baseline, sizeMm, ink = INK, align = 'left' }: Setting): Print {
+function printed(runs: readonly Run[], { x, baseline, sizeMm, ink = INK, align = 'left', maxWidth = Infinity }: Setting): Print {
   const glyphs = runs.flatMap((run) => [...run.text].map((character) => ({ run, ...outline(run.font, character) })));
-  const width = glyphs.reduce((sum, { advance, run }) => sum + advance * sizeMm * run.scale, 0);
+  const natural = glyphs.reduce((sum, { advance, run }) => sum + advance * sizeMm * run.scale, 0);
+  const fitted = sizeMm * Math.min(1, maxWidth / natural);
+  const width = Math.min(natural, maxWidth);
   let at = align === 'right' ? x - width : x;
   let data = '';
   for (const { run, advance, pieces } of glyphs) {
-    const size = sizeMm * run.scale;
-    const [left, foot] = [at, baseline - run.rise * sizeMm];
+    const size = fitted * run.scale;
+    const [left, foot] = [at, baseline - run.rise * fitted];
     data += pathData(pieces, (point) => ({ x: left + point.x * size, y: foot + point.y * size }));
     at += advance * size;
   }
@@ -101,9 +105,10 @@ const text = (words: string, setting: Setting, font: PrintFont = 'regular'): Pri
 
 function itemText(item: PrintedItem): Print[] {
   const place = placeOfItem(item.number);
+  const promptX = LEFT_MM + 6.5;
   return [
     text(String(item.number), { x: LEFT_MM, baseline: place.promptBaseline, sizeMm: 3.9 }, 'semibold'),
-    printed(promptRuns(item.prompt), { x: LEFT_MM + 6.5, baseline: place.promptBaseline, sizeMm: PROMPT_MM }),
+    printed(promptRuns(item.prompt), { x: promptX, baseline: place.promptBaseline, sizeMm: PROMPT_MM, maxWidth: RIGHT_MM - 8 - promptX }),
     text(`[${item.marks}]`, { x: RIGHT_MM, baseline: place.promptBaseline, sizeMm: PROMPT_MM, align: 'right' }),
     text('Working', { x: LEFT_MM, baseline: place.workingLabelBaseline, sizeMm: 2.8, ink: SOFT_INK }),
     text(`Answer ${item.number}`, { x: place.answer.x, baseline: place.answerLabelBaseline, sizeMm: 2.8, ink: SOFT_INK }),
