@@ -1,0 +1,57 @@
+import type { Code, RuleName } from './scheme';
+
+export interface Reason {
+  /** A few words, for a column: `the key, rounded`. */
+  readonly head: string;
+  /** A sentence with the numbers. */
+  readonly detail: string;
+}
+
+interface StoredVerdict {
+  readonly grains: number | null;
+  readonly rule: RuleName;
+  readonly numbers: Readonly<Record<string, string>>;
+}
+
+const codeReasons: Record<Code, Reason> = {
+  blank: { head: 'nothing written', detail: 'The box is blank: 0 marks.' },
+  'cannot-read': { head: 'can’t be read', detail: 'A person has to decide what an unreadable answer is worth.' },
+  'crossed-out': { head: 'crossed out', detail: 'The answer is crossed out, with nothing in its place.' },
+  'two-answers': { head: 'two answers', detail: 'Two answers were left standing.' },
+  elsewhere: { head: 'written elsewhere', detail: 'The answer stands in another place.' },
+  'wrong-page': { head: 'wrong page', detail: 'The page does not belong to this answer.' },
+  'ask-the-lead': { head: 'set aside', detail: 'A reader asked the lead to look.' },
+};
+
+const places = (count: string): string => (count === '1' ? 'one decimal' : count === '0' ? 'a whole number' : `${count} decimals`);
+
+/** 0.08 high, 0.08 low: how far from the key, and on which side. */
+function apart(distance: string): string {
+  return distance.startsWith('-') ? `${distance.slice(1)} low` : `${distance} high`;
+}
+
+/** Puts a stored verdict into words for staff: the rule that was met first, with its numbers. */
+export function reasonInWords({ grains, rule, numbers }: StoredVerdict): Reason {
+  const { key = '', distance = '0', decimals = '0' } = numbers;
+  switch (rule) {
+    case 'code':
+      return grains === 0 && numbers.code !== 'blank'
+        ? { head: codeReasons[numbers.code as Code].head, detail: `${codeReasons[numbers.code as Code].detail} The scheme gives 0 marks for that.` }
+        : codeReasons[numbers.code as Code];
+    case 'key':
+      return { head: 'the key', detail: `It is the key, ${key}.` };
+    case 'rounding':
+      return { head: 'the key, rounded', detail: `It is the key, ${key}, given to ${places(decimals)}.` };
+    case 'alternative':
+      return { head: `accepted, ${numbers.name ?? ''}`, detail: `It is ${numbers.alternative ?? ''}, accepted as ${numbers.name ?? ''}.` };
+    case 'band':
+      return { head: `in the band ${numbers.band ?? ''}`, detail: `It lies in ${numbers.from ?? ''} to ${numbers.to ?? ''}, ${apart(distance)}.` };
+    case 'nothing':
+      return { head: /^-?0(\.0+)?$/.test(distance) ? 'too few decimals' : `nothing fits, ${apart(distance)}`, detail: nothingDetail(key, distance) };
+  }
+}
+
+const nothingDetail = (key: string, distance: string): string =>
+  /^-?0(\.0+)?$/.test(distance)
+    ? `The value is that of the key, ${key}, but with fewer decimals than are accepted.`
+    : `No rule is met: ${apart(distance)} beside the key, ${key}.`;
