@@ -13,8 +13,9 @@ export interface SlipFacts {
   readonly text: string;
   /** How common it is beside the other slips of the item. */
   readonly weight: number;
-  /** The sum of the wrong method, where it is one. */
+  /** The sum of the wrong method, where it is one, and what it is taken from when that is not Z. */
   readonly terms?: readonly Term[];
+  readonly nuclear?: number;
 }
 
 /** What must be known of an item to invent answers to it. */
@@ -156,6 +157,7 @@ interface Value {
   readonly origin: 'key' | 'rounding' | 'slip' | 'other';
   readonly slip?: string;
   readonly terms?: readonly Term[];
+  readonly nuclear?: number;
 }
 
 function valueFor(item: ItemFacts, late: number, habits: Habits, random: Random): Value {
@@ -168,10 +170,10 @@ function valueFor(item: ItemFacts, late: number, habits: Habits, random: Random)
   if (item.slips.length === 0 || !random.chance(SHARE.slipOfWrong)) {
     return { text: random.pick(wrongNumbers(item)), origin: 'other', terms: item.terms };
   }
-  const { text, slip, terms } = random.pickWeighted(
+  const { text, slip, terms, nuclear = item.nuclear } = random.pickWeighted(
     item.slips.map((each) => ({ weight: each.weight * (each.slip === habits.favourite ? 8 : 1), choice: each })),
   );
-  return { text, origin: 'slip', slip, ...(terms ? { terms } : {}) };
+  return { text, origin: 'slip', slip, ...(terms ? { terms, nuclear } : {}) };
 }
 
 const wrongNumbers = (item: ItemFacts): readonly string[] =>
@@ -186,7 +188,7 @@ function workingFor(item: ItemFacts, value: Value, habits: Habits): readonly str
   if (habits.style === 'none') return [];
   const isRounded = value.origin === 'rounding';
   const written = isRounded ? item.key : value.text;
-  const sum = { quantity: item.quantity, nuclear: item.nuclear, terms: value.terms ?? [] };
+  const sum = { quantity: item.quantity, nuclear: value.nuclear ?? item.nuclear, terms: value.terms ?? [] };
   // An error of arithmetic stands at the end of a right sum.
   const follows = value.terms !== undefined && (value.origin === 'other' || leadsTo(sum, decimal(written)));
   if (follows) return workingLines(sum, habits.style, written, habits.showsResult);
