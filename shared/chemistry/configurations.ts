@@ -85,7 +85,8 @@ function ionOf(element: ChemicalElement, charge: number): Result<Configuration> 
   return charge < 0 ? anionOf(element, ground, charge) : cationOf(element, ground, charge);
 }
 
-function cationOf(element: ChemicalElement, ground: Configuration, charge: number): Result<Configuration> {
+/** A neutral configuration with electrons taken from the highest n, and within it the highest l. See speciesOf. */
+export function cationOf(element: ChemicalElement, ground: Configuration, charge: number): Result<Configuration> {
   let left = ground;
   for (let removed = 0; removed < charge; removed += 1) {
     const next = outermost(left);

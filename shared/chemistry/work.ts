@@ -1,5 +1,3 @@
-import { speciesOf } from './configurations';
-import type { Species, SpeciesAsked } from './configurations';
 import { computedConventions } from './conventions';
 import { countedDerivation } from './derivation';
 import type { Derivation } from './derivation';
@@ -9,15 +7,12 @@ import { found, refused } from './result';
 import type { Result } from './result';
 import { screeningTerms, sigmaOf } from './slater';
 import type { CountingConvention } from './slater';
-import { speciesText } from './species';
-import { isSameSubshell, parseSubshell, subshellLabel } from './subshells';
-import type { Subshell } from './subshells';
+import { targetOf } from './target';
+import type { ElectronAsked } from './target';
 import { formatConfiguration } from './typed-configuration';
 
 /** What fixes a computed value. */
-export interface AskedInput extends SpeciesAsked {
-  /** Such as `3p`. */
-  readonly electron: string;
+export interface AskedInput extends ElectronAsked {
   readonly quantity: string;
   readonly convention: string;
 }
@@ -56,25 +51,6 @@ export function work(asked: AskedInput): Result<Worked> {
     decimals: 2,
     source: computedConventions[asked.convention].source,
   });
-}
-
-export interface Target {
-  readonly species: Species;
-  readonly electron: Subshell;
-}
-
-/** Species and electron of an item; refused where the subshell is empty: iron has no 4p electron in its ground state. */
-export function targetOf(asked: Pick<AskedInput, 'symbol' | 'charge' | 'configuration' | 'electron'>): Result<Target> {
-  const species = speciesOf(asked);
-  if (!species.ok) return species;
-  const electron = parseSubshell(asked.electron);
-  if (!electron.ok) return electron;
-  const { element, charge, configuration, isTyped } = species.value;
-  if (configuration.some((occupation) => isSameSubshell(occupation, electron.value))) return found({ species: species.value, electron: electron.value });
-  const label = subshellLabel(electron.value);
-  if (isTyped) return refused('empty-subshell', `The configuration ${formatConfiguration(configuration)} has no ${label} electron.`);
-  const name = charge === 0 ? element.name : speciesText(element.symbol, charge);
-  return refused('empty-subshell', `${name} has no ${label} electron in its ground state.`);
 }
 
 const counting: readonly string[] = ['slater', 'slater-035-in-1s', 'slater-d-at-1', 'core-count'] satisfies readonly CountingConvention[];
