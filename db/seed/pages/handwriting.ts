@@ -1,5 +1,6 @@
 import type { Hand, HandFont, Pen } from '../truth/hands';
 import type { Random } from '../truth/random';
+import { openFour } from './open-four';
 import { outline, pathData } from './outlines';
 import type { Outline, Piece, Point } from './outlines';
 
@@ -101,7 +102,7 @@ export function handwritten({ hand, random }: Stroke, line: Line): Drawn {
   const { digit, stem } = measure(hand.font);
   const marks = marksOf(line.text);
   const advanceOf = (mark: string): number =>
-    mark === ' ' ? SPACE_EM : mark.length > 1 ? 0.72 * digit : outline(hand.font, mark).advance * hand.spread;
+    mark === ' ' ? SPACE_EM : mark.length > 1 ? 0.72 * digit : figure(hand.font, mark).advance * hand.spread;
   const natural = marks.reduce((sum, mark) => sum + advanceOf(mark), 0) * (line.digitMm / digit);
   const size = (line.digitMm / digit) * Math.min(1, line.maxWidth / natural);
   // Small writing is done with a lighter hand.
@@ -118,12 +119,16 @@ export function handwritten({ hand, random }: Stroke, line: Line): Drawn {
       const rise = (drift * at + Math.sin(wave + at / 7) * 0.03 * line.digitMm + random.normal() * 0.018 * line.digitMm) * hand.unrest;
       const origin = { x: line.x + at, y: line.baseline - rise };
       if (mark.length > 1) lines += between(mark, { hand, random }, origin, size * digit);
-      else shapes += glyph(outline(hand.font, mark), { hand, random }, origin, size, grow);
+      else shapes += glyph(figure(hand.font, mark), { hand, random }, origin, size, grow);
     }
     at += width * (1 + random.normal() * 0.035 * hand.unrest);
   }
   return { shapes, lines, width: at };
 }
+
+/** A character as a hand writes it: the font's own, but for a 4 that would pass for a 9. */
+const figure = (name: HandFont, mark: string): Outline =>
+  mark === '4' && (name === 'kalam' || name === 'kalam-light') ? openFour(measure(name).digit, measure(name).stem) : outline(name, mark);
 
 function marksOf(text: string): string[] {
   const marks: string[] = [];
