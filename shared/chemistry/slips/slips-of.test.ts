@@ -2,10 +2,12 @@ import { describe, expect, it } from 'vitest';
 import { speciesOf } from '../configurations';
 import type { Species } from '../configurations';
 import { elements } from '../elements';
-import { multiply, toFractionText, whole } from '../exact';
+import { absolute, compare, decimal, multiply, subtract, toFractionText, whole } from '../exact';
+import type { Exact } from '../exact';
 import { subshellLabel } from '../subshells';
 import type { Configuration, Occupation } from '../subshells';
 import { parseConfiguration } from '../typed-configuration';
+import { work } from '../work';
 import { slipCatalogue } from './catalogue';
 import { slipsOf, slipsWithoutOccasion } from './slips-of';
 import type { SlipValue } from './slips-of';
@@ -109,7 +111,7 @@ const closed: Readonly<Record<string, Closed>> = {
 const rebuilt = ['neutral-atom-electrons', 'charge-sign-reversed', 'd-removed-before-s', 'exception-ignored', 'group-inward', 'group-outward', 'element-before', 'element-after', 'zeff-for-sigma'];
 
 const species = elements.flatMap((element) =>
-  Array.from({ length: 13 }, (_, index) => index - 4).flatMap((charge) => {
+  Array.from({ length: 8 }, (_, index) => index - 3).flatMap((charge) => {
     const result = speciesOf({ symbol: element.symbol, charge });
     return result.ok ? [result.value] : [];
   }),
@@ -139,7 +141,7 @@ describe('every slip with a closed form', () => {
         expect(wrong).toEqual([]);
       }
     }
-    expect(checked).toBeGreaterThan(200_000);
+    expect(checked).toBeGreaterThan(150_000);
   }, 240_000);
 });
 
@@ -176,31 +178,46 @@ describe('slips on another species or electron', () => {
 const ordinary = elements.slice(1, 36).flatMap(({ number, symbol, configuration, period }) => {
   const valence = configuration.split(' ').map((text) => text.slice(0, 2)).filter((label) => label.startsWith(String(period)));
   const outermost = valence.at(-1) ?? '';
-  const items = [{ name: `${symbol} ${outermost}`, made: slips(symbol, outermost) }];
-  return number >= 21 && number <= 30 ? [...items, { name: `${symbol} 3d`, made: slips(symbol, '3d') }] : items;
+  return (number >= 21 && number <= 30 ? [outermost, '3d'] : [outermost]).map((electron) => {
+    const worked = work({ symbol, charge: 0, electron, quantity: 'zeff', convention: 'slater' });
+    if (!worked.ok) throw new Error(worked.problem.message);
+    return { name: `${symbol} ${electron}`, key: worked.value.value, made: slips(symbol, electron) };
+  });
 });
 
 describe('the 45 ordinary items', () => {
   it('are 45', () => expect(ordinary).toHaveLength(45));
 
-  it('17 of them have a silent slip', () => {
+  it('17 of them have a silent slip, which gives the right number', () => {
     const silent = ordinary.filter(({ made }) => made.some(({ isSilent }) => isSilent)).map(({ name }) => name);
     expect(silent).toEqual([
       'He 1s', 'Li 2s', 'Be 2s', 'B 2p', 'C 2p', 'N 2p', 'O 2p', 'F 2p', 'Ne 2p', 'Na 3s', 'Al 3p', 'K 4s', 'Sc 4s', 'Sc 3d', 'Cr 4s', 'Cu 4s', 'Ge 4p',
     ]);
   });
 
-  it('88 % of their distinct wrong values point to one slip', () => {
+  it('88 % of their distinct wrong values point to one slip, twins counted as one', () => {
     let values = 0;
     let single = 0;
     for (const { made } of ordinary) {
       const byValue = new Map<string, number>();
-      for (const slip of made.filter(({ isSilent }) => !isSilent)) byValue.set(slip.text, (byValue.get(slip.text) ?? 0) + 1);
+      for (const { id, text, isSilent } of made) {
+        if (!isSilent && id !== 'one-electron-too-many') byValue.set(text, (byValue.get(text) ?? 0) + 1);
+      }
       values += byValue.size;
       single += [...byValue.values()].filter((count) => count === 1).length;
     }
-    console.log(single, values, single / values);
     expect(Math.round((100 * single) / values)).toBe(88);
+  });
+
+  it.each([
+    ['0.05', () => decimal('0.05'), 13],
+    ['5 %', (key: Exact) => multiply(key, decimal('0.05')), 35],
+    ['0.35', () => decimal('0.35'), 45],
+  ])('a closed band of %s would pay a wrong method on so many of them', (_, halfWidth, expected) => {
+    const paid = ordinary.filter(({ key, made }) =>
+      made.some(({ isSilent, value }) => !isSilent && compare(absolute(subtract(value, key)), halfWidth(key)) <= 0),
+    );
+    expect(paid).toHaveLength(expected);
   });
 });
 
@@ -217,11 +234,11 @@ describe('what is said about a slip', () => {
   });
 
   it('never blames, and is never empty', () => {
-    for (const one of species.filter((_, index) => index % 7 === 0)) {
+    for (const one of species.filter((_, index) => index % 23 === 0)) {
       for (const occupation of one.configuration) {
         for (const { feedback, oneLine, name } of slips(one.element.symbol, subshellLabel(occupation), one.charge)) {
           expect(feedback).not.toMatch(/\byou\b|wrong|mistake|undefined|NaN|-\d/i);
-          expect(feedback).toMatch(/^[A-ZZ(\d].*\. .* it comes to −?\d+\.\d\d\.$/u);
+          expect(feedback).toMatch(/^[A-Z(\d].*\. .* it comes to −?\d+\.\d\d\.$/u);
           expect(`${oneLine}${name}`).not.toMatch(/undefined|NaN/);
         }
       }
