@@ -1,0 +1,56 @@
+import { createContext, useContext, useEffect, useMemo, useState, type ReactNode } from 'react';
+import { useColorScheme } from 'react-native';
+import { readStored, store } from './stored';
+import { palettes, type Colors } from './tokens';
+
+export const themePreferences = ['device', 'light', 'dark'] as const;
+export type ThemePreference = (typeof themePreferences)[number];
+
+interface Theme {
+  readonly colors: Colors;
+  readonly scheme: 'light' | 'dark';
+  readonly preference: ThemePreference;
+  setPreference(preference: ThemePreference): void;
+}
+
+const stored = 'meniscus.theme';
+const ThemeContext = createContext<Theme | null>(null);
+
+const storedPreference = (): ThemePreference => themePreferences.find((known) => known === readStored(stored)) ?? 'device';
+
+/** Colours for everything below it: as the device, or as chosen. */
+export function ThemeProvider({ children }: { children: ReactNode }) {
+  const device = useColorScheme();
+  const [preference, setPreference] = useState(storedPreference);
+  const scheme = preference === 'device' ? (device === 'dark' ? 'dark' : 'light') : preference;
+  const colors = palettes[scheme];
+
+  useEffect(() => {
+    document.documentElement.style.colorScheme = scheme;
+    document.documentElement.style.backgroundColor = colors.bench;
+    document.documentElement.style.setProperty('--focus', colors.manganate);
+    document.querySelector('meta[name="theme-color"]')?.setAttribute('content', colors.paper);
+  }, [scheme, colors]);
+
+  const theme = useMemo(
+    () => ({
+      colors,
+      scheme,
+      preference,
+      setPreference: (next: ThemePreference) => {
+        store(stored, next);
+        setPreference(next);
+      },
+    }),
+    [colors, scheme, preference],
+  );
+  return <ThemeContext.Provider value={theme}>{children}</ThemeContext.Provider>;
+}
+
+export function useTheme(): Theme {
+  const theme = useContext(ThemeContext);
+  if (!theme) throw new Error('A component of the kit stands outside ThemeProvider.');
+  return theme;
+}
+
+export const useColors = (): Colors => useTheme().colors;
