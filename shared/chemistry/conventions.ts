@@ -49,7 +49,7 @@ export const computedConventions: Readonly<Record<ComputedConvention, Convention
   scf: {
     name: 'SCF screening constants',
     opening: 'From the SCF screening constants of Clementi and co-workers',
-    says: 'The screening constants of optimised single-zeta functions, from a table.',
+    says: 'The screening constants of optimised single-zeta functions, from a table. For La, Ce and Gd the table has 4f in place of 5d.',
     source:
       'E. Clementi and D. L. Raimondi, J. Chem. Phys. 38, 2686 (1963), for Z up to 36; E. Clementi, D. L. Raimondi and W. P. Reinhardt, J. Chem. Phys. 47, 1300 (1967), for Z = 37 to 86.',
     range: 'Neutral atoms in their ground state, Z up to 86.',

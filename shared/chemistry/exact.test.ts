@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { absolute, add, compare, decimal, divide, equals, exactDecimals, fromFractionText, multiply, negate, ratio, subtract, toApproximate, toDecimals, toFractionText, whole } from './exact';
+import { absolute, add, compare, decimal, decimalsForFigures, divide, equals, exactDecimals, fromFractionText, multiply, negate, ratio, squareRoot, subtract, toApproximate, toDecimals, toFigures, toFractionText, whole } from './exact';
 
 describe('exact fractions', () => {
   it('reduce and keep the denominator positive', () => {
@@ -42,6 +42,30 @@ describe('exact fractions', () => {
     expect(exactDecimals(decimal('3.750'))).toBe(2);
     expect(exactDecimals(ratio(1n, 3n))).toBeNull();
     expect(exactDecimals(whole(4))).toBe(0);
+  });
+
+  it('print significant figures', () => {
+    const cases = [['9.9996', '10.00'], ['9.9994', '9.999'], ['54321', '54320'], ['99996', '100000'], ['-0.0123456', '-0.01235'], ['13.605', '13.61'], ['4', '4.000'], ['0', '0.000']];
+    for (const [value = '', text] of cases) expect(toFigures(decimal(value), 4)).toBe(text);
+    expect(decimalsForFigures(decimal('54321'), 4)).toBe(-1);
+    expect(decimalsForFigures(decimal('13.605'), 4)).toBe(2);
+  });
+
+  it('have square roots, exact where there is one', () => {
+    expect(squareRoot(ratio(9n, 4n))).toEqual(ratio(3n, 2n));
+    expect(squareRoot(whole(0))).toEqual(whole(0));
+    // The square root of 2 to 30 decimals, from memory.
+    expect(toDecimals(squareRoot(whole(2)), 29)).toBe('1.41421356237309504880168872421');
+    expect(() => squareRoot(whole(-1))).toThrow(RangeError);
+    fc.assert(
+      fc.property(fc.bigInt({ min: 1n, max: 10n ** 20n }), fc.bigInt({ min: 1n, max: 10n ** 12n }), (n, d) => {
+        const value = ratio(n, d);
+        const root = squareRoot(value);
+        const next = add(root, ratio(1n, 10n ** 30n));
+        expect(compare(multiply(root, root), value)).toBeLessThanOrEqual(0);
+        expect(compare(multiply(next, next), value)).toBe(1);
+      }),
+    );
   });
 
   describe('edge cases', () => {

@@ -84,3 +84,49 @@ export function exactDecimals(a: Exact): number | null {
   }
   return rest === 1n ? Math.max(twos, fives) : null;
 }
+
+/** The greatest whole number whose square is no more than the value (Newton's method). */
+function wholeRoot(value: bigint): bigint {
+  if (value < 2n) return value;
+  let guess = 1n << BigInt(Math.ceil(value.toString(2).length / 2));
+  for (;;) {
+    const next = (guess + value / guess) >> 1n;
+    if (next >= guess) return guess;
+    guess = next;
+  }
+}
+
+/** Decimals to which a root that is no fraction is cut off. */
+const ROOT_PLACES = 30n;
+
+/** The square root: exact where it is a fraction, otherwise cut off after 30 decimals. squareRoot(9/4) is 3/2. */
+export function squareRoot(a: Exact): Exact {
+  if (a.n < 0n) throw new RangeError('A negative number has no real root.');
+  const n = wholeRoot(a.n);
+  const d = wholeRoot(a.d);
+  if (n * n === a.n && d * d === a.d) return ratio(n, d);
+  return ratio(wholeRoot((a.n * 10n ** (2n * ROOT_PLACES)) / a.d), 10n ** ROOT_PLACES);
+}
+
+/** The decimals that show so many significant figures, below 0 where not all units are shown: 13.605 to 4 figures has 2, 54321 has -1. */
+export function decimalsForFigures(a: Exact, figures: number): number {
+  const size = absolute(a);
+  if (size.n === 0n) return figures - 1;
+  let places = figures - 1;
+  const low = 10n ** BigInt(figures - 1);
+  const rounded = (at: number): bigint => {
+    const scaled = at >= 0 ? ratio(size.n * 10n ** BigInt(at), size.d) : ratio(size.n, size.d * 10n ** BigInt(-at));
+    return (2n * scaled.n + scaled.d) / (2n * scaled.d);
+  };
+  while (rounded(places) < low) places += 1;
+  while (rounded(places) >= low * 10n) places -= 1;
+  return places;
+}
+
+/** Rounded to significant figures, half away from zero: toFigures(9.9996, 4) is "10.00", toFigures(54321, 4) is "54320". */
+export function toFigures(a: Exact, figures: number): string {
+  const places = decimalsForFigures(a, figures);
+  if (places >= 0) return toDecimals(a, places);
+  const unit = 10n ** BigInt(-places);
+  return toDecimals(multiply(decimal(toDecimals(ratio(a.n, a.d * unit), 0)), ratio(unit)), 0);
+}

@@ -15,6 +15,21 @@ describe('the proposed stem', () => {
     );
   });
 
+  it('names every quantity with its unit and figures', () => {
+    const asked = { symbol: 'Cl', charge: 0, electron: '3p', quantity: 'energy-ev', convention: 'slater' };
+    expect(proposedStem(asked, 2, 4)).toBe('By Slater’s rules, find the orbital energy in eV for a 3p electron of a Cl atom, to four significant figures.');
+    expect(proposedStem({ ...asked, quantity: 'difference', other: { symbol: 'S', charge: 0, electron: '3p' } }, 2)).toBe(
+      'By Slater’s rules, find Z_eff for a 3p electron of a Cl atom less Z_eff for a 3p electron of an S atom, to two decimals.',
+    );
+    expect(proposedStem({ ...asked, quantity: 'electronegativity', radiusAngstrom: '0.99', countsItself: true }, 2)).toBe(
+      'By Slater’s rules, find the Allred-Rochow electronegativity of Cl from Z_eff for a 3p electron, the electron itself counted, with r = 0.99 Å, to two decimals.',
+    );
+    expect(proposedStem({ ...asked, quantity: 'zeff', convention: 'scf' }, 4)).toBe(
+      'From the SCF screening constants of Clementi and co-workers, find Z_eff for a 3p electron of a Cl atom, to four decimals.',
+    );
+    expect(proposedStem({ ...asked, quantity: 'zeff', convention: 'ionisation-energy' }, 3, 4)).toBe('From the ionisation energy, find Z_eff for a 3p electron of a Cl atom, to four significant figures.');
+  });
+
   // Symbols are read by the names of their letters; English usage, no source.
   it.each([
     ['F', 0, 'an F atom'], ['Cl', 0, 'a Cl atom'], ['Fe', 0, 'an Fe atom'], ['O', 0, 'an O atom'], ['Na', 0, 'an Na atom'], ['H', 0, 'an H atom'],
