@@ -44,6 +44,10 @@ describe('elements', () => {
     expect([13, 16, 55].map((number) => elementByNumber(number))).toMatchObject([{ value: { name: 'Aluminium' } }, { value: { name: 'Sulfur' } }, { value: { name: 'Caesium' } }]);
   });
 
+  it('stand in the block of the subshell that is filled: helium, 1s2, in s', () => {
+    expect([2, 5, 26, 58].map((number) => elementByNumber(number))).toMatchObject([{ value: { block: 's' } }, { value: { block: 'p' } }, { value: { block: 'd' } }, { value: { block: 'f' } }]);
+  });
+
   describe('edge cases', () => {
     it('an unknown symbol or number is refused by name', () => {
       expect(elementBySymbol('Xx')).toEqual({ ok: false, problem: { code: 'unknown-element', message: 'No element has the symbol “Xx”.' } });

@@ -14,6 +14,7 @@ import type { Target } from './target';
 export interface Followed {
   readonly value: Exact;
   readonly step: string;
+  /** Beside that of the convention; empty where it is the same paper. */
   readonly source: string;
 }
 
@@ -22,8 +23,6 @@ const effectiveNumbers = ['1', '2', '3', '3.7', '4.0', '4.2'];
 const KJ_PER_MOL = decimal('96.48533');
 const BOHR_PM = decimal('52.9177');
 
-/** n* comes from the same paper as the rules, which the convention names already. */
-const sameSource = '';
 const allredRochowSource = 'A. L. Allred and E. G. Rochow, J. Inorg. Nucl. Chem. 5, 264 (1958).';
 
 const charge = (value: Exact): string => toDecimals(value, 2).replace('-', '−');
@@ -41,7 +40,7 @@ export function energyEv({ electron }: Target, { zeff }: EffectiveCharge): Resul
   if (!number.ok) return number;
   const reduced = divide(zeff, decimal(number.value));
   const value = negate(multiply(RYDBERG_EV, multiply(reduced, reduced)));
-  return found({ value, step: `−13.605693 eV × (${charge(zeff)} / ${number.value})² = ${inText(value)} eV`, source: sameSource });
+  return found({ value, step: `−13.605693 eV × (${charge(zeff)} / ${number.value})² = ${inText(value)} eV`, source: '' });
 }
 
 /** The same in kJ/mol, times 96.48533. Source: Slater 1930; factor CODATA 2018, from memory. For 1s of hydrogen −1313. */
@@ -59,7 +58,7 @@ export function radiusPm({ electron }: Target, { zeff }: EffectiveCharge): Resul
   if (compare(zeff, zero) <= 0) return refused('outside-quantity', 'A radius needs a Z_eff above 0.');
   const squared = multiply(decimal(number.value), decimal(number.value));
   const value = multiply(divide(squared, zeff), BOHR_PM);
-  return found({ value, step: `${number.value}² / ${charge(zeff)} × 52.9177 pm = ${inText(value)} pm`, source: sameSource });
+  return found({ value, step: `${number.value}² / ${charge(zeff)} × 52.9177 pm = ${inText(value)} pm`, source: '' });
 }
 
 export interface Contact {

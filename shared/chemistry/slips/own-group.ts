@@ -27,7 +27,7 @@ const room = ({ own, electron }: SlipContext): number => {
 
 /** Whether the shell of the asked electron is being filled at the end of a neutral atom of the p block. */
 const isOuterPBlock = ({ element, charge, isTyped, kind, electron }: SlipContext): boolean =>
-  element.block === 'p' && element.number > 2 && charge === 0 && !isTyped && kind === 'sp' && electron.n === element.period;
+  element.block === 'p' && charge === 0 && !isTyped && kind === 'sp' && electron.n === element.period;
 
 export const ownGroupSlips: readonly Slip[] = [
   {

@@ -8,7 +8,7 @@ import { subshellLabel } from '../subshells';
 import type { Configuration, Occupation } from '../subshells';
 import { parseConfiguration } from '../typed-configuration';
 import { work } from '../work';
-import { slipCatalogue } from './catalogue';
+import { slipById, slipCatalogue } from './catalogue';
 import { slipsOf, slipsWithoutOccasion } from './slips-of';
 import type { SlipValue } from './slips-of';
 
@@ -104,7 +104,7 @@ const closed: Readonly<Record<string, Closed>> = {
     return c.P >= 8 && n > 3 && c.eight === 8 ? c.K + 800 : null;
   },
   'group-number-as-count': ({ c, q, n, l, species: { element } }) =>
-    q === 0 && element.block === 'p' && element.number > 2 && sp(l) && n === element.period ? c.K - 350 : null,
+    q === 0 && element.block === 'p' && sp(l) && n === element.period ? c.K - 350 : null,
 };
 
 /** Slips whose species, electron or configuration is another one: worked again on a configuration built here by hand. */
@@ -122,6 +122,11 @@ const hundredths = ({ value }: SlipValue): string => toFractionText(multiply(val
 describe('every slip with a closed form', () => {
   it('is in the catalogue once, and no slip is without a check', () => {
     expect(slipCatalogue.map(({ id }) => id).sort()).toEqual([...Object.keys(closed), ...rebuilt].sort());
+  });
+
+  it('is found by its id, which is stored and so never changes', () => {
+    expect(slipById('counts-itself')?.name).toBe('counts the electron itself');
+    expect(slipById('no-such-slip')).toBeNull();
   });
 
   it('gives the value of the form for every element, subshell and charge, and has an occasion just there', () => {
