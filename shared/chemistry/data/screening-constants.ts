@@ -2,7 +2,7 @@
 // Z = 1 to 36: E. Clementi and D. L. Raimondi, J. Chem. Phys. 38, 2686 (1963), doi 10.1063/1.1733573.
 // Z = 37 to 86: E. Clementi, D. L. Raimondi and W. P. Reinhardt, J. Chem. Phys. 47, 1300 (1967), doi 10.1063/1.1712084.
 // sigma = Z - n x zeta from optimised single-zeta exponents. Nb, Mo, Ru, Rh, Pd, Ag: exponents of the ground configuration;
-// La, Pr, Nd, Pm: the dominant one of the two 4f exponents.
+// La, Pr, Nd, Pm: the dominant one of the two 4f exponents. As redistributed by the MIT-licensed mendeleev package (L. Mentel).
 
 /** Screening constants by atomic number and subshell. */
 export const screeningConstants: Readonly<Record<number, Readonly<Record<string, string>>>> = {
