@@ -1,7 +1,7 @@
 import { sql } from 'drizzle-orm';
 import { index, integer, primaryKey, real, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core';
 import { boxUses, scriptOrigins } from '../../shared/contracts/enums';
-import { id, instant } from './columns';
+import { id, instant, rev } from './columns';
 import { item } from './papers';
 import { candidate, sitting } from './sittings';
 
@@ -13,6 +13,7 @@ export const layout = sqliteTable(
     sitting: text().notNull().references(() => sitting.id),
     ordinal: integer().notNull(),
     origin: text({ enum: ['printed', 'drawn'] }).notNull(),
+    rev: rev(),
   },
   (table) => [uniqueIndex('layout_ordinal').on(table.sitting, table.ordinal)],
 );

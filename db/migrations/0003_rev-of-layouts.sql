@@ -1,0 +1,1 @@
+ALTER TABLE `layout` ADD `rev` integer DEFAULT 1 NOT NULL;
