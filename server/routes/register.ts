@@ -1,10 +1,14 @@
 import type { Router } from 'express';
 import type { AppPassport } from '../auth/passport';
 import type { Context } from '../context';
+import { classListRoutes } from './class-list';
 import { deskRoutes } from './desk';
+import { itemRoutes } from './items';
+import { layoutRoutes } from './layouts';
 import { ledgerRoutes } from './ledger';
 import { serviceRoutes } from './service';
 import { sessionRoutes } from './session';
+import { sittingRoutes } from './sittings';
 
 /** Every resource of the interface. */
 export function registerRoutes(router: Router, context: Context, passport: AppPassport): void {
@@ -12,4 +16,8 @@ export function registerRoutes(router: Router, context: Context, passport: AppPa
   sessionRoutes(router, context, passport);
   deskRoutes(router, context);
   ledgerRoutes(router, context);
+  sittingRoutes(router, context);
+  layoutRoutes(router, context);
+  itemRoutes(router, context);
+  classListRoutes(router, context);
 }

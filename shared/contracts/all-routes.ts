@@ -1,8 +1,13 @@
+import { classListRoutes } from './class-list';
 import { deskRoutes } from './desk';
+import { itemRoutes } from './items';
+import { layoutRoutes } from './layouts';
 import { ledgerRoutes } from './ledger';
+import { progressRoutes } from './progress';
 import type { RouteContract } from './route';
 import { serviceRoutes } from './service';
 import { sessionRoutes } from './session';
+import { sittingRoutes } from './sittings';
 
 /** Every route of the interface, by name: for OpenAPI and for the test that walks them all. */
 export const allRoutes: Readonly<Record<string, RouteContract>> = {
@@ -10,4 +15,9 @@ export const allRoutes: Readonly<Record<string, RouteContract>> = {
   ...sessionRoutes,
   ...deskRoutes,
   ...ledgerRoutes,
+  ...sittingRoutes,
+  ...progressRoutes,
+  ...itemRoutes,
+  ...classListRoutes,
+  ...layoutRoutes,
 };

@@ -1,0 +1,163 @@
+import { occupiedElectrons } from '../../shared/chemistry/configurations';
+import { divide, exactDecimals, fromFractionText, multiply, toDecimals, toFractionText, whole, type Exact } from '../../shared/chemistry/exact';
+import type { ProblemCode } from '../../shared/chemistry/result';
+import { speciesText } from '../../shared/chemistry/species';
+import { proposedStem } from '../../shared/chemistry/stem';
+import { work, type Worked } from '../../shared/chemistry/work';
+import type { BandDraft, ItemDraft, ItemProblem, WorkedDraft } from '../../shared/contracts/items';
+import { bandRange } from '../../shared/marking/bands';
+import { marksText } from '../../shared/marking/grains';
+import { readAnswer } from '../../shared/marking/read-answer';
+import { roundings } from '../../shared/marking/rounding';
+import { scaleOf } from '../../shared/marking/scale';
+import type { Asked, Band, ItemScheme } from '../../shared/marking/scheme';
+import { schemeProblems } from '../../shared/marking/scheme-checks';
+import { readMarks } from '../../shared/marking/typed-marks';
+
+/** A draft read into a scheme; null while a field cannot be understood or no key can be computed. */
+export interface ReadDraft {
+  readonly scheme: ItemScheme | null;
+  readonly worked: Worked | null;
+  readonly maxGrains: number | null;
+  /** What keeps it from being stored. */
+  readonly refusals: readonly ItemProblem[];
+  /** What is stored but keeps the paper from being locked. */
+  readonly problems: readonly ItemProblem[];
+}
+
+const fieldOf: Partial<Record<ProblemCode, string>> = {
+  'unknown-element': 'asked.symbol',
+  'charge-not-whole': 'asked.charge',
+  'too-many-removed': 'asked.charge',
+  'no-electron-left': 'asked.charge',
+  'anion-beyond-shell': 'asked.charge',
+  'configuration-needed': 'asked.charge',
+};
+
+const percent = whole(100);
+
+function readWidth({ kind, width }: BandDraft): Exact | string {
+  const read = readAnswer(width.trim(), []);
+  if (!read.ok) return read.unfinished ? 'Write a width.' : read.message;
+  return kind === 'relative' ? divide(read.value, percent) : read.value;
+}
+
+function readBand(band: BandDraft, index: number, refusals: ItemProblem[]): Band | null {
+  const width = readWidth(band);
+  const marks = readMarks(band.marks);
+  if (typeof width === 'string') refusals.push({ path: `bands.${index}.width`, message: width });
+  if (!marks.ok) refusals.push({ path: `bands.${index}.marks`, message: marks.message });
+  if (typeof width === 'string' || !marks.ok) return null;
+  return { name: band.name, kind: band.kind, width: toFractionText(width), grains: marks.grains };
+}
+
+/** Marks are typed as marks: a sentence about `bands.1.grains` belongs to the field `bands.1.marks`. */
+const atField = ({ path, message }: ItemProblem): ItemProblem => ({ path: path.replace(/maxGrains$/, 'marks').replace(/grains$/, 'marks').replace(/^key$/, 'decimals'), message });
+
+function problemsOf(scheme: ItemScheme): ItemProblem[] {
+  const found = schemeProblems(scheme).map(atField);
+  if (!found.some(({ path }) => path === 'decimals')) return found;
+  const exact = toDecimals(fromFractionText(scheme.key.value), exactDecimals(fromFractionText(scheme.key.value)) ?? 6);
+  const needed = exactDecimals(fromFractionText(scheme.key.value)) ?? 6;
+  const sentence = `The key is ${exact}. Ask for ${needed} decimals, so that it can be written whole.`;
+  return found.map((problem) => (problem.path === 'decimals' ? { ...problem, message: sentence } : problem));
+}
+
+/** Reads every field of a draft and computes its key; the key is never taken from what was sent. */
+export function readDraft(draft: ItemDraft): ReadDraft {
+  const refusals: ItemProblem[] = [];
+  const asked: Asked = draft.asked;
+  const worked = work(asked);
+  if (!worked.ok) refusals.push({ path: fieldOf[worked.problem.code] ?? 'asked.electron', message: worked.problem.message });
+  const marks = readMarks(draft.marks);
+  if (!marks.ok) refusals.push({ path: 'marks', message: marks.message });
+  const bands = draft.bands.map((band, index) => readBand(band, index, refusals));
+  if (draft.prompt !== null && draft.prompt.trim() === '') refusals.push({ path: 'prompt', message: 'Write the question, or take the proposed one.' });
+  draft.bands.forEach((band, index) => {
+    if (band.name.trim() === '') refusals.push({ path: `bands.${index}.name`, message: 'Name the band.' });
+  });
+  const maxGrains = marks.ok ? marks.grains : null;
+  if (!worked.ok || maxGrains === null || refusals.length > 0) {
+    return { scheme: null, worked: worked.ok ? worked.value : null, maxGrains, refusals, problems: [] };
+  }
+  const { value } = worked.value;
+  const scheme: ItemScheme = {
+    kind: 'numeric',
+    asked,
+    maxGrains,
+    key: { value: toFractionText(value), text: toDecimals(value, draft.decimals), decimals: draft.decimals },
+    units: [],
+    roundings: draft.roundings,
+    alternatives: [],
+    bands: bands.filter((band) => band !== null),
+    crossedOut: draft.crossedOut,
+    twoAnswers: draft.twoAnswers,
+  };
+  return { scheme, worked: worked.value, maxGrains, refusals, problems: problemsOf(scheme) };
+}
+
+export const labelOf = ({ symbol, charge, electron }: Asked): string => `${speciesText(symbol, charge)} ${electron}`;
+
+/** The accepted roundings of a key, fewest decimals last: of 61/10 "6.1", of 91/20 "4.5" and "4.6". */
+function roundingTexts({ key, roundings: policy }: ItemScheme): string[] {
+  if (policy.downToDecimals === null) return [];
+  const value = fromFractionText(key.value);
+  const texts: string[] = [];
+  for (let places = key.decimals - 1; places >= policy.downToDecimals; places -= 1) {
+    for (const rounded of roundings(value, places)) texts.push(toDecimals(rounded, places));
+  }
+  return texts;
+}
+
+const exactText = (value: Exact, atLeast: number): string => toDecimals(value, Math.max(atLeast, Math.min(6, exactDecimals(value) ?? 6)));
+
+/** A range that the band cannot have yet, such as one of no places, has no text. */
+function rangeTexts(band: Band, { value, decimals }: ItemScheme['key']): { from: string; to: string } | null {
+  const width = fromFractionText(band.width);
+  const isCount = band.kind === 'decimal-places' || band.kind === 'significant-figures';
+  if (isCount && (width.d !== 1n || width.n > 12n || width.n < 0n)) return null;
+  const { from, to } = bandRange(band, fromFractionText(value));
+  return { from: exactText(from, decimals), to: exactText(to, decimals) };
+}
+
+/** Key, derivation, wording, scale and what is wrong, as the editor shows them. */
+export function workDraft(draft: ItemDraft): WorkedDraft {
+  const { scheme, worked, maxGrains, refusals, problems } = readDraft(draft);
+  const electrons = occupiedElectrons(draft.asked.symbol, draft.asked.charge);
+  const drawable = scheme && scheme.bands.every((band) => rangeTexts(band, scheme.key) !== null);
+  return {
+    label: labelOf(draft.asked),
+    key: worked && { value: toFractionText(worked.value), text: toDecimals(worked.value, draft.decimals), decimals: draft.decimals },
+    derivation: worked?.derivation ?? null,
+    scale: drawable ? scaleOf(scheme) : null,
+    roundings: scheme ? roundingTexts(scheme) : [],
+    bands: scheme ? scheme.bands.map((band) => rangeTexts(band, scheme.key)) : draft.bands.map(() => null),
+    electrons: electrons.ok ? [...electrons.value] : [],
+    proposedPrompt: proposedStem(draft.asked, draft.decimals),
+    maxGrains,
+    problems: [...refusals, ...problems],
+  };
+}
+
+function widthText({ kind, width }: Band, decimals: number): string {
+  const value = fromFractionText(width);
+  if (kind === 'relative') return exactText(multiply(value, percent), 0);
+  return exactText(value, kind === 'absolute' ? decimals : 0);
+}
+
+/** A stored scheme as the editor's draft; the wording is null where it is the proposed one. */
+export function draftOf(scheme: ItemScheme, prompt: string): ItemDraft {
+  const { symbol, charge, electron, quantity, convention } = scheme.asked;
+  if ((quantity !== 'zeff' && quantity !== 'sigma') || convention !== 'slater') throw new Error(`The editor has no fields for ${quantity} under ${convention}.`);
+  const decimals = scheme.key.decimals;
+  return {
+    asked: { symbol, charge, electron, quantity, convention },
+    decimals,
+    prompt: prompt === proposedStem(scheme.asked, decimals) ? null : prompt,
+    marks: marksText(scheme.maxGrains),
+    roundings: scheme.roundings,
+    bands: scheme.bands.map((band) => ({ name: band.name, kind: band.kind, width: widthText(band, decimals), marks: marksText(band.grains) })),
+    crossedOut: scheme.crossedOut,
+    twoAnswers: scheme.twoAnswers,
+  };
+}

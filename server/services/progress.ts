@@ -1,0 +1,27 @@
+import { answerCounts, candidatesByAttendance, itemCount, layoutCounts, pageCounts, readingsTaken } from '../../db/queries/progress';
+import { heldStates } from '../../db/queries/ledger';
+import { isPaperLocked } from '../../db/queries/sittings';
+import type { ProgressView } from '../../shared/contracts/progress';
+import type { Actor } from '../auth/access';
+import type { Context } from '../context';
+import { requireSitting } from './sitting-access';
+
+/** How far a sitting is, in counts. The same for every role. */
+export function progressOf(context: Context, actor: Actor, sittingId: string): ProgressView {
+  const { db } = context;
+  const { sitting } = requireSitting(context, actor, sittingId, ['lead', 'reader', 'external', 'officer']);
+  const answers = answerCounts(db, sittingId, heldStates) ?? { all: 0, readable: 0, held: 0, scored: 0, due: 0 };
+  const { due, ...counts } = answers;
+  return {
+    sittingId,
+    seq: sitting.seq,
+    status: sitting.status,
+    isLocked: isPaperLocked(db, sittingId),
+    items: itemCount(db, sittingId),
+    ...layoutCounts(db, sittingId),
+    candidates: candidatesByAttendance(db, sittingId),
+    pages: pageCounts(db, sittingId),
+    readings: { taken: readingsTaken(db, sittingId), due },
+    answers: counts,
+  };
+}

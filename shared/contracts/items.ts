@@ -1,0 +1,178 @@
+import { z } from 'zod';
+import { grains, idParams, instant, rev, uuid } from './parts';
+import { defineRoute } from './route';
+
+const leads = { who: 'course', roles: ['lead'] } as const;
+const overseers = { who: 'course', roles: ['lead', 'external'] } as const;
+
+export const bandKinds = ['absolute', 'relative', 'decimal-places', 'significant-figures'] as const;
+export const answerPolicies = ['ask', 'none'] as const;
+export const askedQuantities = ['zeff', 'sigma'] as const;
+export const askedConventions = ['slater'] as const;
+
+const bandDraft = z.strictObject({
+  name: z.string().trim().min(1, 'Name the band.').max(60),
+  kind: z.enum(bandKinds),
+  /** As typed: a half width such as 0.05, a per cent such as 5, or a count of places or figures. */
+  width: z.string().max(16),
+  marks: z.string().max(16),
+});
+export type BandDraft = z.infer<typeof bandDraft>;
+
+/** What the lead decides about an item, as typed. The key is never among it: the server computes it. */
+export const itemDraft = z.strictObject({
+  asked: z.strictObject({
+    symbol: z.string().max(3),
+    charge: z.int().min(-8).max(117),
+    electron: z.string().max(3),
+    quantity: z.enum(askedQuantities),
+    convention: z.enum(askedConventions),
+  }),
+  /** The decimals that the question asks for. */
+  decimals: z.int().min(0).max(4),
+  /** Null: as the server proposes it from the rest. */
+  prompt: z.string().trim().min(1, 'Write the question, or take the proposed one.').max(600).nullable(),
+  marks: z.string().max(16),
+  roundings: z.strictObject({ downToDecimals: z.int().min(0).max(4).nullable(), truncation: z.boolean() }),
+  bands: z.array(bandDraft).max(8),
+  crossedOut: z.enum(answerPolicies),
+  twoAnswers: z.enum(answerPolicies),
+});
+export type ItemDraft = z.infer<typeof itemDraft>;
+
+export const itemProblem = z.object({ path: z.string(), message: z.string() });
+export type ItemProblem = z.infer<typeof itemProblem>;
+
+/** What follows from a draft. Key, derivation and scale are null while no key can be computed. */
+export const workedDraft = z.object({
+  label: z.string(),
+  key: z.object({ value: z.string(), text: z.string(), decimals: z.int() }).nullable(),
+  derivation: z.unknown(),
+  scale: z.unknown(),
+  /** Accepted roundings as they would be written. */
+  roundings: z.array(z.string()),
+  bands: z.array(z.object({ from: z.string(), to: z.string() }).nullable()),
+  /** Subshells that hold an electron of this species. */
+  electrons: z.array(z.string()),
+  proposedPrompt: z.string(),
+  maxGrains: grains.nullable(),
+  problems: z.array(itemProblem),
+});
+export type WorkedDraft = z.infer<typeof workedDraft>;
+
+export const itemView = z.object({
+  id: uuid,
+  sittingId: uuid,
+  number: z.int(),
+  draft: itemDraft,
+  /** The question as it will be printed. */
+  prompt: z.string(),
+  worked: workedDraft,
+  maxGrains: grains,
+  hasAnswerBox: z.boolean(),
+  rev,
+});
+export type ItemView = z.infer<typeof itemView>;
+
+export const listItems = defineRoute({
+  method: 'get',
+  path: '/sittings/:id/items',
+  summary: 'The items of a paper in order, with keys: never for readers.',
+  access: overseers,
+  params: idParams,
+  response: z.object({ lockedAt: instant.nullable(), items: z.array(itemView) }),
+});
+
+export const makeItem = defineRoute({
+  method: 'post',
+  path: '/sittings/:id/items',
+  summary: 'Add an item at the end of a paper that is open to change.',
+  access: leads,
+  params: idParams,
+  body: itemDraft,
+  response: itemView,
+  status: 201,
+});
+
+export const getItem = defineRoute({
+  method: 'get',
+  path: '/items/:id',
+  summary: 'One item with its worked key.',
+  access: overseers,
+  params: idParams,
+  response: itemView,
+});
+
+export const saveItem = defineRoute({
+  method: 'put',
+  path: '/items/:id',
+  summary: 'Store the draft of an item. Names the rev it saw.',
+  access: leads,
+  params: idParams,
+  body: itemDraft,
+  response: itemView,
+});
+
+export const removeItem = defineRoute({
+  method: 'delete',
+  path: '/items/:id',
+  summary: 'Remove an item and its boxes from a paper that is open to change. Names the rev it saw.',
+  access: leads,
+  params: idParams,
+  status: 204,
+});
+
+export const orderItems = defineRoute({
+  method: 'put',
+  path: '/sittings/:id/item-order',
+  summary: 'Number the items in the order given.',
+  access: leads,
+  params: idParams,
+  body: z.strictObject({ items: z.array(uuid).max(200) }),
+  response: z.object({ lockedAt: instant.nullable(), items: z.array(itemView) }),
+});
+
+export const workKey = defineRoute({
+  method: 'post',
+  path: '/keys',
+  summary: 'Work a draft: key, derivation, proposed wording, scale, and what is wrong, field by field. Stores nothing.',
+  access: leads,
+  body: z.strictObject({ sittingId: uuid, draft: itemDraft.extend({ prompt: z.string().max(600).nullable(), bands: z.array(bandDraft.extend({ name: z.string().max(60) })).max(8) }) }),
+  response: workedDraft,
+});
+
+export const spotTestResult = z.object({
+  /** unfinished: not yet a value, without complaint. */
+  outcome: z.enum(['marked', 'unfinished', 'refused']),
+  grains: grains.nullable(),
+  maxGrains: grains,
+  head: z.string(),
+  detail: z.string(),
+  rule: z.string().nullable(),
+  numbers: z.record(z.string(), z.string()),
+  /** For the drawing; null when there is no value. */
+  value: z.number().nullable(),
+  refusedAt: z.int().nullable(),
+});
+export type SpotTestResult = z.infer<typeof spotTestResult>;
+
+export const spotTest = defineRoute({
+  method: 'post',
+  path: '/items/:id/spot-test',
+  summary: 'How a value would be marked, with the rule and its numbers; against the draft sent along, or as stored. Stores nothing.',
+  access: leads,
+  params: idParams,
+  body: z.strictObject({ text: z.string().min(1).max(64), draft: itemDraft.optional() }),
+  response: spotTestResult,
+});
+
+export const lockPaper = defineRoute({
+  method: 'post',
+  path: '/sittings/:id/lock',
+  summary: 'Freeze paper and layout: make the first scheme, and scripts, pages and answers for the class list.',
+  access: leads,
+  params: idParams,
+  response: z.object({ lockedAt: instant, schemeOrdinal: z.int(), scripts: z.int(), answers: z.int() }),
+});
+
+export const itemRoutes = { listItems, makeItem, getItem, saveItem, removeItem, orderItems, workKey, spotTest, lockPaper };
