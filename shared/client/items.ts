@@ -1,0 +1,122 @@
+import { keepPreviousData, queryOptions, useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
+import type { getItem, ItemDraft, listItems, lockPaper, spotTest, workKey } from '../contracts/items';
+import type { ResponseOf } from '../contracts/route';
+import { api } from './api';
+import { staleTimes } from './query-client';
+import { progressQueryOptions, sittingQueryOptions } from './sittings';
+
+type ItemList = ResponseOf<typeof listItems>;
+type Item = ResponseOf<typeof getItem>;
+
+export const itemsQueryOptions = (sittingId: string) =>
+  queryOptions({
+    queryKey: ['items', sittingId],
+    queryFn: ({ signal }) => api<ItemList>(`/sittings/${sittingId}/items`, { signal }),
+  });
+
+export const useItems = (sittingId: string) => useQuery(itemsQueryOptions(sittingId));
+
+/** What the server makes of a draft; the last answer stays while the next is worked. */
+export const useWorkedDraft = (sittingId: string, draft: ItemDraft, isNeeded: boolean) =>
+  useQuery({
+    queryKey: ['worked-draft', sittingId, draft],
+    enabled: isNeeded,
+    staleTime: staleTimes.steady,
+    placeholderData: keepPreviousData,
+    queryFn: ({ signal }) => api<ResponseOf<typeof workKey>>('/keys', { method: 'POST', body: { sittingId, draft }, signal }),
+  });
+
+/** How a text would be marked by a draft; without one, by what is stored. */
+export const useSpotTest = (itemId: string, text: string, draft: ItemDraft | null) =>
+  useQuery({
+    queryKey: ['spot-test', itemId, text, draft],
+    enabled: text !== '',
+    staleTime: staleTimes.steady,
+    placeholderData: keepPreviousData,
+    retry: false,
+    queryFn: ({ signal }) =>
+      api<ResponseOf<typeof spotTest>>(`/items/${itemId}/spot-test`, { method: 'POST', body: draft === null ? { text } : { text, draft }, signal }),
+  });
+
+/** Puts one item into the list that is shown. */
+function useKeepItem(sittingId: string) {
+  const client = useQueryClient();
+  return (item: Item) =>
+    client.setQueryData<ItemList>(itemsQueryOptions(sittingId).queryKey, (list) => {
+      if (!list) return list;
+      const isKnown = list.items.some(({ id }) => id === item.id);
+      return { ...list, items: isKnown ? list.items.map((known) => (known.id === item.id ? item : known)) : [...list.items, item] };
+    });
+}
+
+function useRefreshCounts(sittingId: string) {
+  const client = useQueryClient();
+  return () => {
+    void client.invalidateQueries({ queryKey: progressQueryOptions(sittingId).queryKey });
+    void client.invalidateQueries({ queryKey: ['layout', sittingId] });
+  };
+}
+
+export function useMakeItem(sittingId: string) {
+  const keep = useKeepItem(sittingId);
+  const refresh = useRefreshCounts(sittingId);
+  return useMutation({
+    mutationFn: ({ draft, once }: { draft: ItemDraft; once: string }) => api<Item>(`/sittings/${sittingId}/items`, { method: 'POST', body: draft, idempotencyKey: once }),
+    onSuccess: (item) => {
+      keep(item);
+      refresh();
+    },
+  });
+}
+
+export function useSaveItem(sittingId: string) {
+  const keep = useKeepItem(sittingId);
+  return useMutation({
+    mutationFn: ({ itemId, rev, draft }: { itemId: string; rev: number; draft: ItemDraft }) => api<Item>(`/items/${itemId}`, { method: 'PUT', rev, body: draft }),
+    onSuccess: keep,
+  });
+}
+
+export function useRemoveItem(sittingId: string) {
+  const client = useQueryClient();
+  const refresh = useRefreshCounts(sittingId);
+  return useMutation({
+    mutationFn: ({ itemId, rev }: { itemId: string; rev: number }) => api<void>(`/items/${itemId}`, { method: 'DELETE', rev }),
+    onSettled: () => {
+      refresh();
+      return client.invalidateQueries({ queryKey: itemsQueryOptions(sittingId).queryKey });
+    },
+  });
+}
+
+/** Shows the new order at once, and the server's when it answers. */
+export function useOrderItems(sittingId: string) {
+  const client = useQueryClient();
+  const { queryKey } = itemsQueryOptions(sittingId);
+  return useMutation({
+    mutationFn: (items: readonly string[]) => api<ItemList>(`/sittings/${sittingId}/item-order`, { method: 'PUT', body: { items } }),
+    onMutate: async (order) => {
+      await client.cancelQueries({ queryKey });
+      client.setQueryData<ItemList>(queryKey, (list) => {
+        if (!list) return list;
+        const byId = new Map(list.items.map((item) => [item.id, item]));
+        return { ...list, items: order.flatMap((id, index) => { const item = byId.get(id); return item ? [{ ...item, number: index + 1 }] : []; }) };
+      });
+    },
+    onSuccess: (list) => client.setQueryData(queryKey, list),
+    onError: () => client.invalidateQueries({ queryKey }),
+  });
+}
+
+export function useLockPaper(sittingId: string) {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: () => api<ResponseOf<typeof lockPaper>>(`/sittings/${sittingId}/lock`, { method: 'POST' }),
+    onSuccess: () =>
+      Promise.all(
+        [itemsQueryOptions(sittingId).queryKey, sittingQueryOptions(sittingId).queryKey, progressQueryOptions(sittingId).queryKey, ['layout', sittingId], ['candidates', sittingId]].map((queryKey) =>
+          client.invalidateQueries({ queryKey }),
+        ),
+      ),
+  });
+}
