@@ -1,0 +1,165 @@
+import { useState } from 'react';
+import { View } from 'react-native';
+import { occupiedElectrons } from '../../chemistry/configurations';
+import { elementBySymbol } from '../../chemistry/elements';
+import type { ItemDraft } from '../../contracts/items';
+import { Icon } from '../../ui/icon';
+import { Pressable } from '../../ui/pressable';
+import { Select } from '../../ui/select';
+import { Text } from '../../ui/text';
+import { useColors } from '../../ui/theme';
+import { line, radius, size } from '../../ui/tokens';
+import { Vessel } from '../../ui/vessel';
+import { ElementPicker } from './element-picker';
+import { words } from './words';
+
+interface AskedFieldsProps {
+  readonly draft: ItemDraft;
+  readonly problemAt: (path: string) => string | undefined;
+  readonly onChange: (draft: ItemDraft, field: string) => void;
+}
+
+const charges = [-4, -3, -2, -1, 0, 1, 2, 3, 4, 5, 6, 7, 8] as const;
+const decimals = ['0', '1', '2', '3', '4'] as const;
+
+const chargeText = (charge: number): string => (charge > 0 ? `+${charge}` : charge < 0 ? `−${-charge}` : '0');
+
+/** The charges that the rules for ions reach, and the one asked for whether they reach it or not. */
+const chargesOf = (symbol: string, asked: number): number[] => charges.filter((charge) => charge === asked || occupiedElectrons(symbol, charge).ok);
+
+/** What the item asks for: quantity, element, charge, electron, decimals, marks. */
+export function AskedFields({ draft, problemAt, onChange }: AskedFieldsProps) {
+  const { asked } = draft;
+  const put = (changes: Partial<ItemDraft['asked']>, field: string) => onChange({ ...draft, asked: { ...asked, ...changes } }, field);
+  const electrons = occupiedElectrons(asked.symbol, asked.charge);
+  return (
+    <View style={{ gap: 14 }}>
+      <Text variant="head" level={2}>
+        {words.asked.title}
+      </Text>
+      <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 12 }}>
+        <View style={{ flexGrow: 1, flexBasis: 200 }}>
+          <Select
+            label={words.asked.quantity}
+            value={asked.quantity}
+            options={[
+              { value: 'zeff', label: words.asked.quantities.zeff },
+              { value: 'sigma', label: words.asked.quantities.sigma },
+            ]}
+            onChange={(quantity) => put({ quantity }, 'quantity')}
+            testID="quantity"
+          />
+        </View>
+        <View style={{ flexGrow: 1, flexBasis: 140 }}>
+          <Text variant="label" style={{ marginBottom: 2 }}>
+            {words.asked.convention}
+          </Text>
+          <View style={{ minHeight: size.field, justifyContent: 'center' }}>
+            <Text>{words.asked.slater}</Text>
+          </View>
+        </View>
+      </View>
+      <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 12 }}>
+        <View style={{ flexGrow: 2, flexBasis: 130 }}>
+          <ElementField symbol={asked.symbol} error={problemAt('asked.symbol')} onChange={(symbol) => put({ symbol }, 'symbol')} />
+        </View>
+        <View style={{ flexGrow: 1, flexBasis: 84 }}>
+          <Select
+            label={words.asked.charge}
+            value={String(asked.charge)}
+            options={chargesOf(asked.symbol, asked.charge).map((charge) => ({ value: String(charge), label: chargeText(charge) }))}
+            onChange={(charge) => put({ charge: Number(charge) }, 'charge')}
+            error={problemAt('asked.charge')}
+            testID="charge"
+          />
+        </View>
+        <View style={{ flexGrow: 1, flexBasis: 84 }}>
+          <Select
+            label={words.asked.electron}
+            value={asked.electron}
+            options={(electrons.ok ? electrons.value : []).map((electron) => ({ value: electron, label: electron }))}
+            onChange={(electron) => put({ electron }, 'electron')}
+            error={problemAt('asked.electron')}
+            testID="electron"
+          />
+        </View>
+        <View style={{ flexGrow: 1, flexBasis: 84 }}>
+          <Select
+            label={words.asked.decimals}
+            value={String(draft.decimals)}
+            options={decimals.map((value) => ({ value, label: value }))}
+            onChange={(value) => onChange({ ...draft, decimals: Number(value) }, 'decimals')}
+            error={problemAt('decimals')}
+            testID="decimals"
+          />
+        </View>
+        <View style={{ flexGrow: 1, flexBasis: 84 }}>
+          <Vessel
+            label={words.asked.marks}
+            value={draft.marks}
+            onChange={(marks) => onChange({ ...draft, marks }, 'marks')}
+            error={problemAt('marks')}
+            variant="reading"
+            maxLength={16}
+            testID="marks"
+          />
+        </View>
+      </View>
+    </View>
+  );
+}
+
+/** The element, chosen from the periodic table or by searching it. */
+function ElementField({ symbol, error, onChange }: { symbol: string; error: string | undefined; onChange: (symbol: string) => void }) {
+  const colors = useColors();
+  const [isOpen, setOpen] = useState(false);
+  const element = elementBySymbol(symbol);
+  const text = element.ok ? words.asked.elementValue(symbol, element.value.number) : symbol;
+  return (
+    <View>
+      <Text variant="label" style={{ marginBottom: 2 }}>
+        {words.asked.element}
+      </Text>
+      <Pressable
+        onPress={() => setOpen(true)}
+        label={`${words.asked.element}: ${element.ok ? element.value.name : symbol}`}
+        isExpanded={isOpen}
+        testID="element"
+        style={({ isHovered }) => ({
+          minHeight: size.field,
+          borderWidth: error ? line.focus : line.control,
+          borderTopWidth: 0,
+          borderColor: error ? colors.methyl : colors.rule,
+          borderBottomLeftRadius: radius.vessel,
+          borderBottomRightRadius: radius.vessel,
+          backgroundColor: isHovered ? colors.well : colors.paper,
+          paddingHorizontal: 12,
+          flexDirection: 'row',
+          alignItems: 'center',
+          justifyContent: 'space-between',
+          gap: 8,
+        })}
+      >
+        <Text weight={500} lines={1}>
+          {text}
+        </Text>
+        <Icon name="down" size={16} />
+      </Pressable>
+      {error ? (
+        <Text variant="small" tone="methyl" style={{ marginTop: 4 }}>
+          {error}
+        </Text>
+      ) : null}
+      {isOpen ? (
+        <ElementPicker
+          chosen={symbol}
+          onClose={() => setOpen(false)}
+          onChoose={(next) => {
+            setOpen(false);
+            onChange(next);
+          }}
+        />
+      ) : null}
+    </View>
+  );
+}

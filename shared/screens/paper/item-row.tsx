@@ -1,0 +1,84 @@
+import type { KeyboardEventHandler, PointerEventHandler } from 'react';
+import { View } from 'react-native';
+import type { ItemView } from '../../contracts/items';
+import { GRAINS_PER_MARK, marksText } from '../../marking/grains';
+import { Icon } from '../../ui/icon';
+import { Pressable } from '../../ui/pressable';
+import { Text } from '../../ui/text';
+import { useColors } from '../../ui/theme';
+import { Tube } from '../../ui/tube';
+import { ChemText } from '../chem-text';
+import { words } from './words';
+
+export const itemRowHeight = 58;
+
+interface ItemRowProps {
+  readonly item: ItemView;
+  /** Its place while the list is being sorted. */
+  readonly number: number;
+  readonly isChosen: boolean;
+  readonly grip: Readonly<Record<string, PointerEventHandler<HTMLElement>>> | null;
+  readonly onKeyDown: KeyboardEventHandler<HTMLElement>;
+  readonly onPress: () => void;
+}
+
+/** One item in the list of the paper. */
+export function ItemRow({ item, number, isChosen, grip, onKeyDown, onPress }: ItemRowProps) {
+  const colors = useColors();
+  const { worked, maxGrains } = item;
+  const marks = marksText(maxGrains);
+  const key = worked.key?.text ?? words.noKey;
+  const isSigma = item.draft.asked.quantity === 'sigma';
+  const needsLook = worked.problems.length > 0;
+  return (
+    <View {...({ onKeyDown } as object)} style={{ flexDirection: 'row', height: itemRowHeight, borderBottomWidth: 1, borderColor: colors.hair }}>
+      <View style={{ flex: 1 }}>
+        <Pressable
+          onPress={onPress}
+          isPressedIn={isChosen}
+          testID={`item-row-${item.id}`}
+          label={`${words.rowName(number, worked.label, key, marks)}${needsLook ? `. ${worked.problems[0]?.message ?? ''}` : ''}`}
+          style={({ isHovered }) => ({
+            flex: 1,
+            flexDirection: 'row',
+            alignItems: 'center',
+            gap: 10,
+            paddingLeft: 14,
+            paddingRight: 12,
+            borderWidth: 2,
+            borderColor: isChosen ? colors.manganate : 'transparent',
+            backgroundColor: isChosen ? colors.manganateFaint : isHovered ? colors.well : 'transparent',
+          })}
+        >
+          <Text weight={600} align="right" style={{ width: 20 }}>
+            {number}
+          </Text>
+          <View style={{ flex: 1, minWidth: 0 }}>
+            <Text weight={500} lines={1}>
+              <ChemText>{worked.label}</ChemText>
+              {isSigma ? (
+                <Text variant="small" tone="ink2">
+                  {'  '}
+                  <ChemText beside="small">σ</ChemText>
+                </Text>
+              ) : null}
+            </Text>
+            <Text variant="readingS" tone={worked.key ? 'copper' : 'methyl'} weight={400} lines={1}>
+              {key}
+            </Text>
+          </View>
+          {needsLook ? <Icon name="warning" tone="iodine" /> : null}
+          <Tube state="given" got={maxGrains / GRAINS_PER_MARK} of={maxGrains / GRAINS_PER_MARK} />
+          <Text weight={600} style={{ minWidth: 16 }}>
+            {marks}
+          </Text>
+        </Pressable>
+      </View>
+      {grip ? (
+        <View {...(grip as object)} aria-hidden testID={`grip-${number}`} style={{ width: 26, alignItems: 'center', justifyContent: 'center', ...({ cursor: 'grab', touchAction: 'none' } as object) }}>
+          <Icon name="more" tone="ink3" size={16} />
+        </View>
+      ) : null}
+    </View>
+  );
+}

@@ -1,0 +1,48 @@
+import { View } from 'react-native';
+import type { Derivation as DerivationData } from '../../chemistry/derivation';
+import type { WorkedDraft } from '../../contracts/items';
+import { Derivation } from '../../ui/derivation';
+import { Text } from '../../ui/text';
+import { words } from './words';
+
+/** How the key comes about, group by group, with its source. */
+export function KeyWorked({ worked, quantity }: { worked: WorkedDraft; quantity: 'zeff' | 'sigma' }) {
+  const derivation = worked.derivation as DerivationData | null;
+  return (
+    <View style={{ gap: 10 }} testID="key-worked">
+      <View style={{ flexDirection: 'row', justifyContent: 'space-between', alignItems: 'baseline' }}>
+        <Text variant="head" level={2}>
+          {words.key.title}
+        </Text>
+        <Text variant="small" tone="ink2">
+          {words.key.aside}
+        </Text>
+      </View>
+      {derivation ? (
+        <>
+          <Derivation
+            groups={derivation.groups.map(({ subshells, counted, coefficient, contribution, isAsked, place }) => ({
+              subshells,
+              counted,
+              coefficient: coefficient.text,
+              contribution: contribution.text,
+              isAsked,
+              isOuter: place === 'outer',
+            }))}
+            nuclearCharge={derivation.nuclearCharge}
+            sigma={derivation.sigma.text}
+            zeff={derivation.zeff.text}
+            asked={quantity}
+          />
+          <Text variant="small" tone="ink2">
+            {[derivation.selfScreening, derivation.source].filter((sentence) => sentence !== null).join(' ')}
+          </Text>
+        </>
+      ) : (
+        <Text variant="small" tone="ink2">
+          {worked.problems[0]?.message ?? words.key.none}
+        </Text>
+      )}
+    </View>
+  );
+}

@@ -1,0 +1,83 @@
+import { useState } from 'react';
+import { View } from 'react-native';
+import type { ItemDraft, WorkedDraft } from '../../contracts/items';
+import { Button } from '../../ui/button';
+import { Text } from '../../ui/text';
+import { useColors } from '../../ui/theme';
+import { radius } from '../../ui/tokens';
+import { Vessel } from '../../ui/vessel';
+import { ChemText } from '../chem-text';
+import { words } from './words';
+
+interface PrintedStemProps {
+  readonly number: number;
+  readonly draft: ItemDraft;
+  readonly worked: WorkedDraft;
+  readonly error: string | undefined;
+  readonly canChange: boolean;
+  readonly onChange: (draft: ItemDraft, field: string) => void;
+}
+
+const saysDecimals = (prompt: string): boolean => /decimal|whole number|significant/i.test(prompt);
+
+/** The question as it will be printed: proposed from the item until the lead words it. */
+export function PrintedStem({ number, draft, worked, error, canChange, onChange }: PrintedStemProps) {
+  const colors = useColors();
+  const [isOpen, setOpen] = useState(false);
+  const prompt = draft.prompt ?? worked.proposedPrompt;
+  const isOwn = draft.prompt !== null;
+  return (
+    <View style={{ gap: 8 }}>
+      <View style={{ flexDirection: 'row', justifyContent: 'space-between', alignItems: 'baseline' }}>
+        <Text variant="head" level={2}>
+          {words.printed.title}
+        </Text>
+        <Text variant="small" tone="ink2">
+          {isOwn ? words.printed.own : words.printed.proposed}
+        </Text>
+      </View>
+      <View style={{ borderWidth: 1, borderColor: colors.hair, borderRadius: radius.control, backgroundColor: colors.glass, paddingHorizontal: 12, paddingVertical: 10 }}>
+        <Text>
+          <Text weight={600}>{number}</Text>
+          {'  '}
+          <ChemText>{prompt}</ChemText>
+          <Text tone="ink2">{` [${draft.marks}]`}</Text>
+        </Text>
+      </View>
+      {canChange && (isOpen || isOwn) ? (
+        <Vessel
+          label={words.printed.label}
+          value={prompt}
+          lines={3}
+          height={96}
+          maxLength={600}
+          onChange={(text) => onChange({ ...draft, prompt: text === worked.proposedPrompt ? null : text }, 'prompt')}
+          error={error}
+          help={isOwn && !saysDecimals(prompt) ? words.printed.missingFigures : undefined}
+          testID="prompt"
+        />
+      ) : null}
+      {canChange ? (
+        <View style={{ alignSelf: 'flex-start' }}>
+          {isOwn ? (
+            <Button
+              kind="text"
+              isSmall
+              icon="takeBack"
+              onPress={() => {
+                setOpen(false);
+                onChange({ ...draft, prompt: null }, 'prompt-reset');
+              }}
+            >
+              {words.printed.reset}
+            </Button>
+          ) : isOpen ? null : (
+            <Button kind="text" isSmall icon="note" onPress={() => setOpen(true)} testID="word-it">
+              {words.printed.change}
+            </Button>
+          )}
+        </View>
+      ) : null}
+    </View>
+  );
+}
