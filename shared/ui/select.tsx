@@ -52,9 +52,9 @@ export function Select<Value extends string>(props: SelectProps<Value>) {
           backgroundColor: isBare ? 'transparent' : colors.paper,
           flexDirection: 'row',
           alignItems: 'center',
-          paddingLeft: (isBare ? 6 : 14) - width,
-          paddingRight: 10 - width,
-          gap: 8,
+          paddingLeft: (isBare ? 6 : 12) - width,
+          paddingRight: 8 - width,
+          gap: isBare ? 8 : 4,
         }}
       >
         {glyph}

@@ -33,12 +33,12 @@ export function AskedFields({ draft, problemAt, onChange }: AskedFieldsProps) {
   const put = (changes: Partial<ItemDraft['asked']>, field: string) => onChange({ ...draft, asked: { ...asked, ...changes } }, field);
   const electrons = occupiedElectrons(asked.symbol, asked.charge);
   return (
-    <View style={{ gap: 14 }}>
+    <View style={{ gap: 12 }}>
       <Text variant="head" level={2}>
         {words.asked.title}
       </Text>
-      <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 12 }}>
-        <View style={{ flexGrow: 1, flexBasis: 200 }}>
+      <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 10 }}>
+        <View style={{ flexGrow: 1, flexBasis: 100 }}>
           <Select
             label={words.asked.quantity}
             value={asked.quantity}
@@ -50,7 +50,7 @@ export function AskedFields({ draft, problemAt, onChange }: AskedFieldsProps) {
             testID="quantity"
           />
         </View>
-        <View style={{ flexGrow: 1, flexBasis: 140 }}>
+        <View style={{ flexGrow: 2, flexBasis: 116 }}>
           <Text variant="label" style={{ marginBottom: 2 }}>
             {words.asked.convention}
           </Text>
@@ -58,12 +58,23 @@ export function AskedFields({ draft, problemAt, onChange }: AskedFieldsProps) {
             <Text>{words.asked.slater}</Text>
           </View>
         </View>
+        <View style={{ flexGrow: 1, flexBasis: 76 }}>
+          <Vessel
+            label={words.asked.marks}
+            value={draft.marks}
+            onChange={(marks) => onChange({ ...draft, marks }, 'marks')}
+            error={problemAt('marks')}
+            variant="reading"
+            maxLength={16}
+            testID="marks"
+          />
+        </View>
       </View>
-      <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 12 }}>
-        <View style={{ flexGrow: 2, flexBasis: 130 }}>
+      <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 10 }}>
+        <View style={{ flexGrow: 2, flexBasis: 126 }}>
           <ElementField symbol={asked.symbol} error={problemAt('asked.symbol')} onChange={(symbol) => put({ symbol }, 'symbol')} />
         </View>
-        <View style={{ flexGrow: 1, flexBasis: 84 }}>
+        <View style={{ flexGrow: 1, flexBasis: 66 }}>
           <Select
             label={words.asked.charge}
             value={String(asked.charge)}
@@ -73,7 +84,7 @@ export function AskedFields({ draft, problemAt, onChange }: AskedFieldsProps) {
             testID="charge"
           />
         </View>
-        <View style={{ flexGrow: 1, flexBasis: 84 }}>
+        <View style={{ flexGrow: 1, flexBasis: 66 }}>
           <Select
             label={words.asked.electron}
             value={asked.electron}
@@ -83,7 +94,7 @@ export function AskedFields({ draft, problemAt, onChange }: AskedFieldsProps) {
             testID="electron"
           />
         </View>
-        <View style={{ flexGrow: 1, flexBasis: 84 }}>
+        <View style={{ flexGrow: 1, flexBasis: 66 }}>
           <Select
             label={words.asked.decimals}
             value={String(draft.decimals)}
@@ -91,17 +102,6 @@ export function AskedFields({ draft, problemAt, onChange }: AskedFieldsProps) {
             onChange={(value) => onChange({ ...draft, decimals: Number(value) }, 'decimals')}
             error={problemAt('decimals')}
             testID="decimals"
-          />
-        </View>
-        <View style={{ flexGrow: 1, flexBasis: 84 }}>
-          <Vessel
-            label={words.asked.marks}
-            value={draft.marks}
-            onChange={(marks) => onChange({ ...draft, marks }, 'marks')}
-            error={problemAt('marks')}
-            variant="reading"
-            maxLength={16}
-            testID="marks"
           />
         </View>
       </View>

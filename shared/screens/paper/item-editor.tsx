@@ -103,13 +103,13 @@ export function ItemEditor({ item, count, lockButton, back, onMove, onRemoved }:
             <View style={{ flex: 1, minWidth: 0 }}>{scale}</View>
           </View>
           <View style={{ flex: 1, flexDirection: 'row', alignItems: 'stretch' }}>
-            <View style={{ flex: 4, minWidth: 0, padding: 24, gap: 24, backgroundColor: colors.paper, borderRightWidth: 1, borderColor: colors.hair }}>
+            <View style={{ flex: 4, minWidth: 0, paddingHorizontal: 24, paddingVertical: 18, gap: 20, backgroundColor: colors.paper, borderRightWidth: 1, borderColor: colors.hair }}>
               {asked}
               {printed}
               {key}
               {foot}
             </View>
-            <View style={{ flex: 6, minWidth: 0, padding: 24, backgroundColor: colors.bench }}>{counts}</View>
+            <View style={{ flex: 6, minWidth: 0, paddingHorizontal: 24, paddingVertical: 18, backgroundColor: colors.bench }}>{counts}</View>
           </View>
         </>
       ) : (

@@ -5,6 +5,7 @@ import { marksText } from '../../marking/grains';
 import { Button } from '../../ui/button';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
+import { useHasKeyboard } from '../../ui/use-has-keyboard';
 import { ItemRow, itemRowHeight } from './item-row';
 import { words } from './words';
 
@@ -35,6 +36,7 @@ const movedTo = (ids: readonly string[], from: number, to: number): string[] => 
 export function ItemList({ items, chosen, canChange, isAdding, onChoose, onOrder, onAdd }: ItemListProps) {
   const colors = useColors();
   const [drag, setDrag] = useState<Drag | null>(null);
+  const hasKeyboard = useHasKeyboard();
   const ids = items.map(({ id }) => id);
   const shown = drag ? movedTo(ids, drag.from, drag.to) : ids;
   const byId = new Map(items.map((item) => [item.id, item]));
@@ -112,7 +114,7 @@ export function ItemList({ items, chosen, canChange, isAdding, onChoose, onOrder
           <Button kind="text" icon="plus" isBusy={isAdding} onPress={onAdd} testID="add-item">
             {words.addItem}
           </Button>
-          {items.length > 1 ? (
+          {items.length > 1 && hasKeyboard ? (
             <Text variant="micro" tone="ink3" style={{ paddingHorizontal: 8 }}>
               {words.moveHint}
             </Text>

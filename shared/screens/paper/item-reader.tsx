@@ -30,7 +30,7 @@ export function ItemReader({ item, line, explanation, canTry, back }: ItemReader
   const { draft, worked } = item;
   const spot = useSpot(item.id, null);
   const facts: readonly (readonly [string, string])[] = [
-    [words.asked.quantity, words.asked.quantities[draft.asked.quantity]],
+    [words.asked.quantity, words.asked.quantityNames[draft.asked.quantity]],
     [words.asked.convention, words.asked.slater],
     [words.asked.element, worked.label],
     [words.asked.decimals, words.counts.decimalsOf(draft.decimals)],

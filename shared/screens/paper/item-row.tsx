@@ -43,14 +43,14 @@ export function ItemRow({ item, number, isChosen, grip, onKeyDown, onPress }: It
             flexDirection: 'row',
             alignItems: 'center',
             gap: 10,
-            paddingLeft: 14,
+            paddingLeft: 8,
             paddingRight: 12,
             borderWidth: 2,
             borderColor: isChosen ? colors.manganate : 'transparent',
             backgroundColor: isChosen ? colors.manganateFaint : isHovered ? colors.well : 'transparent',
           })}
         >
-          <Text weight={600} align="right" style={{ width: 20 }}>
+          <Text weight={600} align="right" lines={1} style={{ width: 24 }}>
             {number}
           </Text>
           <View style={{ flex: 1, minWidth: 0 }}>

@@ -27,14 +27,31 @@ export function PrintedStem({ number, draft, worked, error, canChange, onChange 
   const prompt = draft.prompt ?? worked.proposedPrompt;
   const isOwn = draft.prompt !== null;
   return (
-    <View style={{ gap: 8 }}>
-      <View style={{ flexDirection: 'row', justifyContent: 'space-between', alignItems: 'baseline' }}>
+    <View style={{ gap: 6 }}>
+      <View style={{ flexDirection: 'row', justifyContent: 'space-between', alignItems: 'center', flexWrap: 'wrap', columnGap: 12, minHeight: 36 }}>
         <Text variant="head" level={2}>
           {words.printed.title}
+          <Text variant="small" tone="ink2">{`  ${isOwn ? words.printed.own : words.printed.proposed}`}</Text>
         </Text>
-        <Text variant="small" tone="ink2">
-          {isOwn ? words.printed.own : words.printed.proposed}
-        </Text>
+        {canChange ? (
+          isOwn ? (
+            <Button
+              kind="text"
+              isSmall
+              icon="takeBack"
+              onPress={() => {
+                setOpen(false);
+                onChange({ ...draft, prompt: null }, 'prompt-reset');
+              }}
+            >
+              {words.printed.reset}
+            </Button>
+          ) : isOpen ? null : (
+            <Button kind="text" isSmall icon="note" onPress={() => setOpen(true)} testID="word-it">
+              {words.printed.change}
+            </Button>
+          )
+        ) : null}
       </View>
       <View style={{ borderWidth: 1, borderColor: colors.hair, borderRadius: radius.control, backgroundColor: colors.glass, paddingHorizontal: 12, paddingVertical: 10 }}>
         <Text>
@@ -56,27 +73,6 @@ export function PrintedStem({ number, draft, worked, error, canChange, onChange 
           help={isOwn && !saysDecimals(prompt) ? words.printed.missingFigures : undefined}
           testID="prompt"
         />
-      ) : null}
-      {canChange ? (
-        <View style={{ alignSelf: 'flex-start' }}>
-          {isOwn ? (
-            <Button
-              kind="text"
-              isSmall
-              icon="takeBack"
-              onPress={() => {
-                setOpen(false);
-                onChange({ ...draft, prompt: null }, 'prompt-reset');
-              }}
-            >
-              {words.printed.reset}
-            </Button>
-          ) : isOpen ? null : (
-            <Button kind="text" isSmall icon="note" onPress={() => setOpen(true)} testID="word-it">
-              {words.printed.change}
-            </Button>
-          )}
-        </View>
       ) : null}
     </View>
   );

@@ -46,7 +46,8 @@ export const words = {
   asked: {
     title: 'Asked',
     quantity: 'Quantity',
-    quantities: { zeff: 'Z_eff, effective charge', sigma: 'σ, screening constant' },
+    quantities: { zeff: 'Zeff', sigma: 'σ' },
+    quantityNames: { zeff: 'Z_eff, the effective charge', sigma: 'σ, the screening constant' },
     convention: 'Convention',
     slater: 'Slater’s rules',
     element: 'Element',

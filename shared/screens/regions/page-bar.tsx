@@ -3,6 +3,7 @@ import { Button } from '../../ui/button';
 import { Chip } from '../../ui/chip';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
+import type { PaperItem } from './box-panel';
 import type { RegionsAct, RegionsState } from './regions-state';
 import { words } from './words';
 
@@ -15,10 +16,13 @@ interface PageBarProps {
   readonly onPicture: () => void;
   readonly onCloser: (() => void) | null;
   readonly onFarther: (() => void) | null;
+  /** The next item without an answer box, where boxes are not drawn but placed. */
+  readonly next: PaperItem | null;
+  readonly newId: () => string;
 }
 
 /** The pages of the paper, the picture of the one on view, and how close it is. */
-export function PageBar({ state, hasSample, canChange, isSending, dispatch, onPicture, onCloser, onFarther }: PageBarProps) {
+export function PageBar({ state, hasSample, canChange, isSending, dispatch, onPicture, onCloser, onFarther, next, newId }: PageBarProps) {
   const colors = useColors();
   const last = state.pages.length;
   return (
@@ -57,6 +61,13 @@ export function PageBar({ state, hasSample, canChange, isSending, dispatch, onPi
           {''}
         </Button>
       </View>
+      {canChange && next ? (
+        <View style={{ alignSelf: 'flex-start' }}>
+          <Button isSmall icon="plus" label={words.place(`item ${next.number}, ${next.label}`)} onPress={() => dispatch({ act: 'place', id: newId(), item: next.id, use: 'answer' })} testID="place-next">
+            {words.place(`${next.number}  ${next.label}`)}
+          </Button>
+        </View>
+      ) : null}
       {hasSample || !canChange ? null : (
         <Text variant="small" tone="ink2">
           {words.noPicture}

@@ -20,33 +20,46 @@ import { PageBar } from './page-bar';
 import { PageCanvas } from './page-canvas';
 import { RegionsConflict } from './regions-conflict';
 import { RegionsSide } from './regions-side';
-import type { DrawnBox } from './regions-state';
+import { nextItem, type DrawnBox } from './regions-state';
 import { useRegions } from './use-regions';
 import { words } from './words';
 
 /** Where the answers stand on the pages of the paper. */
 export function RegionsScreen({ sittingId }: { sittingId: string }) {
-  const layout = useLayout(sittingId);
-  const items = useItems(sittingId);
   const sitting = useSitting(sittingId);
-  const isLead = sitting.data?.roles.includes('lead') ?? false;
   return (
     <InSitting sittingId={sittingId}>
-      <QueryState query={items} fetching="Fetching the paper" failed="The paper did not come.">
-        {(list) => (
-          <QueryState query={layout} fetching="Fetching the regions" failed="The regions did not come.">
-            {(found) => (
-              <RegionsEditor
-                sittingId={sittingId}
-                layout={found}
-                items={list.items.map(({ id, number, worked }) => ({ id, number, label: worked.label }))}
-                canChange={isLead && !found.isLocked}
-              />
-            )}
-          </QueryState>
-        )}
+      <QueryState query={sitting} fetching="Fetching the sitting" failed="The sitting did not come.">
+        {({ roles }) =>
+          roles.includes('lead') || roles.includes('external') ? (
+            <Regions sittingId={sittingId} isLead={roles.includes('lead')} />
+          ) : (
+            <Text style={{ padding: 32, maxWidth: 560 }}>{words.notAllowed}</Text>
+          )
+        }
       </QueryState>
     </InSitting>
+  );
+}
+
+function Regions({ sittingId, isLead }: { sittingId: string; isLead: boolean }) {
+  const layout = useLayout(sittingId);
+  const items = useItems(sittingId);
+  return (
+    <QueryState query={items} fetching="Fetching the paper" failed="The paper did not come.">
+      {(list) => (
+        <QueryState query={layout} fetching="Fetching the regions" failed="The regions did not come.">
+          {(found) => (
+            <RegionsEditor
+              sittingId={sittingId}
+              layout={found}
+              items={list.items.map(({ id, number, worked }) => ({ id, number, label: worked.label }))}
+              canChange={isLead && !found.isLocked}
+            />
+          )}
+        </QueryState>
+      )}
+    </QueryState>
   );
 }
 
@@ -145,6 +158,8 @@ function RegionsEditor({ sittingId, layout, items, canChange }: RegionsEditorPro
             isSending={regions.isSendingSample}
             dispatch={dispatch}
             onPicture={() => void pickFile('image/jpeg,image/png,image/webp,image/tiff').then((file) => file && regions.sendSample(file))}
+            next={isWide ? null : (items.find(({ id }) => id === nextItem(state, itemIds)) ?? null)}
+            newId={uuidv7}
             onCloser={zoom < zooms.length - 1 ? () => setZoom(zoom + 1) : null}
             onFarther={zoom > 0 ? () => setZoom(zoom - 1) : null}
           />

@@ -34,6 +34,7 @@ export const words = {
   toPaper: 'To the paper',
   locked: 'The paper is locked, so its regions are frozen.',
   readOnly: 'Only a lead draws regions.',
+  notAllowed: 'Regions belong to the paper, which leads and the external examiner see.',
   placeText: (w: string, h: string, x: string, y: string) => `${w} by ${h} mm, at ${x}, ${y}`,
   boxName: (what: string, place: string) => `${what}, ${place}`,
   conflict: 'Someone else stored other regions a moment ago. Yours are still here and were not stored.',
