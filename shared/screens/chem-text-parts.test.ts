@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { chemParts } from './chem-text-parts';
+import { chemParts, plainChem } from './chem-text-parts';
 
 describe('text with symbols of chemistry', () => {
   it('sets Z_eff, raised charges and orbital letters apart', () => {
@@ -13,6 +13,10 @@ describe('text with symbols of chemistry', () => {
       { kind: 'raised', text: '2+' },
       { kind: 'plain', text: ' ion' },
     ]);
+  });
+
+  it('is plain where only plain text can stand', () => {
+    expect(plainChem('Z_eff of Mg²⁺ 2p')).toBe('Zeff of Mg2+ 2p');
   });
 
   it('leaves other text whole', () => {

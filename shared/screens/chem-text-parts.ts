@@ -10,6 +10,9 @@ const plainOf: Readonly<Record<string, string>> = {
 
 const pattern = /Z_eff|σ|[⁰¹²³⁴-⁹⁺⁻]+|\b[1-7][spdf]\b/gu;
 
+/** The same text in letters that every face has, for places that set plain text only: "Mg²⁺ 2p" is "Mg2+ 2p". */
+export const plainChem = (text: string): string => [...text].map((letter) => plainOf[letter] ?? letter).join('').replace('Z_eff', 'Zeff');
+
 /** Plain text cut where our type sets it otherwise: "Z_eff of Fe²⁺ 3d" has a symbol, a raised charge and an orbital letter. */
 export function chemParts(text: string): ChemPart[] {
   const parts: ChemPart[] = [];

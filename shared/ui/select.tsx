@@ -17,6 +17,8 @@ interface SelectProps<Value extends string> {
   readonly onChange: (value: Value) => void;
   readonly help?: string | undefined;
   readonly error?: string | undefined;
+  /** Refused, with the sentence elsewhere: the id of the text that says it. */
+  readonly refusedBy?: string | undefined;
   readonly isLabelHidden?: boolean;
   /** In a row of a table: no walls until it is in hand. */
   readonly isBare?: boolean;
@@ -31,8 +33,9 @@ export function Select<Value extends string>(props: SelectProps<Value>) {
   const colors = useColors();
   const below = useId();
   const [isInHand, setInHand] = useState(false);
-  const wall = error ? colors.methyl : isInHand ? colors.manganate : isBare ? 'transparent' : colors.rule;
-  const width = error || isInHand ? line.focus : line.control;
+  const isRefused = error !== undefined || props.refusedBy !== undefined;
+  const wall = isRefused ? colors.methyl : isInHand ? colors.manganate : isBare ? 'transparent' : colors.rule;
+  const width = isRefused || isInHand ? line.focus : line.control;
   const isKnown = options.some((option) => option.value === value);
   return (
     <View style={{ alignSelf: 'stretch' }}>
@@ -60,8 +63,8 @@ export function Select<Value extends string>(props: SelectProps<Value>) {
         {glyph}
         <select
           aria-label={label}
-          aria-invalid={error ? true : undefined}
-          aria-describedby={error || help ? below : undefined}
+          aria-invalid={isRefused ? true : undefined}
+          aria-describedby={props.refusedBy ?? (error || help ? below : undefined)}
           value={value}
           onChange={(event) => onChange(event.target.value as Value)}
           onFocus={() => setInHand(true)}

@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useId, useState } from 'react';
 import { View } from 'react-native';
 import { occupiedElectrons } from '../../chemistry/configurations';
 import { elementBySymbol } from '../../chemistry/elements';
@@ -32,6 +32,8 @@ export function AskedFields({ draft, problemAt, onChange }: AskedFieldsProps) {
   const { asked } = draft;
   const put = (changes: Partial<ItemDraft['asked']>, field: string) => onChange({ ...draft, asked: { ...asked, ...changes } }, field);
   const electrons = occupiedElectrons(asked.symbol, asked.charge);
+  const below = useId();
+  const sentences = ['asked.charge', 'asked.electron', 'decimals'].map(problemAt).filter((sentence) => sentence !== undefined);
   return (
     <View style={{ gap: 12 }}>
       <Text variant="head" level={2}>
@@ -80,7 +82,7 @@ export function AskedFields({ draft, problemAt, onChange }: AskedFieldsProps) {
             value={String(asked.charge)}
             options={chargesOf(asked.symbol, asked.charge).map((charge) => ({ value: String(charge), label: chargeText(charge) }))}
             onChange={(charge) => put({ charge: Number(charge) }, 'charge')}
-            error={problemAt('asked.charge')}
+            refusedBy={problemAt('asked.charge') && below}
             testID="charge"
           />
         </View>
@@ -90,7 +92,7 @@ export function AskedFields({ draft, problemAt, onChange }: AskedFieldsProps) {
             value={asked.electron}
             options={(electrons.ok ? electrons.value : []).map((electron) => ({ value: electron, label: electron }))}
             onChange={(electron) => put({ electron }, 'electron')}
-            error={problemAt('asked.electron')}
+            refusedBy={problemAt('asked.electron') && below}
             testID="electron"
           />
         </View>
@@ -100,11 +102,16 @@ export function AskedFields({ draft, problemAt, onChange }: AskedFieldsProps) {
             value={String(draft.decimals)}
             options={decimals.map((value) => ({ value, label: value }))}
             onChange={(value) => onChange({ ...draft, decimals: Number(value) }, 'decimals')}
-            error={problemAt('decimals')}
+            refusedBy={problemAt('decimals') && below}
             testID="decimals"
           />
         </View>
       </View>
+      {sentences.length > 0 ? (
+        <Text id={below} variant="small" tone="methyl" live="polite">
+          {sentences.join(' ')}
+        </Text>
+      ) : null}
     </View>
   );
 }

@@ -84,7 +84,7 @@ function ElementTable({ fitting, chosen, best, onChoose }: TableProps) {
   const fits = new Set(fitting.map(({ symbol }) => symbol));
   const start = best ?? chosen;
   return (
-    <View role="grid" aria-label={words.picker.table} style={{ height: 9 * cell + 10, width: 18 * cell }}>
+    <View role="radiogroup" aria-label={words.picker.table} style={{ height: 9 * cell + 10, width: 18 * cell }}>
       {elements.map((element) => {
         const { symbol, name, number } = element;
         const { column, row } = placeInTable(element);
@@ -92,8 +92,8 @@ function ElementTable({ fitting, chosen, best, onChoose }: TableProps) {
         const isBest = symbol === best;
         const keys = {
           tabIndex: symbol === start ? 0 : -1,
-          role: 'gridcell',
-          'aria-selected': isChosen,
+          role: 'radio',
+          'aria-checked': isChosen,
           onClick: () => onChoose(symbol),
           onKeyDown: (event: ReactKeyboardEvent<HTMLElement>) => {
             const step = steps[event.key];

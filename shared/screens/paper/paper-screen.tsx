@@ -11,7 +11,7 @@ import { useColors } from '../../ui/theme';
 import { useIsWide } from '../../ui/use-breakpoint';
 import { InSitting } from '../in-sitting';
 import { QueryState } from '../query-state';
-import { clockTime } from '../times';
+import { momentText } from '../times';
 import { ItemEditor } from './item-editor';
 import { ItemList } from './item-list';
 import { ItemReader } from './item-reader';
@@ -114,7 +114,7 @@ function PaperPanes({ sitting, items, lockedAt, itemId }: PanesProps) {
         key={open.id}
         item={open}
         canTry={isLead}
-        line={lockedAt === null ? words.save.open : words.locked(clockTime(lockedAt))}
+        line={lockedAt === null ? words.save.open : words.locked(momentText(lockedAt))}
         explanation={lockedAt === null ? words.readOnly : words.lockedText}
         back={back}
       />

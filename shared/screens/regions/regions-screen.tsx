@@ -11,6 +11,7 @@ import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
 import { size } from '../../ui/tokens';
 import { useIsWide } from '../../ui/use-breakpoint';
+import { plainChem } from '../chem-text-parts';
 import { InSitting } from '../in-sitting';
 import { pickFile } from '../pick-file';
 import { QueryState } from '../query-state';
@@ -53,7 +54,7 @@ function Regions({ sittingId, isLead }: { sittingId: string; isLead: boolean }) 
             <RegionsEditor
               sittingId={sittingId}
               layout={found}
-              items={list.items.map(({ id, number, worked }) => ({ id, number, label: worked.label }))}
+              items={list.items.map(({ id, number, worked }) => ({ id, number, label: plainChem(worked.label) }))}
               canChange={isLead && !found.isLocked}
             />
           )}
