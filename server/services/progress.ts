@@ -6,12 +6,13 @@ import type { Actor } from '../auth/access';
 import type { Context } from '../context';
 import { requireSitting } from './sitting-access';
 
-/** How far a sitting is, in counts. The same for every role. */
+/** How far a sitting is, in counts. Those who only read get none that changes with the outcome of a pair. */
 export function progressOf(context: Context, actor: Actor, sittingId: string): ProgressView {
   const { db } = context;
-  const { sitting } = requireSitting(context, actor, sittingId, ['lead', 'reader', 'external', 'officer']);
+  const { sitting, access } = requireSitting(context, actor, sittingId, ['lead', 'reader', 'external', 'officer']);
   const answers = answerCounts(db, sittingId, heldStates) ?? { all: 0, readable: 0, held: 0, scored: 0, due: 0 };
   const { due, ...counts } = answers;
+  const seesOutcomes = (['lead', 'external', 'officer'] as const).some((role) => access.roles.has(role));
   return {
     sittingId,
     seq: sitting.seq,
@@ -22,6 +23,6 @@ export function progressOf(context: Context, actor: Actor, sittingId: string): P
     candidates: candidatesByAttendance(db, sittingId),
     pages: pageCounts(db, sittingId),
     readings: { taken: readingsTaken(db, sittingId), due },
-    answers: counts,
+    answers: seesOutcomes ? counts : { ...counts, held: null, scored: null },
   };
 }

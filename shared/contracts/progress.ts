@@ -19,7 +19,8 @@ export const progressView = z.object({
   /** Pages of candidates who are to be marked. */
   pages: z.object({ due: many, in: many, excused: many, loose: many }),
   readings: z.object({ taken: many, due: many }),
-  answers: z.object({ all: many, readable: many, held: many, scored: many }),
+  /** Held and scored are null for someone who only reads: seen after each reading they would tell whether it agreed with another. */
+  answers: z.object({ all: many, readable: many, held: many.nullable(), scored: many.nullable() }),
 });
 export type ProgressView = z.infer<typeof progressView>;
 
