@@ -27,7 +27,7 @@ interface Row {
 type Column = 'number' | 'name' | 'email';
 
 const delimiters = [',', ';', '\t'] as const;
-const mostCandidates = 20_000;
+const mostCandidates = 5_000;
 
 /** The delimiter that stands most often, outside quotes, in the first line that has text. */
 function delimiterOf(text: string): string {
@@ -140,7 +140,7 @@ export function readClassList(text: string): ReadList {
   if (at.number === undefined) return { candidates: [], problems };
   const body = hasHeader ? filled.slice(1) : filled;
   if (body.length === 0) problems.push({ line: first.line, column: 1, message: 'There is a header and no candidate under it.' });
-  if (body.length > mostCandidates) problems.push({ line: body[mostCandidates]?.line ?? 1, column: 1, message: 'A class list has at most 20,000 candidates.' });
+  if (body.length > mostCandidates) problems.push({ line: body[mostCandidates]?.line ?? 1, column: 1, message: 'A class list has at most 5,000 candidates.' });
   const lineOf = new Map<string, number>();
   const candidates = body.map((row): ListedCandidate => {
     for (const column of ['number', 'name', 'email'] as const) {

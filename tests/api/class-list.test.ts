@@ -167,6 +167,13 @@ describe('the class list', () => {
       expect(errors.map((error: { message: string }) => error.message)).toContain(message);
     });
 
+    it('takes 5,000 candidates and refuses the next', async () => {
+      const lines = Array.from({ length: 5001 }, (_, index) => `W${index}`);
+      const sitting = empty();
+      expect((await preview(sitting, lines.slice(0, 5000).join('\n'))).counts.new).toBe(5000);
+      expect((await preview(sitting, lines.join('\n'))).errors).toEqual([{ line: 5001, column: 1, message: 'A class list has at most 5,000 candidates.' }]);
+    });
+
     it('refuses more than a megabyte, an empty text and an unknown attendance', async () => {
       const { sittingId } = buildPaper(server);
       const { body } = await lead.get(`/api/sittings/${sittingId}/candidates`);
