@@ -1,83 +1,76 @@
 import { useId, type ReactNode } from 'react';
 import { View } from 'react-native';
-import { Icon, type IconName } from './icon';
-import { KeyCap } from './key-cap';
+import { buttonStyle, ButtonFace, type ButtonLook } from './button-face';
+import { useFollow } from './link';
 import { Pressable } from './pressable';
 import { Text } from './text';
 import { useColors } from './theme';
-import { radius, size, line, type ColorRole } from './tokens';
 
-export type ButtonKind = 'primary' | 'quiet' | 'text' | 'danger';
+export type { ButtonKind } from './button-face';
 
-export interface ButtonProps {
+export interface ButtonProps extends ButtonLook {
   readonly children: ReactNode;
   readonly onPress: () => void;
-  readonly kind?: ButtonKind;
-  readonly icon?: IconName;
-  readonly keyCap?: string;
-  readonly isLarge?: boolean;
-  readonly isSmall?: boolean;
   /** Closed, with the line that says what opens it; the line may be empty where the screen says it elsewhere. */
   readonly closed?: string | undefined;
-  readonly isBusy?: boolean;
-  readonly isWide?: boolean;
-  readonly label?: string;
-  readonly isPressedIn?: boolean;
-  readonly isExpanded?: boolean;
-  readonly align?: 'center' | 'between';
-  readonly testID?: string;
+  readonly isBusy?: boolean | undefined;
+  /** As wide as what it stands in. */
+  readonly isWide?: boolean | undefined;
+  readonly label?: string | undefined;
+  readonly isPressedIn?: boolean | undefined;
+  readonly isExpanded?: boolean | undefined;
+  readonly testID?: string | undefined;
 }
 
-const tones = { primary: 'onFill', quiet: 'ink', text: 'ink', danger: 'methyl' } as const satisfies Record<ButtonKind, ColorRole>;
-
 /** A verb that names its thing. One primary button a screen. */
-export function Button(props: ButtonProps) {
-  const { children, onPress, kind = 'quiet', icon, keyCap, isLarge = false, isSmall = false, closed, isBusy = false, isWide = false, align = 'center' } = props;
+export function Button({ children, onPress, closed, isBusy = false, isWide = false, label, isPressedIn, isExpanded, testID, ...look }: ButtonProps) {
   const colors = useColors();
   const why = useId();
   const isClosed = closed !== undefined || isBusy;
-  const tone = isClosed ? 'ink3' : tones[kind];
   return (
     <View style={isWide ? { alignSelf: 'stretch' } : null}>
       <Pressable
-        onPress={onPress}
+        onPress={() => onPress()}
         isDisabled={isClosed}
-        label={props.label}
+        label={label}
         describedBy={closed ? why : undefined}
-        isPressedIn={props.isPressedIn}
-        isExpanded={props.isExpanded}
-        testID={props.testID}
-        style={({ isHovered, isPressed }) => ({
-          minHeight: isLarge ? size.buttonLarge : isSmall ? size.touchWide : size.button,
-          paddingHorizontal: kind === 'text' ? 8 : isSmall ? 12 : 16,
-          borderRadius: radius.control,
-          flexDirection: 'row',
-          alignItems: 'center',
-          justifyContent: align === 'between' ? 'space-between' : 'center',
-          gap: 8,
-          borderWidth: kind === 'text' ? 0 : line.control,
-          borderStyle: isClosed ? 'dashed' : 'solid',
-          borderColor: isClosed || kind === 'quiet' ? colors.rule : kind === 'danger' ? colors.methyl : 'transparent',
-          backgroundColor: isClosed
-            ? kind === 'text' ? 'transparent' : colors.well
-            : kind === 'primary'
-              ? isHovered || isPressed ? colors.actionDown : colors.action
-              : isHovered || isPressed ? colors.well : kind === 'text' ? 'transparent' : colors.paper,
-        })}
+        isPressedIn={isPressedIn}
+        isExpanded={isExpanded}
+        testID={testID}
+        style={(state) => buttonStyle(look, isClosed, state, colors)}
       >
-        <View style={{ flexDirection: 'row', alignItems: 'center', gap: 8 }}>
-          {icon && <Icon name={icon} tone={tone} />}
-          <Text variant={isSmall ? 'small' : 'body'} weight={600} tone={tone} lines={1}>
-            {children}
-          </Text>
-        </View>
-        {keyCap !== undefined && <KeyCap isOnFill={kind === 'primary' && !isClosed}>{keyCap}</KeyCap>}
+        <ButtonFace look={look} isClosed={isClosed}>
+          {children}
+        </ButtonFace>
       </Pressable>
       {closed ? (
         <Text id={why} variant="small" tone="ink2" align="center" style={{ marginTop: 6 }}>
           {closed}
         </Text>
       ) : null}
+    </View>
+  );
+}
+
+export interface ButtonLinkProps extends ButtonLook {
+  readonly children: ReactNode;
+  readonly href: string;
+  readonly isWide?: boolean | undefined;
+  readonly label?: string | undefined;
+  readonly testID?: string | undefined;
+}
+
+/** The look of a button for something that leads to another screen. */
+export function ButtonLink({ children, href, isWide = false, label, testID, ...look }: ButtonLinkProps) {
+  const colors = useColors();
+  const follow = useFollow(href);
+  return (
+    <View style={isWide ? { alignSelf: 'stretch' } : null}>
+      <Pressable role="link" href={href} onPress={follow} label={label} testID={testID} style={(state) => buttonStyle(look, false, state, colors)}>
+        <ButtonFace look={look} isClosed={false}>
+          {children}
+        </ButtonFace>
+      </Pressable>
     </View>
   );
 }

@@ -1,16 +1,32 @@
-import { useFonts as useExpoFonts } from 'expo-font';
+import { FontDisplay, useFonts } from 'expo-font';
+import mono400 from '../../assets/fonts/AtkinsonHyperlegibleMono_400Regular.ttf';
+import mono500 from '../../assets/fonts/AtkinsonHyperlegibleMono_500Medium.ttf';
+import mono600 from '../../assets/fonts/AtkinsonHyperlegibleMono_600SemiBold.ttf';
+import next400 from '../../assets/fonts/AtkinsonHyperlegibleNext_400Regular.ttf';
+import next500 from '../../assets/fonts/AtkinsonHyperlegibleNext_500Medium.ttf';
+import next600 from '../../assets/fonts/AtkinsonHyperlegibleNext_600SemiBold.ttf';
+import stix from '../../assets/fonts/STIXTwoText_400Regular_Italic.ttf';
 import { faces } from './tokens';
 
-/** Whether the shipped fonts are in; nothing is drawn in a fallback face before. */
+/** NOTE `block` keeps a line empty until its face is in, so that no text is drawn twice in two widths. */
+const blocking = (uri: number) => ({ uri, display: FontDisplay.BLOCK });
+
+const first = {
+  [faces.Next400]: blocking(next400),
+  [faces.Next500]: blocking(next500),
+  [faces.Next600]: blocking(next600),
+  [faces.Mono500]: blocking(mono500),
+};
+
+const others = {
+  [faces.Mono400]: blocking(mono400),
+  [faces.Mono600]: blocking(mono600),
+  [faces.Stix]: blocking(stix),
+};
+
+/** Whether the faces of nearly all text are in; the rest, most of it symbols, arrives without holding up the page. */
 export function useShippedFonts(): boolean {
-  const [areLoaded, failure] = useExpoFonts({
-    [faces.Next400]: require('../../assets/fonts/AtkinsonHyperlegibleNext_400Regular.ttf'),
-    [faces.Next500]: require('../../assets/fonts/AtkinsonHyperlegibleNext_500Medium.ttf'),
-    [faces.Next600]: require('../../assets/fonts/AtkinsonHyperlegibleNext_600SemiBold.ttf'),
-    [faces.Mono400]: require('../../assets/fonts/AtkinsonHyperlegibleMono_400Regular.ttf'),
-    [faces.Mono500]: require('../../assets/fonts/AtkinsonHyperlegibleMono_500Medium.ttf'),
-    [faces.Mono600]: require('../../assets/fonts/AtkinsonHyperlegibleMono_600SemiBold.ttf'),
-    [faces.Stix]: require('../../assets/fonts/STIXTwoText_400Regular_Italic.ttf'),
-  });
+  const [areLoaded, failure] = useFonts(first);
+  useFonts(others);
   return areLoaded || failure !== null;
 }

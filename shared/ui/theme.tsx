@@ -1,7 +1,9 @@
 import { createContext, useContext, useEffect, useMemo, useState, type ReactNode } from 'react';
 import { useColorScheme } from 'react-native';
+import { adoptGlobalStyle } from './global-style';
 import { readStored, store } from './stored';
 import { palettes, type Colors } from './tokens';
+import { useMedia } from './use-media';
 
 export const themePreferences = ['device', 'light', 'dark'] as const;
 export type ThemePreference = (typeof themePreferences)[number];
@@ -22,13 +24,20 @@ const storedPreference = (): ThemePreference => themePreferences.find((known) =>
 export function ThemeProvider({ children }: { children: ReactNode }) {
   const device = useColorScheme();
   const [preference, setPreference] = useState(storedPreference);
-  const scheme = preference === 'device' ? (device === 'dark' ? 'dark' : 'light') : preference;
+  // Where the device forces its own colours, the drawings have to stand on them.
+  const isForced = useMedia('(forced-colors: active)', false);
+  const scheme = preference === 'device' || isForced ? (device === 'dark' ? 'dark' : 'light') : preference;
   const colors = palettes[scheme];
 
   useEffect(() => {
-    document.documentElement.style.colorScheme = scheme;
-    document.documentElement.style.backgroundColor = colors.bench;
-    document.documentElement.style.setProperty('--focus', colors.manganate);
+    adoptGlobalStyle();
+    const { style } = document.documentElement;
+    style.colorScheme = scheme;
+    style.backgroundColor = colors.bench;
+    style.setProperty('--focus', colors.manganate);
+    style.setProperty('--scrim', colors.scrim);
+    style.setProperty('--hair', colors.hair);
+    style.setProperty('--rule', colors.rule);
     document.querySelector('meta[name="theme-color"]')?.setAttribute('content', colors.paper);
   }, [scheme, colors]);
 

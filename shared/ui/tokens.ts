@@ -89,7 +89,11 @@ const dark: Colors = {
 
 export const palettes = { light: light as Colors, dark } as const;
 
-export const toastColors = {'light': {'ground': '#15202B', 'text': '#FCFDFB', 'border': '#15202B'}, 'dark': {'ground': '#1E282F', 'text': '#EAF0EE', 'border': '#728189'}} as const;
+/** A toast is dark in both themes. */
+export const toastColors = {
+  light: { ground: '#15202B', text: '#FCFDFB', border: '#15202B' },
+  dark: { ground: '#1E282F', text: '#EAF0EE', border: '#728189' },
+} as const;
 
 /** Families as fonts.ts loads them, one face a weight. */
 export const faces = {
@@ -133,8 +137,38 @@ export const radius = { scan: 2, keycap: 5, control: 8, pad: 10, toast: 10, vess
 
 export const line = { hair: 1, control: 1.5, focus: 2, scale: 1.75, tubeS: 1.5, tubeL: 2 } as const;
 
-export const size = { touch: 44, touchWide: 36, padKey: 50, button: 44, buttonLarge: 52, field: 48, fieldReading: 52, fieldReadingWide: 84, rowWide: 40, chip: 40, chipWide: 34, topBar: 56, topBarWide: 60, tabBar: 66, column: 200, columnSlim: 64, sheet: 412, tubeS: 26, tubeM: 38, tubeL: 96 } as const;
+export const size = {
+  touch: 44,
+  touchWide: 36,
+  padKey: 50,
+  button: 44,
+  buttonLarge: 52,
+  field: 48,
+  fieldReading: 52,
+  fieldReadingWide: 84,
+  rowWide: 40,
+  chip: 40,
+  chipWide: 34,
+  topBar: 56,
+  topBarWide: 60,
+  tabBar: 66,
+  column: 200,
+  columnSlim: 64,
+  sheet: 412,
+  tubeS: 26,
+  tubeM: 38,
+  tubeL: 96,
+} as const;
 
 export const breakpoint = { phone: 0, middle: 720, wide: 1080, full: 1600 } as const;
+
+/** What lifts: a scan off its mat, a side sheet to its left, a toast. Nothing else has a shadow. */
+export const shadow = {
+  scan: '0 1px 3px rgba(10, 20, 30, 0.18)',
+  sheet: '-10px 0 28px rgba(10, 20, 30, 0.12)',
+  toast: '0 6px 20px rgba(10, 20, 30, 0.22)',
+} as const;
+
+export const curves = { settle: 'cubic-bezier(0.2, 0.8, 0.2, 1)', slide: 'cubic-bezier(0.2, 0, 0, 1)', fade: 'linear' } as const;
 
 export const motion = { settleMs: 240, slideMs: 200, fadeMs: 120, toastStayMs: 8000, loadingWordsMs: 400 } as const;

@@ -28,6 +28,8 @@ export interface VesselProps {
   readonly onKeyDown?: (key: string, event: { preventDefault(): void }) => void;
   readonly onBlur?: () => void;
   readonly isFocusedFirst?: boolean;
+  /** Letters are commands of the screen while this field is empty. */
+  readonly takesCommands?: boolean;
   readonly inputRef?: Ref<TextInput>;
   readonly testID?: string;
 }
@@ -50,6 +52,8 @@ export function Vessel(props: VesselProps) {
   const below = useId();
   const wall = error ? colors.methyl : isInHand ? colors.manganate : colors.rule;
   const width = error || isInHand ? line.focus : line.control;
+  // The hint speaks, so it is set in the interface's face even where the content is measured.
+  const isMeasured = type[variant].face.startsWith('Mono');
   const described = error || help ? { 'aria-describedby': below } : {};
   return (
     <View style={{ alignSelf: 'stretch' }}>
@@ -71,6 +75,13 @@ export function Vessel(props: VesselProps) {
           alignItems: 'center',
         }}
       >
+        {isMeasured && value === '' && props.placeholder ? (
+          <View style={{ position: 'absolute', left: 14, right: 14, top: 0, bottom: 0, justifyContent: 'center', pointerEvents: 'none' }}>
+            <Text tone="ink3" lines={1}>
+              {props.placeholder}
+            </Text>
+          </View>
+        ) : null}
         <TextInput
           ref={props.inputRef}
           value={value}
@@ -78,8 +89,9 @@ export function Vessel(props: VesselProps) {
           aria-label={label}
           {...described}
           {...(error ? ({ 'aria-invalid': true } as object) : {})}
-          placeholder={props.placeholder ?? ''}
-          placeholderTextColor={colors.ink3}
+          {...(isMeasured ? {} : { placeholder: props.placeholder ?? '', placeholderTextColor: colors.ink3 })}
+          {...(isMeasured && props.placeholder ? ({ 'aria-placeholder': props.placeholder } as object) : {})}
+          {...(props.takesCommands ? ({ dataSet: { commands: 'while-empty' } } as object) : {})}
           secureTextEntry={props.isSecret ?? false}
           readOnly={isReadOnly}
           multiline={lines > 1}
@@ -97,7 +109,8 @@ export function Vessel(props: VesselProps) {
             props.onBlur?.();
           }}
           onSubmitEditing={props.onSubmit}
-          submitBehavior="submit"
+          // NOTE the web knows only this older name; without it Enter takes the focus from the field.
+          blurOnSubmit={false}
           onKeyPress={(event) => props.onKeyDown?.(event.nativeEvent.key, event)}
           {...(props.testID === undefined ? {} : { testID: props.testID })}
           style={{
