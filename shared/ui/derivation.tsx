@@ -14,6 +14,8 @@ export interface DerivationColumn {
   readonly isAsked: boolean;
   /** Further out than the electron asked for: it screens nothing. */
   readonly isOuter: boolean;
+  /** A slip puts its own term in the place of the key's, which then stands above it, struck out. */
+  readonly keyTerm?: { readonly counted: number; readonly coefficient: string } | undefined;
 }
 
 export interface DerivationProps {
@@ -23,24 +25,27 @@ export interface DerivationProps {
   readonly zeff: string;
   /** Which of the two is the key. */
   readonly asked: 'zeff' | 'sigma';
+  /** What follows is a hand's, not the key's. */
+  readonly isSlip?: boolean | undefined;
 }
 
 /** A computed value group by group: columns with a brace, their sum, then the difference, and a bar as long as the nuclear charge. */
-export function Derivation({ groups, nuclearCharge, sigma, zeff, asked }: DerivationProps) {
+export function Derivation({ groups, nuclearCharge, sigma, zeff, asked, isSlip = false }: DerivationProps) {
   const colors = useColors();
+  const hasStruck = groups.some(({ keyTerm }) => keyTerm !== undefined);
   return (
     <View>
       <View style={{ flexDirection: 'row', flexWrap: 'wrap', rowGap: 12, columnGap: 4 }}>
         {groups.map((group) => (
-          <Column key={group.subshells.map(({ label }) => label).join(' ')} group={group} />
+          <Column key={group.subshells.map(({ label }) => label).join(' ')} group={group} hasStruck={hasStruck} />
         ))}
       </View>
       <View style={{ height: 1.5, backgroundColor: colors.ink2, marginVertical: 6 }} />
-      <Line isKey={asked === 'sigma'} value={sigma}>
+      <Line isKey={asked === 'sigma'} isSlip={isSlip} value={sigma}>
         <Symbol>σ</Symbol>
         <Text tone="ink2"> = sum of the columns</Text>
       </Line>
-      <Line isKey={asked === 'zeff'} value={zeff}>
+      <Line isKey={asked === 'zeff'} isSlip={isSlip} value={zeff}>
         <Zeff />
         {' = '}
         <Symbol>Z</Symbol>
@@ -49,17 +54,18 @@ export function Derivation({ groups, nuclearCharge, sigma, zeff, asked }: Deriva
         <Text tone="ink2">{' = '}</Text>
         <Text variant="readingS" weight={400} tone="ink2">{`${nuclearCharge} − ${sigma}`}</Text>
       </Line>
-      <Bar groups={groups} nuclearCharge={nuclearCharge} sigma={sigma} zeff={zeff} />
+      <Bar groups={groups} nuclearCharge={nuclearCharge} sigma={sigma} zeff={zeff} isSlip={isSlip} />
     </View>
   );
 }
 
-function Column({ group }: { group: DerivationColumn }) {
+function Column({ group, hasStruck }: { group: DerivationColumn; hasStruck: boolean }) {
   const colors = useColors();
-  const { subshells, counted, coefficient, contribution, isAsked, isOuter } = group;
+  const { subshells, counted, coefficient, contribution, isAsked, isOuter, keyTerm } = group;
   const electrons = subshells.reduce((sum, subshell) => sum + subshell.electrons, 0);
   const weight = isAsked ? 600 : 400;
   const tone = isOuter ? 'ink3' : 'ink';
+  const ours = keyTerm ? 'manganate' : tone;
   return (
     <View style={{ flexGrow: 1, flexBasis: 84, alignItems: 'center' }}>
       <Text variant="body" weight={weight} tone={tone} lines={1}>
@@ -77,19 +83,26 @@ function Column({ group }: { group: DerivationColumn }) {
       <Svg width={76} height={9} viewBox="0 0 76 9" fill="none" aria-hidden>
         <Path d="M2,1 Q2,5 6,5 H34 L38,8.5 L42,5 H70 Q74,5 74,1" stroke={isAsked ? colors.copper : colors.rule} strokeWidth={1.5} strokeLinejoin="round" />
       </Svg>
-      <Text variant="readingS" weight={400} tone={tone}>{`${counted} × ${coefficient}`}</Text>
-      <Text variant="reading" tone={tone}>
+      {keyTerm ? (
+        <Text variant="readingS" weight={400} tone="ink3" style={{ textDecorationLine: 'line-through' }} label={`instead of ${keyTerm.counted} × ${keyTerm.coefficient}`}>
+          {`${keyTerm.counted} × ${keyTerm.coefficient}`}
+        </Text>
+      ) : hasStruck ? (
+        <Text variant="readingS" />
+      ) : null}
+      <Text variant="readingS" weight={keyTerm ? 600 : 400} tone={ours}>{`${counted} × ${coefficient}`}</Text>
+      <Text variant="reading" tone={ours}>
         {contribution}
       </Text>
     </View>
   );
 }
 
-function Line({ children, value, isKey }: { children: ReactNode; value: string; isKey: boolean }) {
+function Line({ children, value, isKey, isSlip }: { children: ReactNode; value: string; isKey: boolean; isSlip: boolean }) {
   return (
     <View style={{ flexDirection: 'row', justifyContent: 'space-between', alignItems: 'baseline', gap: 12 }}>
       <Text style={{ flexShrink: 1 }}>{children}</Text>
-      <Text variant={isKey ? 'readingM' : 'reading'} weight={isKey ? 600 : 500} tone={isKey ? 'copper' : 'ink'}>
+      <Text variant={isKey ? 'readingM' : 'reading'} weight={isKey ? 600 : 500} tone={isSlip ? 'manganate' : isKey ? 'copper' : 'ink'}>
         {value}
       </Text>
     </View>
@@ -97,7 +110,7 @@ function Line({ children, value, isKey }: { children: ReactNode; value: string; 
 }
 
 /** Hatched parts are screened, the solid rest is what is left. */
-function Bar({ groups, nuclearCharge, sigma, zeff }: Omit<DerivationProps, 'asked'>) {
+function Bar({ groups, nuclearCharge, sigma, zeff, isSlip = false }: Omit<DerivationProps, 'asked'>) {
   const colors = useColors();
   const hatch = useId();
   const [width, setWidth] = useState(0);
@@ -117,13 +130,13 @@ function Bar({ groups, nuclearCharge, sigma, zeff }: Omit<DerivationProps, 'aske
               </Pattern>
             </Defs>
             {parts.map((part, index) => (part > 0 ? <Rect key={index} x={(ends[index] ?? 1) - part} y={1} width={part} height={18} fill={`url(#${hatch})`} stroke={colors.ink2} /> : null))}
-            <Rect x={screened} y={1} width={Math.max(0, width - 1 - screened)} height={18} fill={colors.copperFluid} stroke={colors.copper} strokeWidth={1.5} />
+            <Rect x={screened} y={1} width={Math.max(0, width - 1 - screened)} height={18} fill={isSlip ? colors.manganateFluid : colors.copperFluid} stroke={isSlip ? colors.manganate : colors.copper} strokeWidth={1.5} />
           </Svg>
         )}
       </View>
       <View style={{ flexDirection: 'row', justifyContent: 'space-between' }}>
         <Text variant="label" weight={400} tone="ink2">{`screened ${sigma}`}</Text>
-        <Text variant="label" weight={600} tone="copper">{`left ${zeff}`}</Text>
+        <Text variant="label" weight={600} tone={isSlip ? 'manganate' : 'copper'}>{`left ${zeff}`}</Text>
       </View>
     </View>
   );

@@ -3,30 +3,39 @@ import { Text } from './text';
 import { Tube, type TubeProps } from './tube';
 import { size } from './tokens';
 
-interface MarkStandProps extends TubeProps {
+export interface MarkStandProps extends Omit<TubeProps, 'height'> {
   /** The marks given and available, as text: shares of a mark are not decimals. */
   readonly gotText: string;
   readonly ofText: string;
-  readonly scale?: 'row' | 'desk' | 'total';
+  readonly scale?: 'row' | 'desk' | 'total' | undefined;
+  /** Spoken after the mark, such as `slip a`. */
+  readonly spokenAfter?: string | undefined;
 }
 
 const heights = { row: size.tubeS, desk: size.tubeM, total: size.tubeL } as const;
 const variants = { row: 'body', desk: 'title', total: 'total' } as const;
+const asides = { row: 'small', desk: 'body', total: 'title' } as const;
+
+function spoken({ state, gotText, ofText, stopper, spokenAfter }: MarkStandProps): string {
+  const mark = state === 'held' ? 'held' : state === 'unread' ? 'not read' : `${gotText} of ${ofText} marks`;
+  const parts = [mark, state === 'ruled' ? 'ruled' : '', stopper === 'in' ? 'released' : stopper === 'out' ? 'disputed' : '', spokenAfter ?? ''];
+  return parts.filter((part) => part !== '').join(', ');
+}
 
 /** A tube with its numeral: the only way a mark may stand. */
-export function MarkStand({ gotText, ofText, scale = 'row', ...tube }: MarkStandProps) {
+export function MarkStand(props: MarkStandProps) {
+  const { gotText, ofText, scale = 'row', spokenAfter: _spoken, ...tube } = props;
   const isMark = tube.state === 'given' || tube.state === 'ruled';
-  const spoken = isMark ? `${gotText} of ${ofText} marks${tube.state === 'ruled' ? ', ruled' : ''}` : tube.state === 'held' ? 'held' : 'not read';
   return (
-    <View role="img" aria-label={spoken} style={{ flexDirection: 'row', alignItems: 'center', gap: scale === 'row' ? 7 : 12 }}>
+    <View role="img" aria-label={spoken(props)} style={{ flexDirection: 'row', alignItems: 'center', gap: scale === 'row' ? 7 : 12 }}>
       <Tube {...tube} height={heights[scale]} />
       {isMark ? (
-        <Text variant={variants[scale]} weight={600} tone={tube.state === 'ruled' ? 'manganate' : 'ink'}>
+        <Text variant={variants[scale]} weight={600} tone={tube.state === 'ruled' ? 'manganate' : 'ink'} lines={1}>
           {gotText}
-          <Text variant="small" tone="ink3">{` / ${ofText}`}</Text>
+          <Text variant={asides[scale]} weight={400} tone="ink3">{` / ${ofText}`}</Text>
         </Text>
       ) : (
-        <Text variant={tube.state === 'held' ? 'small' : 'body'} weight={600} tone={tube.state === 'held' ? 'iodine' : 'ink'}>
+        <Text variant={tube.state === 'held' ? 'small' : 'body'} weight={600} tone={tube.state === 'held' ? 'iodine' : 'ink2'}>
           {tube.state === 'held' ? 'held' : '–'}
         </Text>
       )}

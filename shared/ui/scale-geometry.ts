@@ -72,3 +72,71 @@ export function outlineOf(steps: readonly DrawnBand[], base: number): string {
     .join(' ');
   return `M${outer.left},${base} ${up} ${down}`;
 }
+
+export interface LabelBox {
+  readonly at: number;
+  readonly width: number;
+}
+
+export interface LaidLabel {
+  readonly row: number;
+  readonly anchor: 'start' | 'middle' | 'end';
+  readonly left: number;
+}
+
+const gapBetween = 10;
+
+/** Rows for labels over their lines: the lowest row where one fits beside those already there, leaning left or right of its line where it must. Boxes come from left to right. */
+export function layOutLabels(boxes: readonly LabelBox[], limits: { readonly from: number; readonly to: number }): LaidLabel[] {
+  const ends: number[] = [];
+  return boxes.map(({ at, width }) => {
+    const choices = (['middle', 'start', 'end'] as const)
+      .map((anchor) => ({ anchor, left: anchor === 'middle' ? at - width / 2 : anchor === 'start' ? at : at - width }))
+      .filter(({ left }) => left >= limits.from && left + width <= limits.to);
+    const fallback = { anchor: at > (limits.from + limits.to) / 2 ? ('end' as const) : ('start' as const), left: at > (limits.from + limits.to) / 2 ? at - width : at };
+    for (let row = 0; row <= ends.length; row += 1) {
+      const free = ends[row] ?? -Infinity;
+      const fits = (choices.length > 0 ? choices : [fallback]).find(({ left }) => left >= free + gapBetween);
+      if (!fits && row < ends.length) continue;
+      const laid = fits ?? fallback;
+      ends[row] = laid.left + width;
+      return { row, ...laid };
+    }
+    return { row: 0, ...fallback };
+  });
+}
+
+export interface ScaleColumn {
+  readonly at: number;
+  readonly count: number;
+}
+
+export interface HungColumn extends ScaleColumn {
+  readonly x: number;
+  readonly length: number;
+  readonly isCountShown: boolean;
+}
+
+const roomForCount = 26;
+
+/** Columns as long as their counts, the longest filling the depth; a count is written from 8 up, or where no neighbour to the right is in its way. */
+export function hangColumns(columns: readonly ScaleColumn[], place: (value: number) => number, depth: number): HungColumn[] {
+  const most = Math.max(1, ...columns.map(({ count }) => count));
+  const sorted = [...columns].sort((one, other) => one.at - other.at);
+  return sorted.map((column, index) => {
+    const x = place(column.at);
+    const next = sorted[index + 1];
+    const hasRoom = next === undefined || place(next.at) - x >= roomForCount;
+    return { ...column, x, length: Math.max(6, (depth * column.count) / most), isCountShown: column.count >= 8 || hasRoom };
+  });
+}
+
+/** How many readings lie below and above the scale. */
+export function beyond(columns: readonly ScaleColumn[], { lo, hi }: Pick<ScaleLimits, 'lo' | 'hi'>): { low: number; high: number; within: ScaleColumn[] } {
+  const total = (some: readonly ScaleColumn[]) => some.reduce((sum, { count }) => sum + count, 0);
+  return {
+    low: total(columns.filter(({ at }) => at < lo)),
+    high: total(columns.filter(({ at }) => at > hi)),
+    within: columns.filter(({ at }) => at >= lo && at <= hi),
+  };
+}
