@@ -1,9 +1,10 @@
-import { useEffect, useId, useRef, type ReactNode } from 'react';
+import { useId, type ReactNode } from 'react';
 import { ScrollView, View } from 'react-native';
 import { Text } from './text';
 import { useColors } from './theme';
 import { radius } from './tokens';
 import { useIsPhone } from './use-breakpoint';
+import { useModal } from './use-modal';
 
 interface DialogProps {
   readonly title: string;
@@ -20,31 +21,13 @@ export function Dialog({ title, children, actions, onClose, width = 480, testID 
   const colors = useColors();
   const isPhone = useIsPhone();
   const heading = useId();
-  const element = useRef<HTMLDialogElement>(null);
-
-  useEffect(() => {
-    const dialog = element.current;
-    const before = document.activeElement;
-    dialog?.showModal();
-    return () => {
-      dialog?.close();
-      if (before instanceof HTMLElement) before.focus();
-    };
-  }, []);
-
+  const modal = useModal(onClose);
   return (
     <dialog
-      ref={element}
+      {...modal}
       aria-labelledby={heading}
       data-testid={testID}
-      onCancel={(event) => {
-        event.preventDefault();
-        onClose();
-      }}
       onKeyDown={(event) => event.stopPropagation()}
-      onClick={(event) => {
-        if (event.target === event.currentTarget) onClose();
-      }}
       style={{
         padding: 0,
         border: 'none',

@@ -35,6 +35,15 @@ const paths = {
   more: 'M4 10h.01M10 10h.01M16 10h.01',
   farther: 'M8.5 3.2a5.3 5.3 0 1 1 0 10.6 5.3 5.3 0 0 1 0-10.6M12.4 12.4 17 17M6.2 8.5h4.6',
   bench: 'M3 16.5h14M5 16.5V6.5M15 16.5V6.5M3 6.5h14M8 6.5V3.5h4v3',
+  question: 'M10 2.8a7.2 7.2 0 1 1 0 14.4 7.2 7.2 0 0 1 0-14.4M7.8 8.1a2.2 2.2 0 1 1 3.3 1.9c-.8.5-1.1.9-1.1 1.7M10 14.1v.01',
+  out: 'M8 3.5H3.5v13H8M12.5 6 16.5 10l-4 4M16.5 10H7.5',
+  link: 'M7.5 4.5h-4v12h12v-4M11 3.5h5.5V9M16.5 3.5 9 11',
+  download: 'M10 3v9.5M6 8.8l4 4 4-4M3.5 16.5h13',
+  upload: 'M10 13V3.5M6 7.2l4-4 4 4M3.5 16.5h13',
+  camera: 'M3 6h3.2L7.5 4h5l1.3 2H17v10.5H3zM10 8a3.2 3.2 0 1 1 0 6.4A3.2 3.2 0 0 1 10 8',
+  moderation: 'M2.5 4.5h8M2.5 8.5h8M2.5 12.5h5M2.5 16.5h5M12.5 6.2q2.2 3 4.5 0M10.5 13q3.2 4 6.5 0',
+  desk: 'M4 3.5h12v8H4zM7 6.5q3 3.5 6 0M1.5 7.5 3 6.5v2zM18.5 7.5 17 6.5v2zM7 16.5h6',
+  guard: 'M10 2.5 16.5 5v5c0 4-3 6.5-6.5 7.5C6.5 16.5 3.5 14 3.5 10V5zM7 10l2.2 2.2L13 8',
   invert: 'M10 3.2a6.8 6.8 0 1 1 0 13.6 6.8 6.8 0 0 1 0-13.6M10 3.2v13.6M10 6h3.6M10 9h5.4M10 12h5M10 15h3',
 } as const;
 
@@ -42,16 +51,18 @@ export type IconName = keyof typeof paths;
 
 interface IconProps {
   readonly name: IconName;
-  readonly size?: number;
-  readonly tone?: ColorRole;
+  readonly size?: number | undefined;
+  readonly tone?: ColorRole | undefined;
+  /** On a ground outside the themes, such as a toast. */
+  readonly color?: string | undefined;
 }
 
 /** A line icon. It says nothing to a screen reader: the control it stands in has the word. */
-export function Icon({ name, size = 20, tone = 'ink2' }: IconProps) {
+export function Icon({ name, size = 20, tone = 'ink2', color }: IconProps) {
   const colors = useColors();
   return (
     <Svg width={size} height={size} viewBox="0 0 20 20" fill="none" aria-hidden>
-      <Path d={paths[name]} stroke={colors[tone]} strokeWidth={name === 'more' ? 2.6 : 1.6} strokeLinecap="round" strokeLinejoin="round" />
+      <Path d={paths[name]} stroke={color ?? colors[tone]} strokeWidth={name === 'more' ? 2.6 : 1.6} strokeLinecap="round" strokeLinejoin="round" />
     </Svg>
   );
 }

@@ -1,5 +1,4 @@
 import { useEffect, useRef, type CSSProperties, type ReactNode } from 'react';
-import { createPortal } from 'react-dom';
 import { useColors } from './theme';
 import { radius, shadow } from './tokens';
 
@@ -7,50 +6,48 @@ interface PopoverProps {
   readonly id: string;
   readonly label: string;
   readonly onClose: () => void;
+  /** Its place on the screen. */
   readonly style: CSSProperties;
   readonly children: ReactNode;
 }
 
-/** A small sheet over the screen, at a fixed place: it takes the focus, and Escape, a press outside or following a link in it closes it. */
+/** A small sheet over the screen: it takes the focus; Escape, a press outside it or following a link in it closes it and gives the focus back. */
 export function Popover({ id, label, onClose, style, children }: PopoverProps) {
   const colors = useColors();
   const element = useRef<HTMLDivElement>(null);
-  const close = useRef(onClose);
   useEffect(() => {
-    close.current = onClose;
-  });
-  useEffect(() => {
-    const before = document.activeElement;
-    const inside = element.current?.querySelector<HTMLElement>('a[href], button');
-    (inside ?? element.current)?.focus();
-    const outside = (event: PointerEvent) => {
-      if (!element.current?.contains(event.target as Node)) close.current();
-    };
-    document.addEventListener('pointerdown', outside, true);
-    return () => {
-      document.removeEventListener('pointerdown', outside, true);
-      if (before instanceof HTMLElement && (document.activeElement === document.body || element.current?.contains(document.activeElement))) before.focus();
-    };
+    const sheet = element.current;
+    sheet?.showPopover();
+    sheet?.querySelector<HTMLElement>('a[href], button')?.focus();
   }, []);
-  return createPortal(
+  return (
     <div
       ref={element}
       id={id}
+      popover="auto"
       role="group"
       aria-label={label}
-      tabIndex={-1}
-      onKeyDown={(event) => {
-        if (event.key !== 'Escape') return;
-        event.stopPropagation();
-        onClose();
+      onToggle={(event) => {
+        if (event.newState === 'closed') onClose();
       }}
       onClick={(event) => {
-        if ((event.target as HTMLElement).closest('a[href]')) onClose();
+        if ((event.target as HTMLElement).closest('a[href]')) element.current?.hidePopover();
       }}
-      style={{ position: 'fixed', zIndex: 20, boxSizing: 'border-box', padding: 8, backgroundColor: colors.paper, border: `1px solid ${colors.rule}`, borderRadius: radius.control, boxShadow: shadow.toast, ...style }}
+      style={{
+        position: 'fixed',
+        inset: 'auto',
+        margin: 0,
+        boxSizing: 'border-box',
+        padding: 8,
+        backgroundColor: colors.paper,
+        color: colors.ink,
+        border: `1px solid ${colors.rule}`,
+        borderRadius: radius.control,
+        boxShadow: shadow.toast,
+        ...style,
+      }}
     >
       {children}
-    </div>,
-    document.body,
+    </div>
   );
 }

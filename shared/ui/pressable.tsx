@@ -21,6 +21,8 @@ export interface PressableProps {
   /** Of several places, the one this leads to is open. */
   readonly isCurrent?: boolean | undefined;
   readonly href?: string | undefined;
+  /** Of a row, in the whole list. */
+  readonly rowIndex?: number | undefined;
   readonly id?: string | undefined;
   /** The id of what it opens or shows. */
   readonly controls?: string | undefined;
@@ -28,6 +30,7 @@ export interface PressableProps {
   /** Draw the focus line inside, where a neighbour would cut it off. */
   readonly isFocusInside?: boolean | undefined;
   readonly onKeyDown?: ((key: string, event: { preventDefault(): void }) => void) | undefined;
+  readonly onLongPress?: (() => void) | undefined;
   readonly hostRef?: Ref<View> | undefined;
   readonly testID?: string | undefined;
 }
@@ -53,6 +56,7 @@ export function Pressable({ children, onPress, style, role = 'button', isDisable
     ...(rest.isChecked === undefined ? {} : { 'aria-checked': rest.isChecked }),
     ...(rest.isCurrent ? { 'aria-current': 'page' } : {}),
     ...(rest.controls === undefined ? {} : { 'aria-controls': rest.controls }),
+    ...(rest.rowIndex === undefined ? {} : { 'aria-rowindex': rest.rowIndex }),
     ...(rest.href === undefined ? {} : { href: rest.href }),
     ...(rest.id === undefined ? {} : { nativeID: rest.id }),
     ...(rest.tabIndex === undefined ? {} : { tabIndex: rest.tabIndex }),
@@ -67,6 +71,7 @@ export function Pressable({ children, onPress, style, role = 'button', isDisable
       {...given}
       disabled={isDisabled}
       onPress={onPress}
+      {...(rest.onLongPress === undefined ? {} : { onLongPress: rest.onLongPress })}
       onHoverIn={() => setHovered(true)}
       onHoverOut={() => setHovered(false)}
       onPressIn={() => setPressed(true)}

@@ -38,7 +38,7 @@ export function useKeys(map: KeyMap, { letters = 'on', isOff = false, isInDialog
     if (isOff) return undefined;
     const hear = (event: KeyboardEvent) => {
       const isUnderDialog = document.querySelector('dialog[open]') !== null;
-      if (event.defaultPrevented || isUnderDialog !== isInDialog) return;
+      if (event.defaultPrevented || isUnderDialog !== isInDialog || document.querySelector(':popover-open')) return;
       const command = commandOf(event, placeOf(event.target), letters);
       if (command === null || isForControl(event.target, command)) return;
       const act = latest.current[command];
