@@ -1,5 +1,10 @@
 import { Slot } from 'expo-router';
+import { AppShell } from '../shared/screens/shell/app-shell';
 
 export default function RootLayout() {
-  return <Slot />;
+  return (
+    <AppShell>
+      <Slot />
+    </AppShell>
+  );
 }

@@ -1,5 +1,1 @@
-import { Text } from 'react-native';
-
-export default function Index() {
-  return <Text>Meniscus</Text>;
-}
+export { BenchScreen as default } from '../shared/screens/bench/bench-screen';

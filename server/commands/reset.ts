@@ -2,7 +2,7 @@ import { rmSync } from 'node:fs';
 import { join } from 'node:path';
 import { readConfig } from '../config/config';
 import { startContext } from '../start-context';
-import { drawDemoPages, seedDemo, signInLines } from './demo';
+import { seedDemo, signInLines } from './demo';
 
 const config = readConfig();
 
@@ -12,10 +12,6 @@ for (const name of ['meniscus.sqlite', 'meniscus.sqlite-wal', 'meniscus.sqlite-s
 }
 
 const { context, close } = startContext(config);
-const seeded = await seedDemo(context);
-context.jobs.run();
-await drawDemoPages(context, seeded, new AbortController().signal, (line) => console.log(line));
-await context.jobs.settle();
-for (const line of signInLines()) console.log(line);
+await seedDemo(context);
 await close();
-process.exit(0);
+for (const line of signInLines()) console.log(line);

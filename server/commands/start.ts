@@ -1,7 +1,7 @@
 import { readConfig } from '../config/config';
 import { startServer } from '../index';
 import { buildWeb, isWebStale } from './build-web';
-import { demoIsWanted, drawDemoPages, seedDemo, signInLines } from './demo';
+import { demoIsWanted, seedDemo, signInLines } from './demo';
 
 const config = readConfig();
 
@@ -11,25 +11,11 @@ if (isWebStale(config.webDir)) {
 }
 
 const server = await startServer(config);
-const stopDrawing = new AbortController();
-let stopping = false;
+for (const signal of ['SIGINT', 'SIGTERM'] as const) process.on(signal, () => void server.stop().then(() => process.exit(0)));
 
-async function stop(): Promise<void> {
-  if (stopping) return;
-  stopping = true;
-  stopDrawing.abort();
-  await server.stop();
-  process.exit(0);
+if (demoIsWanted(server.context)) {
+  console.log('Making the demo.');
+  await seedDemo(server.context);
 }
-process.on('SIGINT', () => void stop());
-process.on('SIGTERM', () => void stop());
-
-const seeded = demoIsWanted(server.context) ? await seedDemo(server.context) : null;
 console.log(`\nMeniscus is at ${server.address}`);
 if (config.demo) for (const line of signInLines()) console.log(line);
-console.log('');
-if (seeded) {
-  await drawDemoPages(server.context, seeded, stopDrawing.signal, (line) => console.log(line)).catch((error: unknown) => {
-    if (!stopping) throw error;
-  });
-}

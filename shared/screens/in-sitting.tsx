@@ -1,6 +1,9 @@
+import { usePathname } from 'expo-router';
 import type { ReactNode } from 'react';
-import { ScrollView, View } from 'react-native';
-import { useColors } from '../ui/theme';
+import { useProgress, useSitting } from '../client/sittings';
+import { Burette } from '../ui/burette';
+import { ScreenFrame } from '../ui/screen-frame';
+import { levelOf, sections, stagesOf } from './frame/stages';
 
 interface InSittingProps {
   readonly sittingId: string;
@@ -9,12 +12,26 @@ interface InSittingProps {
   readonly isFixed?: boolean;
 }
 
-/** What stands round every screen of a sitting. */
-export function InSitting({ children, isFixed = false }: InSittingProps) {
-  const colors = useColors();
+const icons = { paper: 'note', regions: 'page', 'class-list': 'people' } as const;
+
+/** What stands round every screen of a sitting: its burette at the left of a wide screen, its places at the foot of a phone. */
+export function InSitting({ sittingId, children, isFixed = false }: InSittingProps) {
+  const path = usePathname();
+  const chosen = sections.find((section) => path.endsWith(`/${section}`)) ?? null;
+  const { data: sitting } = useSitting(sittingId);
+  const { data: progress } = useProgress(sittingId);
+  const stages = stagesOf(sitting ?? { id: sittingId, roles: [] }, progress, chosen);
+  const places = [
+    { label: 'Bench', href: '/', icon: 'bench' as const, isChosen: false },
+    ...stages.flatMap((stage, index) => {
+      const section = sections[index];
+      return stage.href && section ? [{ label: stage.label, href: stage.href, icon: icons[section], isChosen: section === chosen }] : [];
+    }),
+  ];
+  const name = stages.find((stage) => stage.isChosen)?.label ?? 'Sitting';
   return (
-    <View role="main" style={{ flex: 1, backgroundColor: colors.paper }}>
-      {isFixed ? children : <ScrollView contentContainerStyle={{ flexGrow: 1 }}>{children}</ScrollView>}
-    </View>
+    <ScreenFrame name={sitting ? `${name}, ${sitting.courseCode}` : name} isHeadHidden isFixed={isFixed} places={places} rail={<Burette stages={stages} level={levelOf(progress)} />}>
+      {children}
+    </ScreenFrame>
   );
 }

@@ -33,9 +33,9 @@ function createTestClock(): TestClock {
 let sharedHash: Promise<string> | undefined;
 
 /** A fresh migrated database with the cast, real everything but the clock. */
-export async function startTestServer(): Promise<TestServer> {
+export async function startTestServer(variables: Readonly<Record<string, string>> = {}): Promise<TestServer> {
   const dataDir = mkdtempSync(join(tmpdir(), 'meniscus-test-'));
-  const config = readConfig({ NODE_ENV: 'test', DATA_DIR: dataDir, LOG_LEVEL: process.env.TEST_LOG_LEVEL ?? 'silent', DEMO: 'false', SIGN_IN_TRIES: '50' });
+  const config = readConfig({ NODE_ENV: 'test', DATA_DIR: dataDir, LOG_LEVEL: process.env.TEST_LOG_LEVEL ?? 'silent', DEMO: 'false', SIGN_IN_TRIES: '50', ...variables });
   const clock = createTestClock();
   const { context, close } = startContext(config, clock);
   sharedHash ??= hashPassword(castPassword);

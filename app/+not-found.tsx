@@ -1,0 +1,1 @@
+export { NotFoundScreen as default } from '../shared/screens/shell/not-found-screen';

@@ -1,0 +1,1 @@
+export { SignInScreen as default } from '../shared/screens/sign-in/sign-in-screen';
