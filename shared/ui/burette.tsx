@@ -32,7 +32,7 @@ const left = 18;
 export function Burette({ stages, level, isClosed }: BuretteProps) {
   return (
     <View style={{ flexDirection: 'row', width: size.column }}>
-      <View style={{ width: 60 }}>
+      <View style={{ width: 48 }}>
         <BuretteTube stages={stages.length} level={level} step={step} left={left} isClosed={isClosed} />
       </View>
       <View role="list" style={{ flex: 1, minWidth: 0, paddingTop: 26, paddingRight: 8 }}>

@@ -33,13 +33,14 @@ function ground(kind: ButtonKind, isClosed: boolean, isDown: boolean, colors: Co
 export function buttonStyle({ kind = 'quiet', isLarge = false, isSmall = false, align = 'center' }: ButtonLook, isClosed: boolean, { isHovered, isPressed }: PressState, colors: Colors): ViewStyle {
   const isDown = isHovered || isPressed;
   return {
+    paddingVertical: 4,
     minHeight: isLarge ? size.buttonLarge : isSmall ? size.touchWide : size.button,
-    paddingHorizontal: kind === 'text' ? 8 : isSmall ? 12 : 16,
+    paddingHorizontal: kind === 'text' ? 8 : isSmall ? (align === 'between' ? 10 : 12) : 16,
     borderRadius: radius.control,
     flexDirection: 'row',
     alignItems: 'center',
     justifyContent: align === 'between' ? 'space-between' : 'center',
-    gap: 10,
+    gap: isSmall ? 6 : 10,
     borderWidth: kind === 'text' ? 0 : line.control,
     borderStyle: isClosed ? 'dashed' : 'solid',
     borderColor: isClosed ? colors.rule : kind === 'primary' && isDown ? colors.actionDown : colors[walls[kind]],
@@ -54,7 +55,7 @@ export function ButtonFace({ look, isClosed, children }: { look: ButtonLook; isC
     <>
       <View style={{ flexDirection: 'row', alignItems: 'center', gap: 8, flexShrink: 1, minWidth: 0 }}>
         {icon && <Icon name={icon} tone={tone} />}
-        <Text variant={isSmall ? 'small' : 'body'} weight={600} tone={tone} lines={1} style={{ flexShrink: 1 }}>
+        <Text variant={isSmall ? 'small' : 'body'} weight={600} tone={tone} align={look.align === 'between' ? 'left' : 'center'} style={{ flexShrink: 1 }}>
           {children}
         </Text>
         {iconAfter && <Icon name={iconAfter} tone={tone} size={16} />}

@@ -12,7 +12,7 @@ describe('the gutter of a long list', () => {
 
   it('shows which part is on view, never smaller than can be seen', () => {
     expect(gutterWindow(0, 18, 36, 500)).toEqual({ top: 0, height: 250 });
-    expect(gutterWindow(9_982, 10_000, 10_000, 500)).toEqual({ top: 488, height: 12 });
+    expect(gutterWindow(9_982, 10_000, 10_000, 500)).toEqual({ top: 480, height: 20 });
   });
 
   it('is empty for an empty list', () => {

@@ -14,6 +14,6 @@ export function gutterTicks(rows: readonly number[], total: number, height: numb
 /** The part of the list on view, as pixels of the gutter; never too small to see. */
 export function gutterWindow(from: number, to: number, total: number, height: number): { top: number; height: number } {
   if (!(total > 0)) return { top: 0, height: 0 };
-  const tall = Math.min(height, Math.max(12, ((to - from) / total) * height));
+  const tall = Math.min(height, Math.max(20, ((to - from) / total) * height));
   return { top: Math.min(height - tall, Math.max(0, (from / total) * height)), height: tall };
 }

@@ -30,7 +30,7 @@ export function MarkStand(props: MarkStandProps) {
     <View role="img" aria-label={spoken(props)} style={{ flexDirection: 'row', alignItems: 'center', gap: scale === 'row' ? 7 : 12 }}>
       <Tube {...tube} height={heights[scale]} />
       {isMark ? (
-        <Text variant={variants[scale]} weight={600} tone={tube.state === 'ruled' ? 'manganate' : 'ink'} lines={1}>
+        <Text variant={variants[scale]} weight={600} tone={tube.state === 'ruled' ? 'manganate' : 'ink'} lines={1} isTabular={scale === 'row'}>
           {gotText}
           <Text variant={asides[scale]} weight={400} tone="ink3">{` / ${ofText}`}</Text>
         </Text>

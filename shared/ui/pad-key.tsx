@@ -66,7 +66,7 @@ export function PadKey({ label, onPress, onLongPress, kind = 'digit', text, word
           </Text>
         )}
         {words === undefined ? null : (
-          <Text variant={isMeasured ? 'readingS' : 'small'} weight={isMeasured ? 500 : 600} tone={tone} lines={1}>
+          <Text variant={isMeasured ? 'reading' : 'body'} weight={isMeasured ? 500 : 600} tone={tone} lines={1}>
             {words}
           </Text>
         )}

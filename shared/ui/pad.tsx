@@ -78,7 +78,7 @@ export function Pad({ field, onType, onDelete, onEmpty, actions, signs, side = '
           {[first, second].map(({ label, onPress, isClosed, testID }) => (
             <PadKey key={label} label={label} onPress={onPress} kind="function" words={label} isClosed={isClosed} testID={testID} />
           ))}
-          <PadKey label={areSignsOpen ? 'Digits' : 'Other signs'} onPress={() => setSignsOpen(!areSignsOpen)} kind="function" isExpanded={areSignsOpen} words={areSignsOpen ? '0–9' : ', / + e'} isMeasured>
+          <PadKey label={areSignsOpen ? 'Digits 0–9' : 'Other signs, ,/+e'} onPress={() => setSignsOpen(!areSignsOpen)} kind="function" isExpanded={areSignsOpen} words={areSignsOpen ? '0–9' : ',/+e'} isMeasured>
             <Icon name={areSignsOpen ? 'down' : 'up'} size={16} />
           </PadKey>
           <PadKey label={last.label} onPress={last.onPress} kind={last.isPrimary === false ? 'function' : 'primary'} words={last.label} isClosed={last.isClosed} testID={last.testID} />

@@ -57,7 +57,7 @@ function RailPlace({ place, isSlim, isFoot = false }: { place: Place; isSlim: bo
       href={href}
       isCurrent={isChosen}
       isFocusInside
-      label={isSlim || count ? `${label}${count ? `, ${count}` : ''}` : undefined}
+      label={isSlim ? `${label}${count ? `, ${count}` : ''}` : undefined}
       style={({ isHovered }) => ({
         minHeight: isFoot ? 40 : size.touch,
         flexDirection: 'row',
@@ -91,8 +91,8 @@ function RailPlace({ place, isSlim, isFoot = false }: { place: Place; isSlim: bo
 function PersonLink({ person, isSlim }: { person: Person; isSlim: boolean }) {
   const colors = useColors();
   return (
-    <Link href={person.href} label={person.name} isFocusInside style={() => ({ minHeight: size.touch, flexDirection: 'row', alignItems: 'center', justifyContent: isSlim ? 'center' : 'flex-start', gap: 10, paddingHorizontal: isSlim ? 0 : 16 })}>
-      <View style={{ width: 36, height: 36, borderRadius: 18, borderWidth: 1, borderColor: colors.rule, alignItems: 'center', justifyContent: 'center' }}>
+    <Link href={person.href} label={isSlim ? person.name : undefined} isFocusInside style={() => ({ minHeight: size.touch, flexDirection: 'row', alignItems: 'center', justifyContent: isSlim ? 'center' : 'flex-start', gap: 10, paddingHorizontal: isSlim ? 0 : 16 })}>
+      <View aria-hidden style={{ width: 36, height: 36, borderRadius: 18, borderWidth: 1, borderColor: colors.rule, alignItems: 'center', justifyContent: 'center' }}>
         <Text variant="small" weight={600}>
           {person.initials}
         </Text>

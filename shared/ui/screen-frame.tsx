@@ -51,16 +51,16 @@ export function ScreenFrame(props: ScreenFrameProps) {
   const hasRail = isWide && (places.length > 0 || feet.length > 0 || props.rail !== undefined);
   const hasBar = !isWide && places.length > 1 && !props.isBarHidden;
   return (
-    <View style={{ flex: 1, flexDirection: 'row', backgroundColor: colors[ground], minHeight: 0 }}>
+    <View style={{ flex: 1, flexDirection: 'row', backgroundColor: colors[ground], minHeight: 0, overflow: 'hidden' }}>
       <SkipLink />
       {hasRail ? <PlaceRail places={places} feet={feet} person={props.person} rail={props.rail} isSlim={isRailSlim} /> : null}
       <View style={{ flex: 1, minWidth: 0, minHeight: 0 }}>
         {props.isHeadHidden ? null : <ScreenHead title={title ?? name} subtitle={props.subtitle} back={props.back} actions={props.actions} />}
-        {props.strip}
         <View role="main" nativeID={contentId} tabIndex={-1} style={{ flex: 1, minHeight: 0, minWidth: 0, outlineWidth: 0 }}>
-          {isFixed ? children : <ScrollView contentContainerStyle={{ flexGrow: 1 }}>{children}</ScrollView>}
+          {props.strip}
+          {isFixed ? <View style={{ flex: 1, minHeight: 0, minWidth: 0 }}>{children}</View> : <ScrollView style={{ flex: 1 }} contentContainerStyle={{ flexGrow: 1 }}>{children}</ScrollView>}
+          {props.foot}
         </View>
-        {props.foot}
         {hasBar ? <PlaceBar places={places.slice(0, 5)} /> : null}
       </View>
       {props.side}

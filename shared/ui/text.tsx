@@ -8,17 +8,19 @@ type Weight = 400 | 500 | 600;
 
 export interface TextProps {
   readonly children?: ReactNode;
-  readonly variant?: TypeStyle;
-  readonly tone?: Tone;
-  readonly weight?: Weight;
+  readonly variant?: TypeStyle | undefined;
+  readonly tone?: Tone | undefined;
+  readonly weight?: Weight | undefined;
   /** Makes it a heading of that level. */
-  readonly level?: 1 | 2 | 3;
-  readonly align?: 'left' | 'right' | 'center';
-  readonly lines?: number;
-  readonly live?: 'polite' | 'assertive';
-  readonly id?: string;
-  readonly label?: string;
-  readonly testID?: string;
+  readonly level?: 1 | 2 | 3 | undefined;
+  readonly align?: 'left' | 'right' | 'center' | undefined;
+  readonly lines?: number | undefined;
+  /** Figures of one width, for counts that stand under each other. */
+  readonly isTabular?: boolean | undefined;
+  readonly live?: 'polite' | 'assertive' | undefined;
+  readonly id?: string | undefined;
+  readonly label?: string | undefined;
+  readonly testID?: string | undefined;
   readonly style?: StyleProp<TextStyle>;
 }
 
@@ -32,7 +34,7 @@ export function faceOf(variant: TypeStyle, weight?: Weight): string {
 const tabular: TextStyle = { fontVariant: ['tabular-nums'] };
 
 /** All text of the app. Interface in Next, what is measured in Mono. */
-export function Text({ children, variant = 'body', tone = 'ink', weight, level, align, lines, live, id, label, testID, style }: TextProps) {
+export function Text({ children, variant = 'body', tone = 'ink', weight, level, align, lines, isTabular = false, live, id, label, testID, style }: TextProps) {
   const colors = useColors();
   const { size, line, tracking } = type[variant];
   return (
@@ -45,7 +47,7 @@ export function Text({ children, variant = 'body', tone = 'ink', weight, level, 
       {...(lines === undefined ? {} : { numberOfLines: lines })}
       style={[
         { fontFamily: faceOf(variant, weight), fontSize: size, lineHeight: line, letterSpacing: tracking, color: colors[tone] },
-        tabular,
+        isTabular ? tabular : null,
         align === undefined ? null : { textAlign: align },
         style,
       ]}
