@@ -1,4 +1,4 @@
-import { queryOptions, useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
+import { queryOptions, useMutation, useQuery, useQueryClient, type QueryClient } from '@tanstack/react-query';
 import type { ResponseOf, SentBodyOf } from '../contracts/route';
 import type { getMe, signIn } from '../contracts/session';
 import { api, ApiError } from './api';
@@ -21,6 +21,9 @@ export const meQueryOptions = () =>
     },
   });
 
+/** NOTE the query of who is signed in stays: a screen that watches it would not see a new one in its place. */
+const forgetOthersData = (client: QueryClient): void => client.removeQueries({ predicate: ({ queryKey }) => queryKey[0] !== 'me' });
+
 export const useMe = () => useQuery(meQueryOptions());
 
 export function useSignIn() {
@@ -28,7 +31,7 @@ export function useSignIn() {
   return useMutation({
     mutationFn: (body: SentBodyOf<typeof signIn>) => api<Me>('/session', { method: 'POST', body }),
     onSuccess: (me) => {
-      client.clear();
+      forgetOthersData(client);
       client.setQueryData(meQueryOptions().queryKey, me);
     },
   });
@@ -40,7 +43,7 @@ export function useSignOut() {
   return useMutation({
     mutationFn: (where: 'here' | 'everywhere') => api<void>(where === 'here' ? '/session' : '/sessions', { method: 'DELETE' }),
     onSuccess: () => {
-      client.clear();
+      forgetOthersData(client);
       client.setQueryData(meQueryOptions().queryKey, null);
     },
   });

@@ -129,7 +129,7 @@ function ElementField({ symbol, error, onChange }: { symbol: string; error: stri
       </Text>
       <Pressable
         onPress={() => setOpen(true)}
-        label={`${words.asked.element}: ${element.ok ? element.value.name : symbol}`}
+        label={`${words.asked.element}: ${text}${element.ok ? `, ${element.value.name}` : ''}`}
         isExpanded={isOpen}
         testID="element"
         style={({ isHovered }) => ({

@@ -37,7 +37,6 @@ export function ItemRow({ item, number, isChosen, grip, onKeyDown, onPress }: It
           onPress={onPress}
           isPressedIn={isChosen}
           testID={`item-row-${item.id}`}
-          label={`${words.rowName(number, worked.label, key, marks)}${needsLook ? `. ${worked.problems[0]?.message ?? ''}` : ''}`}
           style={({ isHovered }) => ({
             flex: 1,
             flexDirection: 'row',

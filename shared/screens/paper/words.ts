@@ -10,7 +10,6 @@ export const words = {
   item: (number: number) => `Item ${number}`,
   quantityOf: { zeff: 'Z_eff', sigma: 'σ' },
   title: (number: number, quantity: string, label: string) => `Item ${number}, ${quantity} of ${label}`,
-  rowName: (number: number, label: string, key: string, marks: string) => `Item ${number}, ${label}, key ${key}, ${marks} marks`,
   noKey: 'no key yet',
   moveUp: 'Move up',
   moveDown: 'Move down',

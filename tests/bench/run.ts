@@ -1,0 +1,12 @@
+import { startTestServer } from '../support/test-server';
+import { benchBundle } from './bundle';
+import { printLines } from './figures';
+import { benchRecording } from './recording';
+import { benchScoring } from './scoring';
+
+/** Every figure is a ratio to a floor measured in the same run; absolute times are this machine's. */
+const server = await startTestServer();
+const lines = [...(await benchRecording(server))];
+await server.close();
+lines.push(...(await benchScoring()), ...(await benchBundle()));
+process.exit(printLines(lines) ? 0 : 1);
