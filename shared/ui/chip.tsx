@@ -39,7 +39,7 @@ export function Chip({ children, count, glyph, isChosen, onPress, testID }: Chip
       {glyph}
       <Text variant="small" weight={isChosen ? 600 : 500} lines={1}>
         {children}
-        {count === undefined ? '' : `  ${count.toLocaleString('en-GB')}`}
+        {count === undefined ? '' : `\u2002${count.toLocaleString('en-GB')}`}
       </Text>
     </Pressable>
   );

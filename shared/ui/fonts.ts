@@ -1,4 +1,5 @@
 import { FontDisplay, useFonts } from 'expo-font';
+import { useEffect, useState } from 'react';
 import mono400 from '../../assets/fonts/AtkinsonHyperlegibleMono_400Regular.ttf';
 import mono500 from '../../assets/fonts/AtkinsonHyperlegibleMono_500Medium.ttf';
 import mono600 from '../../assets/fonts/AtkinsonHyperlegibleMono_600SemiBold.ttf';
@@ -24,9 +25,25 @@ const others = {
   [faces.Stix]: blocking(stix),
 };
 
-/** Whether the faces of nearly all text are in; the rest, most of it symbols, arrives without holding up the page. */
+/**
+ * Whether the faces of nearly all text are in; the rest, most of it symbols, arrives without holding up the page.
+ * NOTE every face that is declared makes the browser forget the ones before it, so each is asked for once more when all are declared.
+ */
 export function useShippedFonts(): boolean {
-  const [areLoaded, failure] = useFonts(first);
+  const [areDeclared, failure] = useFonts(first);
   useFonts(others);
-  return areLoaded || failure !== null;
+  const [areIn, setIn] = useState(false);
+  const isSettled = areDeclared || failure !== null;
+  useEffect(() => {
+    if (!isSettled) return undefined;
+    let isHere = true;
+    const done = () => {
+      if (isHere) setIn(true);
+    };
+    Promise.all(Object.keys(first).map((face) => document.fonts.load(`16px "${face}"`))).then(done, done);
+    return () => {
+      isHere = false;
+    };
+  }, [isSettled]);
+  return areIn;
 }

@@ -6,8 +6,8 @@ import { useColors } from './theme';
 import { motion } from './tokens';
 import { BrokenSign } from './vessel';
 
-/** What is being fetched: hairlines and graduations at once, without values; after a while one line says what is fetched. No spinner. */
-export function Loading({ children, rows = 6 }: { children: string; rows?: number }) {
+/** What is being fetched: hairlines and graduations at once, without values, where rows will stand; after a while one line says what is fetched. No spinner. */
+export function Loading({ children, rows = 6 }: { children: string; rows?: number | undefined }) {
   const colors = useColors();
   const [isLong, setLong] = useState(false);
   useEffect(() => {
@@ -21,13 +21,20 @@ export function Loading({ children, rows = 6 }: { children: string; rows?: numbe
           {isLong ? children : ''}
         </Text>
       </View>
-      <View aria-hidden style={{ flexDirection: 'row', height: 8, marginTop: 12, borderTopWidth: 1.5, borderColor: colors.hair, justifyContent: 'space-between' }}>
-        {Array.from({ length: 21 }, (_, index) => (
-          <View key={index} style={{ width: 1, height: index % 5 === 0 ? 8 : 4, backgroundColor: colors.hair }} />
-        ))}
-      </View>
+      {rows > 0 ? <Graduations /> : null}
       {Array.from({ length: rows }, (_, index) => (
         <View key={index} aria-hidden style={{ height: 40, borderBottomWidth: 1, borderColor: colors.hair }} />
+      ))}
+    </View>
+  );
+}
+
+function Graduations() {
+  const colors = useColors();
+  return (
+    <View aria-hidden style={{ flexDirection: 'row', height: 8, marginTop: 12, borderTopWidth: 1.5, borderColor: colors.hair, justifyContent: 'space-between' }}>
+      {Array.from({ length: 21 }, (_, index) => (
+        <View key={index} style={{ width: 1, height: index % 5 === 0 ? 8 : 4, backgroundColor: colors.hair }} />
       ))}
     </View>
   );

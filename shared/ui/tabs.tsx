@@ -63,7 +63,7 @@ export function Tabs<Key extends string>({ id, label, tabs, chosen, onChoose, is
               <>
                 <Text variant={isSmall ? 'small' : 'body'} weight={isChosen ? 600 : 400} tone={isChosen || isHovered ? 'ink' : 'ink2'} lines={1}>
                   {tab.label}
-                  {tab.count === undefined ? '' : `  ${tab.count.toLocaleString('en-GB')}`}
+                  {tab.count === undefined ? '' : `\u2002${tab.count.toLocaleString('en-GB')}`}
                 </Text>
                 <CurveUnderline isShown={isChosen} />
               </>
