@@ -6,6 +6,7 @@ import { Link } from '../../ui/link';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
 import { levelOf, stagesOf } from '../frame/stages';
+import { dayText } from '../times';
 import { words } from './words';
 
 const height = 28;
@@ -21,7 +22,7 @@ export function SittingStand({ sitting }: { sitting: SittingView }) {
       <BuretteTube stages={stages.length} level={levelOf(progress)} step={height * 2} />
       <View style={{ flex: 1, gap: 6, paddingTop: 16 }}>
         <Text variant="head" level={3}>{`${sitting.courseCode}, ${sitting.title}`}</Text>
-        <Text variant="small" tone="ink2">{`${sitting.heldOn}, paper ${sitting.lockedAt === null ? words.open : words.locked}`}</Text>
+        <Text variant="small" tone="ink2">{`${dayText(sitting.heldOn)}, paper ${sitting.lockedAt === null ? words.open : words.locked}`}</Text>
         {stages.map((stage) => (
           <Text key={stage.label} variant="small">
             <Text variant="small" weight={600}>{`${stage.label}: `}</Text>

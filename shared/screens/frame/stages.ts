@@ -1,6 +1,7 @@
 import type { ProgressView } from '../../contracts/progress';
 import type { SittingView } from '../../contracts/sittings';
 import type { BuretteStage } from '../../ui/burette';
+import { buretteLevel } from '../../ui/burette-geometry';
 
 export const sections = ['paper', 'regions', 'class-list'] as const;
 export type Section = (typeof sections)[number];
@@ -32,6 +33,5 @@ export function stagesOf(sitting: Pick<SittingView, 'id' | 'roles'>, progress: P
 export function levelOf(progress: ProgressView | undefined): number {
   if (!progress) return 0;
   const shares = [progress.isLocked ? 1 : 0, progress.items === 0 ? 0 : progress.itemsPlaced / progress.items, candidatesIn(progress) > 0 ? 1 : 0];
-  const firstUnfinished = shares.findIndex((share) => share < 1);
-  return firstUnfinished < 0 ? shares.length : firstUnfinished + (shares[firstUnfinished] ?? 0);
+  return buretteLevel(shares);
 }

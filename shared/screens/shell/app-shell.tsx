@@ -8,6 +8,7 @@ import { adoptGlobalStyle } from '../../ui/global-style';
 import { LinkProvider } from '../../ui/link';
 import { useShippedFonts } from '../../ui/fonts';
 import { ThemeProvider, useColors } from '../../ui/theme';
+import { ToastProvider } from '../../ui/toast';
 import { QueryState } from '../query-state';
 
 adoptGlobalStyle();
@@ -21,7 +22,9 @@ export function AppShell({ children }: { children: ReactNode }) {
     <ThemeProvider>
       <QueryClientProvider client={client}>
         <LinkProvider navigate={(href) => router.push(href as never)}>
-          <Ground>{hasFonts ? <Door>{children}</Door> : null}</Ground>
+          <ToastProvider>
+            <Ground>{hasFonts ? <Door>{children}</Door> : null}</Ground>
+          </ToastProvider>
         </LinkProvider>
       </QueryClientProvider>
     </ThemeProvider>
