@@ -13,7 +13,7 @@ async function axeViolations(page: Page): Promise<string[]> {
   return page.evaluate(async () => {
     const { axe } = globalThis as unknown as { axe: { run(options: object): Promise<{ violations: { id: string; nodes: { html: string }[] }[] }> } };
     const { violations } = await axe.run({ runOnly: ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'] });
-    return violations.map(({ id, nodes }) => `${id}: ${nodes[0]?.html ?? ''}`);
+    return violations.flatMap(({ id, nodes }) => nodes.map(({ html }) => `${id}: ${html}`));
   });
 }
 

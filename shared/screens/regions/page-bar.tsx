@@ -63,8 +63,8 @@ export function PageBar({ state, hasSample, canChange, isSending, dispatch, onPi
       </View>
       {canChange && next ? (
         <View style={{ alignSelf: 'flex-start' }}>
-          <Button isSmall icon="plus" label={words.place(`item ${next.number}, ${next.label}`)} onPress={() => dispatch({ act: 'place', id: newId(), item: next.id, use: 'answer' })} testID="place-next">
-            {words.place(`${next.number}  ${next.label}`)}
+          <Button isSmall icon="plus" onPress={() => dispatch({ act: 'place', id: newId(), item: next.id, use: 'answer' })} testID="place-next">
+            {words.place(`item ${next.number}, ${next.label}`)}
           </Button>
         </View>
       ) : null}

@@ -49,8 +49,8 @@ export function RegionsSide({ state, items, isLocked, errors, nameOf, placeOf, d
               <Text key={id} variant="small">{`${number}  ${label}`}</Text>
             ) : (
               <View key={id} style={{ alignSelf: 'flex-start' }}>
-                <Button kind="text" isSmall icon="plus" label={words.place(`item ${number}, ${label}`)} onPress={() => dispatch({ act: 'place', id: newId(), item: id, use: 'answer' })}>
-                  {words.place(`${number}  ${label}`)}
+                <Button kind="text" isSmall icon="plus" onPress={() => dispatch({ act: 'place', id: newId(), item: id, use: 'answer' })}>
+                  {words.place(`item ${number}, ${label}`)}
                 </Button>
               </View>
             ),
@@ -78,7 +78,6 @@ export function RegionsSide({ state, items, isLocked, errors, nameOf, placeOf, d
             key={box.id}
             onPress={() => dispatch({ act: 'select', id: box.id })}
             isPressedIn={box.id === state.selected}
-            label={nameOf(box)}
             style={({ isHovered }) => ({
               paddingVertical: 8,
               paddingHorizontal: 10,
