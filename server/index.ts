@@ -3,6 +3,7 @@ import type { AddressInfo } from 'node:net';
 import { createApp } from './app';
 import type { Config } from './config/config';
 import type { Context } from './context';
+import { keepSwept } from './services/sweeping';
 import { startContext } from './start-context';
 
 export interface RunningServer {
@@ -21,11 +22,13 @@ export async function startServer(config: Config, handlers: Parameters<typeof cr
   const { context, close } = startContext(config);
   const server = await listen(createApp(context, handlers), config);
   context.jobs.run();
+  const stopSweeping = keepSwept(context);
   const { port } = server.address() as AddressInfo;
   return {
     context,
     address: `http://${config.host === '0.0.0.0' ? 'localhost' : config.host}:${port}`,
     stop: async () => {
+      stopSweeping();
       await new Promise<void>((resolve) => {
         server.close(() => resolve());
         server.closeIdleConnections();

@@ -1,6 +1,6 @@
 import { and, asc, eq, isNull } from 'drizzle-orm';
 import type { Database } from '../client';
-import { answer, blob, candidate, exportFile, item, reading, readingEnd, ruling, rulingEnd, score, script, total } from '../schema';
+import { answer, candidate, exportFile, item, reading, readingEnd, ruling, rulingEnd, score, script, total } from '../schema';
 
 /** Every live script with its candidate and stored total, by candidate number. */
 export function scriptTotals(db: Database, sittingId: string) {
@@ -58,6 +58,3 @@ export function standingTexts(db: Database, sittingId: string): Map<string, { te
 export const insertExport = (db: Database, row: typeof exportFile.$inferInsert): void => void db.insert(exportFile).values(row).run();
 
 export const findExport = (db: Database, id: string) => db.select().from(exportFile).where(eq(exportFile.id, id)).get();
-
-/** Notes that the bytes of a hash are stored; known hashes stay as they are. */
-export const insertBlob = (db: Database, row: typeof blob.$inferInsert): void => void db.insert(blob).values(row).onConflictDoNothing().run();

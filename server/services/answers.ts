@@ -14,6 +14,7 @@ import type { AnswerView } from '../../shared/contracts/ledger';
 import { reasonInWords } from '../../shared/marking/reasons';
 import { scaleOf } from '../../shared/marking/scale';
 import type { GuardRole } from '../../shared/contracts/route';
+import { itemLabel } from '../../shared/marking/item-label';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
 import { notFound } from '../errors';
@@ -100,7 +101,7 @@ export function answerView(context: Context, actor: Actor, answerId: string): An
     candidateNumber: head.candidateNumber ?? '',
     itemId: head.item,
     itemNumber: head.itemNumber,
-    label: `${scheme.body.asked.symbol} ${scheme.body.asked.electron}`,
+    label: itemLabel(scheme.body.asked),
     prompt: head.prompt,
     units: [...scheme.body.units],
     maxGrains: head.maxGrains,

@@ -17,6 +17,7 @@ import {
   renewLeases,
 } from '../../db/queries/desk';
 import type { DeskItem, DeskLease, RecentReading } from '../../shared/contracts/desk';
+import { itemLabel } from '../../shared/marking/item-label';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
 import { notFound } from '../errors';
@@ -94,7 +95,7 @@ export function deskStanding(context: Context, actor: Actor, sittingId: string) 
     id,
     number,
     prompt,
-    label: `${body.asked.symbol} ${body.asked.electron}`,
+    label: itemLabel(body.asked),
     units: [...body.units],
     ...(counts.get(id) ?? { read: 0, toRead: 0 }),
   }));

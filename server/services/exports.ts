@@ -1,6 +1,7 @@
 import { v7 as uuidv7 } from 'uuid';
 import { inTransaction } from '../../db/client';
-import { findExport, insertBlob, insertExport, standingTexts } from '../../db/queries/totals';
+import { insertBlob } from '../../db/queries/blobs';
+import { findExport, insertExport, standingTexts } from '../../db/queries/totals';
 import { csvText } from '../../shared/marking/csv-cell';
 import { marksText } from '../../shared/marking/grains';
 import type { Actor } from '../auth/access';

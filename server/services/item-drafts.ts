@@ -1,12 +1,12 @@
 import { occupiedElectrons } from '../../shared/chemistry/configurations';
 import { divide, exactDecimals, fromFractionText, multiply, toDecimals, toFractionText, whole, type Exact } from '../../shared/chemistry/exact';
 import type { ProblemCode } from '../../shared/chemistry/result';
-import { speciesText } from '../../shared/chemistry/species';
 import { proposedStem } from '../../shared/chemistry/stem';
 import { work, type Worked } from '../../shared/chemistry/work';
 import type { BandDraft, ItemDraft, ItemProblem, WorkedDraft } from '../../shared/contracts/items';
 import { bandRange } from '../../shared/marking/bands';
 import { marksText } from '../../shared/marking/grains';
+import { itemLabel } from '../../shared/marking/item-label';
 import { readAnswer } from '../../shared/marking/read-answer';
 import { roundings } from '../../shared/marking/rounding';
 import { scaleOf } from '../../shared/marking/scale';
@@ -96,8 +96,6 @@ export function readDraft(draft: ItemDraft): ReadDraft {
   return { scheme, worked: worked.value, maxGrains, refusals, problems: problemsOf(scheme) };
 }
 
-export const labelOf = ({ symbol, charge, electron }: Asked): string => `${speciesText(symbol, charge)} ${electron}`;
-
 /** The accepted roundings of a key, fewest decimals last: of 61/10 "6.1", of 91/20 "4.5" and "4.6". */
 function roundingTexts({ key, roundings: policy }: ItemScheme): string[] {
   if (policy.downToDecimals === null) return [];
@@ -126,7 +124,7 @@ export function workDraft(draft: ItemDraft): WorkedDraft {
   const electrons = occupiedElectrons(draft.asked.symbol, draft.asked.charge);
   const drawable = scheme && scheme.bands.every((band) => rangeTexts(band, scheme.key) !== null);
   return {
-    label: labelOf(draft.asked),
+    label: itemLabel(draft.asked),
     key: worked && { value: toFractionText(worked.value), text: toDecimals(worked.value, draft.decimals), decimals: draft.decimals },
     derivation: worked?.derivation ?? null,
     scale: drawable ? scaleOf(scheme) : null,

@@ -3,13 +3,13 @@ import { inTransaction, type Database } from '../../db/client';
 import { boxesOfLayout, boxIsElsewhere, bumpLayout, deletePagesAfter, findLayout, insertLayout, layoutPages, replaceBoxes, saveLayoutPage, setPageSample, type BoxRow } from '../../db/queries/layouts';
 import { draftedItems } from '../../db/queries/papers';
 import { isPaperLocked } from '../../db/queries/sittings';
-import { insertBlob } from '../../db/queries/totals';
+import { insertBlob } from '../../db/queries/blobs';
 import { defaultPageMm, type LayoutView, type SentLayout } from '../../shared/contracts/layouts';
+import { itemLabel } from '../../shared/marking/item-label';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
 import { conflict, invalidRequest, notFound } from '../errors';
 import { recordAct } from './audit';
-import { labelOf } from './item-drafts';
 import { boxProblems } from './layout-checks';
 import { bumpSitting, requireOpenPaper, requireSitting } from './sitting-access';
 
@@ -29,7 +29,7 @@ function viewOf(db: Database, sittingId: string): LayoutView {
     boxes: boxes.map(({ layout: _layout, ...box }) => box),
     itemsWithoutBox: draftedItems(db, sittingId)
       .filter(({ item }) => !placed.has(item.id))
-      .map(({ item, scheme }) => ({ id: item.id, number: item.number, label: labelOf(scheme.asked) })),
+      .map(({ item, scheme }) => ({ id: item.id, number: item.number, label: itemLabel(scheme.asked) })),
     rev: layout?.rev ?? 0,
   };
 }

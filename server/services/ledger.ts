@@ -6,6 +6,7 @@ import type { QueryOf, ResponseOf } from '../../shared/contracts/route';
 import { reasonInWords } from '../../shared/marking/reasons';
 import { scaleOf } from '../../shared/marking/scale';
 import type { ItemScheme } from '../../shared/marking/scheme';
+import { itemLabel } from '../../shared/marking/item-label';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
 import { isCovered, shownGiven } from './covers';
@@ -73,7 +74,7 @@ export function ledger(context: Context, actor: Actor, sittingId: string, query:
   requireLockedPaper(context, sitting);
   const schemeVersion = sitting.schemeVersion ?? '';
   const question: LedgerQuestion = { sitting: sittingId, show: query.show, item: query.item, find: query.find, sort: query.sort, direction: query.direction };
-  const schemes = new Map(deskItems(db, schemeVersion).map(({ id, number, body }) => [id, { number, body, label: `${body.asked.symbol} ${body.asked.electron}` }]));
+  const schemes = new Map(deskItems(db, schemeVersion).map(({ id, number, body }) => [id, { number, body, label: itemLabel(body.asked) }]));
   const counts = countsByChip(ledgerCounts(db, question));
   const rows = ledgerRows(db, question, query.offset, query.limit);
   const ids = rows.map((row) => row.answerId);

@@ -2,13 +2,13 @@ import { v7 as uuidv7 } from 'uuid';
 import { inTransaction } from '../../db/client';
 import { endRuling, insertRuling, insertUncovered, rulingById } from '../../db/queries/answers';
 import { findReading, insertReading } from '../../db/queries/desk';
-import { readingsOfAnswers, uncoveredBy } from '../../db/queries/ledger';
+import { heldStates, readingsOfAnswers, uncoveredBy } from '../../db/queries/ledger';
 import { standingRuling, type RulingRow } from '../../db/queries/settling';
-import { whole, multiply } from '../../shared/chemistry/exact';
 import type { AnswerView, RulingBody } from '../../shared/contracts/ledger';
-import { GRAINS_PER_MARK } from '../../shared/marking/grains';
-import { grammarVersion, readAnswer } from '../../shared/marking/read-answer';
+import { marksText } from '../../shared/marking/grains';
+import { grammarVersion } from '../../shared/marking/read-answer';
 import type { Code } from '../../shared/marking/scheme';
+import { readMarks } from '../../shared/marking/typed-marks';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
 import { conflict, invalidRequest, notAllowed, notFound } from '../errors';
@@ -64,14 +64,12 @@ export function recordThirdReading(context: Context, actor: Actor, answerId: str
   return answerView(context, actor, answerId);
 }
 
-/** Marks as typed, `1.5` or `1/2`, in grains; refused when they are no whole grains or out of range. */
-function grainsOf(marks: string, maxGrains: number): number {
-  const read = readAnswer(marks, []);
-  if (!read.ok) throw invalidRequest('Marks are a number, such as 1.5.', { marks: 'A number, such as 1.5.' });
-  const grains = multiply(read.value, whole(GRAINS_PER_MARK));
-  if (grains.d !== 1n) throw invalidRequest('This share of a mark cannot be kept exactly.', { marks: 'Halves to sixths, eighths, tenths and hundredths.' });
-  if (grains.n < 0n || grains.n > BigInt(maxGrains)) throw invalidRequest('Marks go from 0 to what the item is worth.', { marks: 'Out of range.' });
-  return Number(grains.n);
+/** Marks as typed, in grains; refused when they are no whole grains or more than the item is worth. */
+function grainsOf(typed: string, maxGrains: number): number {
+  const marks = readMarks(typed, true);
+  if (!marks.ok) throw invalidRequest(marks.message, { marks: marks.message });
+  if (marks.grains > maxGrains) throw invalidRequest('Marks go from 0 to what the item is worth.', { marks: `At most ${marksText(maxGrains)}.` });
+  return marks.grains;
 }
 
 type Ruled = Pick<RulingRow, 'kind' | 'text' | 'code' | 'canonical' | 'value' | 'grains'>;
@@ -108,7 +106,7 @@ export function ruleAnswer(context: Context, actor: Actor, answerId: string, see
     const readings = readingsOfAnswers(db, [answerId]);
     const before = standingRuling(db, answerId);
     const ruled = ruledBy(context, found, body);
-    const isHeld = ['discordant', 'cannot-read', 'set-aside'].includes(head.state);
+    const isHeld = heldStates.some((state) => state === head.state);
     requireReason(ruled, body, readings, isHeld, before !== undefined);
     const at = clock.now();
     const id = uuidv7();

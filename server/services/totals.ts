@@ -2,6 +2,7 @@ import { deskItems } from '../../db/queries/desk';
 import { marksOfSitting, scriptTotals } from '../../db/queries/totals';
 import type { getTotals } from '../../shared/contracts/ledger';
 import type { ResponseOf } from '../../shared/contracts/route';
+import { itemLabel } from '../../shared/marking/item-label';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
 import { requireLockedPaper, requireSitting } from './sitting-access';
@@ -23,7 +24,7 @@ export function totals(context: Context, actor: Actor, sittingId: string): Total
     items: deskItems(db, sitting.schemeVersion ?? '').map(({ id, number, body }) => ({
       id,
       number,
-      label: `${body.asked.symbol} ${body.asked.electron}`,
+      label: itemLabel(body.asked),
       maxGrains: body.maxGrains,
     })),
     rows: scriptTotals(db, sittingId).map((row) => {

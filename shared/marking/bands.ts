@@ -1,4 +1,4 @@
-import { absolute, add, compare, fromFractionText, multiply, ratio, subtract, toFractionText, type Exact } from '../chemistry/exact';
+import { absolute, add, compare, fromFractionText, multiply, ratio, subtract, type Exact } from '../chemistry/exact';
 import { leadingExponent } from './rounding';
 import type { Band } from './scheme';
 
@@ -73,6 +73,3 @@ export function bandProblems(bands: readonly Band[], key: Exact, maxGrains: numb
   });
   return problems;
 }
-
-/** For the stored reason: the range as exact text, such as `121/20 to 123/20`. */
-export const rangeText = ({ from, to }: BandRange): { from: string; to: string } => ({ from: toFractionText(from), to: toFractionText(to) });

@@ -4,7 +4,7 @@ import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import type { DeskLease } from '../../shared/contracts/desk';
 import type { AnswerView, LedgerRow } from '../../shared/contracts/ledger';
 import { giveEvidence, type Answer } from '../support/evidence';
-import { buildPaper } from '../support/paper';
+import { buildPaper, itemDraft } from '../support/paper';
 import { startTestServer, type TestServer } from '../support/test-server';
 
 describe('readings, marks and rulings', () => {
@@ -126,6 +126,25 @@ describe('readings, marks and rulings', () => {
     await rule(held.answerId, rev, { kind: 'mark', marks: '3.5', reason: 'too many' }).expect(400);
     const ruled = await rule(held.answerId, rev, { kind: 'mark', marks: '1/3', reason: 'benefit of the doubt' }).expect(200);
     expect(ruled.body.score.grains).toBe(400);
+  });
+
+  it('puts a replaced ruling in force again when the later one is taken back', async () => {
+    const [held] = await lease(one);
+    if (!held) throw new Error('Nothing to read.');
+    await record(one, held, { text: '9.99' }).expect(200);
+    const { rev } = await view(held.answerId);
+    const first: AnswerView = (await rule(held.answerId, rev, { kind: 'mark', marks: '1', reason: 'benefit of the doubt' }).expect(200)).body;
+    const second: AnswerView = (await rule(held.answerId, first.rev, { kind: 'mark', marks: '0', reason: 'the working shows another' }).expect(200)).body;
+    expect(second.score?.grains).toBe(0);
+    const back: AnswerView = (await lead.post(`/api/rulings/${second.ruling?.id}/take-back`).expect(200)).body;
+    expect(back).toMatchObject({ state: 'ruled', score: { grains: 1200 }, ruling: { reason: 'benefit of the doubt' } });
+  });
+
+  it('calls an ion by its charge at the desk', async () => {
+    const ion = itemDraft('Mg', '2p', { asked: { symbol: 'Mg', charge: 2, electron: '2p', quantity: 'zeff', convention: 'slater' } });
+    const { sittingId: other } = buildPaper(server, { drafts: [ion] });
+    const { body } = await one.get('/api/desk/standing').query({ sitting: other }).expect(200);
+    expect(body.items[0].label).toBe('Mg²⁺ 2p');
   });
 
   it('adds up what is marked, names what is missing, and exports it without formulas', async () => {

@@ -1,4 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { session } from '../../db/schema';
+import { sweep } from '../../server/services/sweeping';
 import { cast, castPassword } from '../support/cast';
 import { startTestServer, type TestServer } from '../support/test-server';
 
@@ -46,6 +48,16 @@ describe('signing in and out', () => {
     const reader = await server.signInAs('readerTwo');
     server.clock.advance(13 * 3_600_000);
     await reader.get('/api/me').expect(401);
+  });
+
+  it('sweeps away sessions that have ended, and leaves the others', async () => {
+    const rows = () => server.context.db.select().from(session).all().length;
+    await server.signInAs('lead');
+    server.clock.advance(13 * 3_600_000);
+    const fresh = await server.signInAs('lead');
+    sweep(server.context);
+    expect(rows()).toBe(1);
+    await fresh.get('/api/me').expect(200);
   });
 
   describe('edge cases', () => {

@@ -1,0 +1,5 @@
+import type { Database } from '../client';
+import { blob } from '../schema';
+
+/** Notes that the bytes of a hash are stored; known hashes stay as they are. */
+export const insertBlob = (db: Database, row: typeof blob.$inferInsert): void => void db.insert(blob).values(row).onConflictDoNothing().run();
