@@ -4,7 +4,7 @@ import { gzipSync } from 'node:zlib';
 import { buildWeb, isWebStale } from '../../server/commands/build-web';
 import type { BenchLine } from './figures';
 
-/** What an app of the same stack weighs that shows one line of text, measured when the project was laid out. */
+/** What an app of the same stack weighs before any screen: a recorded figure, not measured in this run. */
 const emptyAppKb = 310;
 
 const gzippedKb = (file: string): number => gzipSync(readFileSync(file), { level: 9 }).length / 1000;
