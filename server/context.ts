@@ -1,6 +1,8 @@
 import type { Logger } from 'pino';
 import type { Database } from '../db/client';
 import type { Config } from './config/config';
+import type { Parts } from './ingest/parts';
+import type { Pictures } from './ingest/pictures';
 import type { Jobs } from './jobs/jobs';
 import type { Storage } from './storage/storage';
 
@@ -15,6 +17,8 @@ export interface Context {
   readonly db: Database;
   readonly storage: Storage;
   readonly jobs: Jobs;
+  readonly pictures: Pictures;
+  readonly parts: Parts;
   readonly clock: Clock;
   readonly log: Logger;
 }

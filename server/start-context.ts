@@ -5,7 +5,10 @@ import { openDatabase } from '../db/client';
 import { migrateDatabase } from '../db/migrate';
 import type { Config } from './config/config';
 import { systemClock, type Clock, type Context } from './context';
+import { createParts } from './ingest/parts';
+import { createPictures } from './ingest/pictures';
 import { createSqliteJobs } from './jobs/sqlite-jobs';
+import { ingestJob, ingestUpload } from './services/ingest';
 import { createLocalStorage } from './storage/local-storage';
 
 interface Started {
@@ -21,11 +24,14 @@ export function startContext(config: Config, clock: Clock = systemClock): Starte
   migrateDatabase(db);
   const storage = createLocalStorage(join(config.dataDir, 'blobs'));
   const jobs = createSqliteJobs({ db, clock, log, lanes: 2 });
-  const context: Context = { config, db, storage, jobs, clock, log };
+  const pictures = createPictures();
+  const context: Context = { config, db, storage, jobs, pictures, parts: createParts(config.dataDir), clock, log };
+  jobs.handle(ingestJob, ({ uploadId }) => ingestUpload(context, String(uploadId)));
   return {
     context,
     close: async () => {
       await jobs.stop();
+      await pictures.close();
       db.$client.close();
     },
   };

@@ -114,6 +114,10 @@ export const findLease = (db: Database, id: string): LeaseRow | undefined => sta
 
 export const endLeaseAt = (db: Database, id: string, at: number): void => void statements(db).endLease.run({ id, at });
 
+/** Ends whatever lease is open on an answer. */
+export const endOpenLeases = (db: Database, answerId: string, at: number): void =>
+  void db.update(lease).set({ endedAt: at }).where(and(eq(lease.answer, answerId), isNull(lease.endedAt))).run();
+
 /** Leases that ran out free their answers for others. */
 export const endExpiredLeases = (db: Database, now: number): void =>
   void db.update(lease).set({ endedAt: now }).where(and(isNull(lease.endedAt), lte(lease.expiresAt, now))).run();

@@ -6,6 +6,7 @@ import { deskRoutes } from './desk';
 import { itemRoutes } from './items';
 import { layoutRoutes } from './layouts';
 import { ledgerRoutes } from './ledger';
+import { scanRoutes } from './scans';
 import { serviceRoutes } from './service';
 import { sessionRoutes } from './session';
 import { sittingRoutes } from './sittings';
@@ -20,4 +21,5 @@ export function registerRoutes(router: Router, context: Context, passport: AppPa
   layoutRoutes(router, context);
   itemRoutes(router, context);
   classListRoutes(router, context);
+  scanRoutes(router, context);
 }

@@ -5,6 +5,7 @@ import { layoutRoutes } from './layouts';
 import { ledgerRoutes } from './ledger';
 import { progressRoutes } from './progress';
 import type { RouteContract } from './route';
+import { scanRoutes } from './scans';
 import { serviceRoutes } from './service';
 import { sessionRoutes } from './session';
 import { sittingRoutes } from './sittings';
@@ -20,4 +21,5 @@ export const allRoutes: Readonly<Record<string, RouteContract>> = {
   ...itemRoutes,
   ...classListRoutes,
   ...layoutRoutes,
+  ...scanRoutes,
 };

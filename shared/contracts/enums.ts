@@ -65,6 +65,7 @@ export const auditActs = [
   'page-placed',
   'page-turned',
   'page-discarded',
+  'page-loosened',
   'reading-recorded',
   'reading-taken-back',
   'third-reading-recorded',

@@ -1,0 +1,69 @@
+import { v7 as uuidv7 } from 'uuid';
+import { insertBlob } from '../../db/queries/blobs';
+import { answersOfScript, pageLayout, saveCrop, setEvidence, setPlaceImage, type PagePlace } from '../../db/queries/page-images';
+import type { Context } from '../context';
+import type { PictureResult, PictureTask } from '../ingest/picture-worker';
+import { settleAnswers } from './settle';
+
+export type MadePage = Extract<PictureResult, { ok: true }>;
+
+export interface StoredCrop {
+  readonly box: string;
+  readonly blob: string;
+  readonly widthPx: number;
+  readonly heightPx: number;
+}
+
+export interface StoredPage {
+  readonly display: string;
+  readonly thumb: string;
+  readonly widthPx: number;
+  readonly heightPx: number;
+  readonly crops: readonly StoredCrop[];
+}
+
+/** What to cut out of an image for a place: the boxes of its page of the script's layout. */
+export function cutFor({ db }: Pick<Context, 'db'>, place: Pick<PagePlace, 'layout' | 'pageNo'> | undefined): PictureTask['cut'] {
+  const found = place?.layout ? pageLayout(db, place.layout, place.pageNo) : undefined;
+  return found ? { page: found, boxes: found.boxes } : null;
+}
+
+/** Puts the pictures of a page on disk; their rows follow in the transaction of the act. */
+export async function storePage({ storage }: Pick<Context, 'storage'>, made: MadePage): Promise<StoredPage> {
+  const [display, thumb, ...crops] = await Promise.all([made.display, made.thumb, ...made.crops.map(({ jpeg }) => jpeg)].map((bytes) => storage.put(bytes)));
+  return {
+    display: display?.sha256 ?? '',
+    thumb: thumb?.sha256 ?? '',
+    widthPx: made.width,
+    heightPx: made.height,
+    crops: made.crops.map(({ box, width, height }, index) => ({ box, blob: crops[index]?.sha256 ?? '', widthPx: width, heightPx: height })),
+  };
+}
+
+/** Notes every picture of a page among the stored bytes. */
+export function noteBlobs({ db }: Pick<Context, 'db'>, made: MadePage, stored: StoredPage): void {
+  const row = (sha256: string, bytes: Uint8Array): void => insertBlob(db, { sha256, size: bytes.length, mediaType: 'image/jpeg' });
+  row(stored.display, made.display);
+  row(stored.thumb, made.thumb);
+  stored.crops.forEach(({ blob }, index) => row(blob, made.crops[index]?.jpeg ?? new Uint8Array()));
+}
+
+/** Fills a place with an image and its cut-outs: its answers can be read from here on. In the transaction of the act. */
+export function fillPlace(context: Pick<Context, 'db' | 'clock'>, place: PagePlace, imageId: string, crops: readonly StoredCrop[]): void {
+  const { db } = context;
+  setPlaceImage(db, place.page, imageId);
+  const layout = place.layout ? pageLayout(db, place.layout, place.pageNo) : undefined;
+  const answers = answersOfScript(db, place.script);
+  const readable = new Set<string>();
+  for (const { box, blob, widthPx, heightPx } of crops) {
+    const region = layout?.boxes.find(({ id }) => id === box);
+    const answer = region?.item ? answers.get(region.item) : undefined;
+    if (!region || answer === undefined) continue;
+    saveCrop(db, { id: uuidv7(), answer, box, pageImage: imageId, blob, widthPx, heightPx });
+    if (region.use === 'answer') {
+      setEvidence(db, answer, 'in');
+      readable.add(answer);
+    }
+  }
+  if (readable.size > 0) settleAnswers(context, [...readable]);
+}
