@@ -46,7 +46,7 @@ export function answerHead(db: Database, answerId: string) {
 
 export function cropsOfAnswer(db: Database, answerId: string) {
   return db
-    .select({ box: box.id, use: box.use, widthPx: crop.widthPx, heightPx: crop.heightPx, pageImage: crop.pageImage, pageNo: box.pageNo })
+    .select({ box: box.id, use: box.use, widthPx: crop.widthPx, heightPx: crop.heightPx, blob: crop.blob, pageImage: crop.pageImage, pageNo: box.pageNo })
     .from(crop)
     .innerJoin(box, and(eq(box.id, crop.box), ne(box.use, 'number')))
     .where(eq(crop.answer, answerId))

@@ -148,6 +148,7 @@ export function leasedAnswers(db: Database, leaseIds: readonly string[]) {
       use: box.use,
       pageNo: box.pageNo,
       pageImageId: crop.pageImage,
+      blob: crop.blob,
       widthPx: crop.widthPx,
       heightPx: crop.heightPx,
       pageCount: sql<number>`(select count(*) from ${page} where ${page.script} = ${script.id})`,

@@ -20,6 +20,7 @@ import type { Context } from '../context';
 import { notFound } from '../errors';
 import { isCovered, shownGiven } from './covers';
 import { requireSitting, type SittingAccess } from './sitting-access';
+import { pictureVersion } from './picture-version';
 import { schemeInForce, verdictFor, type SchemeInForce } from './verdicts';
 
 export type AnswerHead = NonNullable<ReturnType<typeof answerHead>>;
@@ -108,7 +109,7 @@ export function answerView(context: Context, actor: Actor, answerId: string): An
     state: head.state,
     isCovered: covered,
     cannotSettle: cannotSettle(actor, access.roles.has('lead'), readings),
-    crops: crops.flatMap(({ box, use, widthPx, heightPx }) => (use === 'number' ? [] : [{ box, use, widthPx, heightPx }])),
+    crops: crops.flatMap(({ box, use, blob, widthPx, heightPx }) => (use === 'number' ? [] : [{ box, version: pictureVersion(blob), use, widthPx, heightPx }])),
     pageImageId: answerCrop ? (pageOfAnswer(db, head.script, answerCrop.pageNo)?.image ?? null) : null,
     pageNo: answerCrop?.pageNo ?? null,
     readings: readings.map((reading) => ({

@@ -21,6 +21,7 @@ import { itemLabel } from '../../shared/marking/item-label';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
 import { notFound } from '../errors';
+import { pictureVersion } from './picture-version';
 import { requireLockedPaper, requireSitting } from './sitting-access';
 
 const readerRoles = ['reader', 'lead'] as const;
@@ -43,7 +44,7 @@ export function describeLeases(db: Database, leaseIds: readonly string[]): DeskL
       pageImageId: row.pageImageId,
       crops: [],
     };
-    leases.set(row.id, { ...known, crops: [...known.crops, { box: row.box, use: row.use, widthPx: row.widthPx, heightPx: row.heightPx }] });
+    leases.set(row.id, { ...known, crops: [...known.crops, { box: row.box, version: pictureVersion(row.blob), use: row.use, widthPx: row.widthPx, heightPx: row.heightPx }] });
   }
   return leaseIds.flatMap((id) => leases.get(id) ?? []);
 }

@@ -8,6 +8,8 @@ const readers = { who: 'course', roles: ['reader', 'lead'] } as const;
 
 export const deskCrop = z.object({
   box: uuid,
+  /** Begins the hash of the picture: an address that names it never shows another. */
+  version: z.string(),
   use: z.enum(['answer', 'working']),
   widthPx: z.int(),
   heightPx: z.int(),

@@ -89,7 +89,7 @@ export const answerView = z.object({
   isCovered: z.boolean(),
   /** Why this person cannot type a third reading here, or null. */
   cannotSettle: z.string().nullable(),
-  crops: z.array(z.object({ box: uuid, use: z.enum(['answer', 'working']), widthPx: z.int(), heightPx: z.int() })),
+  crops: z.array(z.object({ box: uuid, version: z.string(), use: z.enum(['answer', 'working']), widthPx: z.int(), heightPx: z.int() })),
   pageImageId: uuid.nullable(),
   pageNo: z.int().nullable(),
   readings: z.array(shownReading),

@@ -2,10 +2,13 @@ import type { Agent } from 'supertest';
 import { v7 as uuidv7 } from 'uuid';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { insertLease } from '../../db/queries/desk';
+import { insertPageImage } from '../../db/queries/page-images';
 import { answersOfSitting } from '../../db/queries/settling';
 import { allRoutes } from '../../shared/contracts/all-routes';
 import type { GuardRole, RouteContract } from '../../shared/contracts/route';
+import { createBatch } from '../../server/services/batches';
 import { candidatesOf } from '../../server/services/candidates';
+import { beginUpload } from '../../server/services/uploads';
 import { cast, type CastName } from '../support/cast';
 import { actorOf, buildPaper, itemDraft, layoutFor } from '../support/paper';
 import { startTestServer, type TestServer } from '../support/test-server';
@@ -26,8 +29,12 @@ function buildWorld(server: TestServer): World {
   insertLease(context.db, { id: leaseId, answer: answerId, reader: people.readerOne, takenAt: now, expiresAt: now + 60_000 });
   const [candidate] = candidatesOf(context, actorOf(server, 'lead'), sittingId);
   const unknown = uuidv7();
+  const batchId = createBatch(context, actorOf(server, 'readerOne'), sittingId, 'A').id;
+  const uploadId = beginUpload(context, actorOf(server, 'readerOne'), batchId, { fileName: 'page.jpg', size: 10 }).id;
+  const pageId = uuidv7();
+  insertPageImage(context.db, { id: pageId, upload: uploadId, index: 0, sitting: sittingId, state: 'loose' });
   return {
-    ids: { courses: courseId, sittings: sittingId, items: items[0] ?? '', answers: answerId, candidates: candidate?.id ?? '', 'desk/leases': leaseId, readings: unknown, rulings: unknown, exports: unknown },
+    ids: { courses: courseId, sittings: sittingId, items: items[0] ?? '', answers: answerId, candidates: candidate?.id ?? '', 'desk/leases': leaseId, readings: unknown, rulings: unknown, exports: unknown, batches: batchId, uploads: uploadId, 'page-images': pageId },
     bodies: {
       signIn: { email: 'nobody@wrenmoor.example', password: 'wrong' },
       makeSitting: { title: 'Another sitting', heldOn: '2026-06-03' },
@@ -46,6 +53,12 @@ function buildWorld(server: TestServer): World {
       recordThirdReading: { text: '6.10', openedAt: now },
       ruleAnswer: { kind: 'value', text: '6.10' },
       makeExport: { kind: 'marks-csv' },
+      makeBatch: { bundle: 'B' },
+      changeBatch: { state: 'cancelled' },
+      beginUpload: { fileName: 'page.jpg', size: 10 },
+      placePage: { candidateId: candidate?.id ?? '', pageNo: 1 },
+      turnPage: { by: 1 },
+      loosenPage: { reopen: false },
     },
   };
 }
@@ -57,10 +70,10 @@ const addressOf = (contract: RouteContract, ids: World['ids']): string =>
     return `${resource}/${ids[resource] ?? ids[resource.split('/').at(-1) ?? ''] ?? uuidv7()}`;
   })}`.replace(/:n\b|:page\b/g, '1');
 
-/** Routes whose thing is one's own: somebody else's is not there, whatever the role. */
-const ownOnly = new Set(['endLease', 'recordReading', 'takeBackReading', 'takeBackRuling', 'getExportFile']);
+/** Routes whose thing is one's own, or not made here: to anybody else it is not there, whatever the role. */
+const ownOnly = new Set(['endLease', 'recordReading', 'takeBackReading', 'takeBackRuling', 'getExportFile', 'getCrop', 'changeBatch']);
 /** Nothing was uploaded here yet, so those let in find nothing. */
-const notThereYet = new Set(['getSample']);
+const notThereYet = new Set(['getSample', 'getPageImageFile', 'placePage', 'turnPage']);
 /** Bytes in, so that the guard runs after the transport; tested beside their resource. */
 const takesBytes = (contract: RouteContract) => contract.accepts !== undefined;
 
@@ -85,7 +98,8 @@ describe('every route answers every role as its contract says', () => {
 
   const ask = async (agent: Agent, id: string, contract: RouteContract) => {
     const sent = agent[contract.method](addressOf(contract, world.ids)).set('If-Match', '1');
-    const query = contract.path === '/desk/recent' || contract.path === '/desk/standing' ? { sitting: world.ids.sittings } : {};
+    const queries: Record<string, object> = { getRecentReadings: { sitting: world.ids.sittings }, getDeskStanding: { sitting: world.ids.sittings }, getCrop: { box: uuidv7() } };
+    const query = queries[id] ?? {};
     return sent.query(query).send((world.bodies[id] ?? {}) as object);
   };
 
