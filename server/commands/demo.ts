@@ -6,21 +6,20 @@ import { drawPages } from '../../db/seed/pages/draw-pages';
 import { pageCount, PAGE_HEIGHT_MM, PAGE_WIDTH_MM, sheetBoxes } from '../../db/seed/pages/sheet-layout';
 import { seedPeople } from '../../db/seed/people';
 import { demoItems, workedKey, type DemoItem } from '../../db/seed/truth/demo-items';
-import { candidateNumbers } from '../../db/seed/truth/truth';
+import type { CandidateTruth } from '../../db/seed/truth/written';
 import { allCourses } from '../../db/queries/people';
 import type { ItemDraft } from '../../shared/contracts/items';
 import { marksText } from '../../shared/marking/grains';
 import type { Actor } from '../auth/access';
 import { hashPassword } from '../auth/passwords';
 import type { Context } from '../context';
+import { candidatesOf, changeAttendance } from '../services/candidates';
 import { importClassList } from '../services/class-list';
 import { createItem } from '../services/items';
 import { saveLayout, saveSample } from '../services/layouts';
 import { lockPaper } from '../services/paper-lock';
 import { createSitting } from '../services/sittings';
-
-const candidates = 120;
-const seed = 'wrenmoor';
+import { demoSeed, demoTruth, type DemoSitting } from './demo-truth';
 
 export const demoIsWanted = ({ config, db }: Context): boolean => config.demo && allCourses(db).length === 0;
 
@@ -50,30 +49,38 @@ function addItems(context: Context, lead: Actor, sittingId: string, items: reado
 
 /** The empty printed pages, drawn in a process of their own, as the pictures that regions are drawn on. */
 async function addSamplePages(context: Context, lead: Actor, sittingId: string): Promise<void> {
-  const outDir = join(context.config.dataDir, 'demo');
-  await drawPages({ outDir, seed, sheet: demoSheet, candidates: [], withSamples: true });
+  const outDir = join(context.config.dataDir, 'demo-samples');
+  await drawPages({ outDir, seed: demoSeed, sheet: demoSheet, candidates: [], withSamples: true });
   for (let page = 1; page <= pageCount(demoItems.length); page += 1) {
     await saveSample(context, lead, sittingId, page, readFileSync(join(outDir, `sample-p${page}.jpg`)));
   }
   rmSync(outDir, { recursive: true });
 }
 
+/** Some did not come, as on any morning. */
+function markAbsent(context: Context, lead: Actor, sittingId: string, truth: readonly CandidateTruth[]): void {
+  const absent = new Set(truth.filter(({ isAbsent }) => isAbsent).map(({ candidate }) => candidate));
+  for (const { id, number, rev } of candidatesOf(context, lead, sittingId)) if (absent.has(number)) changeAttendance(context, lead, id, rev, 'absent');
+}
+
 /**
  * The invented demo, through the same services that people use: one sitting locked with twelve items and a class list, and
  * one whose paper is still open to change.
  */
-export async function seedDemo(context: Context): Promise<void> {
+export async function seedDemo(context: Context): Promise<DemoSitting> {
   const { courseId, people } = seedPeople(context.db, await hashPassword(castPassword), context.clock.now());
   const lead: Actor = { personId: people.lead, isOfficer: false };
-  const settings = { secondPolicy: 'none', totalRounding: 'none' } as const;
-  const sitting = createSitting(context, lead, courseId, { title: 'Paper 2, spring sitting', heldOn: '2026-05-06', ...settings });
+  const truth = demoTruth();
+  const sitting = createSitting(context, lead, courseId, { title: 'Paper 2, spring sitting', heldOn: '2026-05-06', secondPolicy: 'all', totalRounding: 'none' });
   const items = addItems(context, lead, sitting.id, demoItems);
   const pages = Array.from({ length: pageCount(items.length) }, () => ({ widthMm: PAGE_WIDTH_MM, heightMm: PAGE_HEIGHT_MM }));
   const boxes = sheetBoxes(items.length).map(({ itemNumber, ...box }) => ({ ...box, item: items[itemNumber - 1] ?? '' }));
   saveLayout(context, lead, sitting.id, 0, { pages, boxes });
   await addSamplePages(context, lead, sitting.id);
-  importClassList(context, lead, sitting.id, candidateNumbers(candidates).join('\n'));
+  importClassList(context, lead, sitting.id, truth.map(({ candidate }) => candidate).join('\n'));
+  markAbsent(context, lead, sitting.id, truth);
   lockPaper(context, lead, sitting.id);
-  const next = createSitting(context, lead, courseId, { title: 'Paper 3, summer sitting', heldOn: '2026-06-03', ...settings });
+  const next = createSitting(context, lead, courseId, { title: 'Paper 3, summer sitting', heldOn: '2026-06-03', secondPolicy: 'none', totalRounding: 'none' });
   addItems(context, lead, next.id, demoItems.slice(4, 8));
+  return { sittingId: sitting.id, readers: [people.readerOne, people.readerTwo] };
 }

@@ -1,6 +1,7 @@
 import { readConfig } from '../config/config';
 import { startServer } from '../index';
 import { buildWeb, isWebStale } from './build-web';
+import { bringDemoPages, noteUnfinished, unfinishedDemo } from './demo-pages';
 import { demoIsWanted, seedDemo, signInLines } from './demo';
 
 const config = readConfig();
@@ -11,11 +12,25 @@ if (isWebStale(config.webDir)) {
 }
 
 const server = await startServer(config);
-for (const signal of ['SIGINT', 'SIGTERM'] as const) process.on(signal, () => void server.stop().then(() => process.exit(0)));
+const stopping = new AbortController();
+for (const signal of ['SIGINT', 'SIGTERM'] as const) {
+  process.on(signal, () => {
+    stopping.abort();
+    void server.stop().then(() => process.exit(0));
+  });
+}
 
 if (demoIsWanted(server.context)) {
   console.log('Making the demo.');
-  await seedDemo(server.context);
+  noteUnfinished(server.context, await seedDemo(server.context));
 }
 console.log(`\nMeniscus is at ${server.address}`);
 if (config.demo) for (const line of signInLines()) console.log(line);
+
+const demo = unfinishedDemo(server.context);
+if (demo && config.demo) {
+  console.log('The pages of the demo are being drawn. Reading can begin with the first.');
+  await bringDemoPages(server.context, demo, console.log, stopping.signal).catch((error: unknown) => {
+    if (!stopping.signal.aborted) console.error('Drawing the demo stopped. It goes on at the next start.', error);
+  });
+}
