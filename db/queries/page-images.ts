@@ -76,10 +76,15 @@ export const placeOf = (db: Database, candidateId: string, pageNo: number): Page
 
 export const placeById = (db: Database, pageId: string): PagePlace | undefined => places(db).where(eq(page.id, pageId)).get();
 
-/** Places without an image of those who are to be marked, in the order of the class list. */
-export const emptyPlaces = (db: Database, sittingId: string): PagePlace[] =>
-  places(db)
-    .where(and(eq(candidate.sitting, sittingId), isNull(page.image), isNull(page.excusedAt), inArray(candidate.attendance, ['expected', 'present', 'late'])))
+/** Places of those who are to be marked, in the order of the class list, with the rev of the image each holds. */
+export const placesOfSitting = (db: Database, sittingId: string) =>
+  db
+    .select({ candidateId: candidate.id, candidateNumber: candidate.number, pageNo: page.pageNo, image: page.image, imageRev: pageImage.rev })
+    .from(page)
+    .innerJoin(script, and(eq(script.id, page.script), isNull(script.voidReason), isNull(script.mergedInto)))
+    .innerJoin(candidate, eq(candidate.id, script.candidate))
+    .leftJoin(pageImage, eq(pageImage.id, page.image))
+    .where(and(eq(candidate.sitting, sittingId), isNull(page.excusedAt), inArray(candidate.attendance, ['expected', 'present', 'late'])))
     .orderBy(asc(candidate.id), asc(page.pageNo))
     .all();
 

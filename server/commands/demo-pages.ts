@@ -5,7 +5,7 @@ import { drawPages } from '../../db/seed/pages/draw-pages';
 import { pageCount } from '../../db/seed/pages/sheet-layout';
 import { demoItems } from '../../db/seed/truth/demo-items';
 import { saveTruth } from '../../db/seed/truth/truth-file';
-import { emptyPlaces } from '../../db/queries/page-images';
+import { placesOfSitting } from '../../db/queries/page-images';
 import { batchesOf } from '../../db/queries/uploads';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
@@ -33,7 +33,7 @@ export const unfinishedDemo = (context: Context): DemoSitting | null => (existsS
 export async function bringDemoPages(context: Context, demo: DemoSitting, say: (line: string) => void, signal?: AbortSignal): Promise<void> {
   const { db, config } = context;
   const reader: Actor = { personId: demo.readers[0] ?? '', isOfficer: false };
-  const waiting = new Set(emptyPlaces(db, demo.sittingId).map((place) => `${place.candidateNumber}-p${place.pageNo}.jpg`));
+  const waiting = new Set(placesOfSitting(db, demo.sittingId).filter(({ image }) => image === null).map((place) => `${place.candidateNumber}-p${place.pageNo}.jpg`));
   const truth = firstBatch(demoTruth()).filter(({ candidate }) => waiting.has(`${candidate}-p1.jpg`) || waiting.has(`${candidate}-p2.jpg`));
   const outDir = join(config.dataDir, 'demo-pages');
   mkdirSync(outDir, { recursive: true });

@@ -1,9 +1,8 @@
 import { inTransaction } from '../../db/client';
 import { mediaTypeOfBlob } from '../../db/queries/blobs';
 import { endOpenLeases, endReading } from '../../db/queries/desk';
-import { actsFromImage, cropOfBox, dropCrops, emptyPlaces, findPageImage, hasAnswerCrop, loosePages, placeById, placeOf, setEvidence, setPlaceImage, updatePageImage, type PageImageRow, type PagePlace } from '../../db/queries/page-images';
-import { findLayout, layoutPages } from '../../db/queries/layouts';
-import type { LoosePage, PageImageView } from '../../shared/contracts/scans';
+import { actsFromImage, cropOfBox, dropCrops, findPageImage, hasAnswerCrop, loosePages, placeById, placeOf, placesOfSitting, setEvidence, setPlaceImage, updatePageImage, type PageImageRow, type PagePlace } from '../../db/queries/page-images';
+import type { LoosePage, PageImageView, PagePlaceView } from '../../shared/contracts/scans';
 import type { GuardRole } from '../../shared/contracts/route';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
@@ -31,28 +30,19 @@ const viewOf = ({ image, fileName, candidateNumber, pageNo }: Omit<Found, keyof 
 
 export const pageImageFor = (context: Context, actor: Actor, imageId: string): PageImageView => viewOf(requirePage(context, actor, imageId, scanViewers));
 
-/** Loose pages with the likeliest place of each, and who lacks which pages. */
-export function looseFor(context: Context, actor: Actor, sittingId: string) {
+/** Loose pages with the likeliest place of each, and the places they could have. */
+export function looseFor(context: Context, actor: Actor, sittingId: string): { pages: LoosePage[]; places: PagePlaceView[] } {
   const { db } = context;
   requireSitting(context, actor, sittingId, scanViewers);
-  const empty = emptyPlaces(db, sittingId);
+  const loose = loosePages(db, sittingId);
+  if (loose.length === 0) return { pages: [], places: [] };
+  const places = placesOfSitting(db, sittingId).map(({ image, imageRev, ...place }) => ({ ...place, image: image === null ? null : { id: image, rev: imageRev ?? 1 } }));
   const likely = (fileName: string): LoosePage['likely'] => {
     const named = pageFromName(fileName);
-    const found = named ? empty.find((place) => place.candidateNumber.toLowerCase() === named.number.toLowerCase() && place.pageNo === named.pageNo) : undefined;
-    return found ? { candidateId: found.candidate, pageNo: found.pageNo } : null;
+    const found = places.find((place) => named && place.image === null && place.candidateNumber.toLowerCase() === named.number.toLowerCase() && place.pageNo === named.pageNo);
+    return found ? { candidateId: found.candidateId, pageNo: found.pageNo } : null;
   };
-  const missing = new Map<string, { candidateId: string; candidateNumber: string; pageNos: number[] }>();
-  for (const { candidate, candidateNumber, pageNo } of empty) {
-    const known = missing.get(candidate) ?? { candidateId: candidate, candidateNumber, pageNos: [] };
-    known.pageNos.push(pageNo);
-    missing.set(candidate, known);
-  }
-  const layout = findLayout(db, sittingId, 1);
-  return {
-    pages: loosePages(db, sittingId).map(({ why, ...page }) => ({ ...page, why: why ?? 'No script has claimed it.', likely: likely(page.fileName) })),
-    missing: [...missing.values()],
-    pageCount: layout ? layoutPages(db, layout.id).length : 0,
-  };
+  return { pages: loose.map(({ why, ...page }) => ({ ...page, why: why ?? 'No script has claimed it.', likely: likely(page.fileName) })), places };
 }
 
 interface Remade {

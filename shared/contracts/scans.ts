@@ -141,15 +141,22 @@ export const loosePage = z.object({
 });
 export type LoosePage = z.infer<typeof loosePage>;
 
-export const missingPages = z.object({ candidateId: uuid, candidateNumber: z.string(), pageNos: z.array(z.int()) });
+/** A place of a page of someone who is to be marked, and the image it holds, if any. */
+export const pagePlace = z.object({
+  candidateId: uuid,
+  candidateNumber: z.string(),
+  pageNo: z.int(),
+  image: z.object({ id: uuid, rev }).nullable(),
+});
+export type PagePlaceView = z.infer<typeof pagePlace>;
 
 export const listLoosePages = defineRoute({
   method: 'get',
   path: '/sittings/:id/loose-pages',
-  summary: 'Pages that no script has claimed, oldest first, and the candidates who lack pages.',
+  summary: 'Pages that no script has claimed, oldest first, and, while there are any, the places they could have.',
   access: staff,
   params: idParams,
-  response: z.object({ pages: z.array(loosePage), missing: z.array(missingPages), pageCount: z.int() }),
+  response: z.object({ pages: z.array(loosePage), places: z.array(pagePlace) }),
 });
 
 export const pageImageView = z.object({
