@@ -1,5 +1,6 @@
 import type { Request, Router } from 'express';
 import { getMe, signIn, signOut, signOutEverywhere } from '../../shared/contracts/session';
+import { getWaiting } from '../../shared/contracts/waiting';
 import { requireActor } from '../auth/access';
 import type { AppPassport } from '../auth/passport';
 import type { Context } from '../context';
@@ -7,6 +8,7 @@ import { AppError } from '../errors';
 import { asyncRoute, openRoute, route } from '../http/route';
 import { signInLimit } from '../http/sign-in-limit';
 import { endAllSessions, recordSessionAct, whoAmI } from '../services/session';
+import { waitingFor } from '../services/waiting';
 
 const signInByPassword = (passport: AppPassport, req: Request): Promise<Express.User | false> =>
   new Promise((resolve, reject) => {
@@ -58,4 +60,5 @@ export function sessionRoutes(router: Router, context: Context, passport: AppPas
   });
 
   route(router, context, getMe, ({ actor }) => whoAmI(context, actor));
+  route(router, context, getWaiting, ({ actor }) => ({ lines: waitingFor(context, actor) }));
 }

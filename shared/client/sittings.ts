@@ -2,6 +2,7 @@ import { queryOptions, useMutation, useQuery, useQueryClient } from '@tanstack/r
 import type { getProgress } from '../contracts/progress';
 import type { ResponseOf, SentBodyOf } from '../contracts/route';
 import type { changeSitting, getSitting, listCourses, listSittings, makeSitting } from '../contracts/sittings';
+import type { getWaiting } from '../contracts/waiting';
 import { api } from './api';
 import { staleTimes } from './query-client';
 
@@ -34,6 +35,14 @@ export const progressQueryOptions = (sittingId: string) =>
     queryFn: ({ signal }) => api<ResponseOf<typeof getProgress>>(`/sittings/${sittingId}/progress`, { signal }),
   });
 
+export const waitingQueryOptions = () =>
+  queryOptions({
+    queryKey: ['waiting'],
+    refetchInterval: staleTimes.steady / 2,
+    queryFn: ({ signal }) => api<ResponseOf<typeof getWaiting>>('/waiting', { signal }),
+  });
+
+export const useWaiting = () => useQuery(waitingQueryOptions());
 export const useCourses = () => useQuery(coursesQueryOptions());
 export const useCourseSittings = (courseId: string) => useQuery(courseSittingsQueryOptions(courseId));
 export const useSitting = (sittingId: string) => useQuery(sittingQueryOptions(sittingId));

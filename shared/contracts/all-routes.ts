@@ -9,6 +9,7 @@ import { scanRoutes } from './scans';
 import { serviceRoutes } from './service';
 import { sessionRoutes } from './session';
 import { sittingRoutes } from './sittings';
+import { waitingRoutes } from './waiting';
 
 /** Every route of the interface, by name: for OpenAPI and for the test that walks them all. */
 export const allRoutes: Readonly<Record<string, RouteContract>> = {
@@ -22,4 +23,5 @@ export const allRoutes: Readonly<Record<string, RouteContract>> = {
   ...classListRoutes,
   ...layoutRoutes,
   ...scanRoutes,
+  ...waitingRoutes,
 };

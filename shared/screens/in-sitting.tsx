@@ -1,36 +1,44 @@
 import { usePathname } from 'expo-router';
 import type { ReactNode } from 'react';
 import { useProgress, useSitting } from '../client/sittings';
-import { Burette } from '../ui/burette';
+import { Burette, BuretteSlim } from '../ui/burette';
+import type { Place } from '../ui/place';
 import { ScreenFrame } from '../ui/screen-frame';
-import { levelOf, sections, stagesOf } from './frame/stages';
+import { iconOf, levelOf, sections, stagesOf, type Section } from './frame/stages';
 
 interface InSittingProps {
   readonly sittingId: string;
   readonly children: ReactNode;
   /** The screen scrolls its own parts. */
   readonly isFixed?: boolean;
+  /** A scan or a sheet needs the room. */
+  readonly isSlim?: boolean;
+  /** A sheet beside the content on wide. */
+  readonly side?: ReactNode;
 }
 
-const icons = { paper: 'note', regions: 'page', 'class-list': 'people' } as const;
+/** On a phone four sections stand at the foot beside the overview, the work before the building. */
+const atFoot: readonly Section[] = ['reading', 'moderation', 'marks', 'scans', 'paper', 'class-list', 'regions'];
+
+const sectionOf = (path: string): Section | null => (path.includes('/sorting') ? 'scans' : (sections.find((section) => path.endsWith(`/${section}`)) ?? null));
 
 /** What stands round every screen of a sitting: its burette at the left of a wide screen, its places at the foot of a phone. */
-export function InSitting({ sittingId, children, isFixed = false }: InSittingProps) {
+export function InSitting({ sittingId, children, isFixed = false, isSlim = false, side }: InSittingProps) {
   const path = usePathname();
-  const chosen = sections.find((section) => path.endsWith(`/${section}`)) ?? null;
+  const chosen = sectionOf(path);
   const { data: sitting } = useSitting(sittingId);
   const { data: progress } = useProgress(sittingId);
   const stages = stagesOf(sitting ?? { id: sittingId, roles: [] }, progress, chosen);
-  const places = [
-    { label: 'Bench', href: '/', icon: 'bench' as const, isChosen: false },
-    ...stages.flatMap((stage, index) => {
-      const section = sections[index];
-      return stage.href && section ? [{ label: stage.label, href: stage.href, icon: icons[section], isChosen: section === chosen }] : [];
-    }),
-  ];
-  const name = stages.find((stage) => stage.isChosen)?.label ?? 'Sitting';
+  const overview: Place = { label: 'Overview', href: `/sittings/${sittingId}`, icon: 'overview', isChosen: chosen === null };
+  const open = atFoot.flatMap((section): Place[] => {
+    const stage = stages.find((one) => one.section === section);
+    return stage?.href === undefined ? [] : [{ label: stage.label, href: stage.href, icon: iconOf(section), isChosen: section === chosen }];
+  });
+  const places: Place[] = [{ label: 'Bench', href: '/', icon: 'bench', isChosen: false }, overview, ...open.slice(0, 3)];
+  const name = stages.find((stage) => stage.isChosen)?.label ?? overview.label;
+  const rail = isSlim ? <BuretteSlim stages={stages} level={levelOf(progress)} /> : <Burette stages={stages} level={levelOf(progress)} />;
   return (
-    <ScreenFrame name={sitting ? `${name}, ${sitting.courseCode}` : name} isHeadHidden isFixed={isFixed} places={places} rail={<Burette stages={stages} level={levelOf(progress)} />}>
+    <ScreenFrame name={sitting ? `${name}, ${sitting.courseCode}` : name} isHeadHidden isFixed={isFixed} places={places} rail={rail} isRailSlim={isSlim} side={side}>
       {children}
     </ScreenFrame>
   );

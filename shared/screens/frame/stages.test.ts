@@ -16,14 +16,25 @@ const locked: ProgressView = {
   answers: { all: 6, readable: 0, held: 0, scored: 0 },
 };
 
-it('leaves something in the burette of a locked sitting while answers are unread', () => {
-  const stages = stagesOf({ id: 's', roles: ['lead'] }, locked, null);
-  expect(stages.at(-1)).toEqual({ label: 'Reading', note: 'not begun' });
-  expect(levelOf(locked)).toBe(stages.length - 1);
-  expect(levelOf({ ...locked, readings: { taken: 6, due: 0 } })).toBe(stages.length);
+it('counts a stage as finished only when all of it is, so that the meniscus falls with the work', () => {
+  expect(levelOf(undefined)).toBe(0);
+  expect(levelOf({ ...locked, isLocked: false })).toBe(0);
+  expect(levelOf(locked)).toBe(3);
+  const half = { ...locked, pages: { due: 3, in: 3, excused: 0, loose: 0 }, readings: { taken: 3, due: 3 }, answers: { all: 6, readable: 6, held: 1, scored: 2 } };
+  expect(levelOf(half)).toBe(4.5);
+  expect(levelOf({ ...half, readings: { taken: 6, due: 0 } })).toBeCloseTo(5 + 2 / 6);
+  expect(levelOf({ ...half, readings: { taken: 6, due: 0 }, answers: { all: 6, readable: 6, held: 0, scored: 6 } })).toBe(7);
 });
 
-it('leads only a lead or an external examiner to the paper', () => {
-  const ways = (roles: ('lead' | 'reader' | 'officer')[]) => stagesOf({ id: 's', roles }, locked, null).flatMap(({ label, href }) => (href ? [label] : []));
-  expect([ways(['lead']), ways(['reader']), ways(['officer'])]).toEqual([['Paper', 'Regions', 'Class list'], ['Class list'], []]);
+it('leads each role only where it may go', () => {
+  const ways = (roles: ('lead' | 'reader' | 'external' | 'officer')[]) => stagesOf({ id: 's', roles }, locked, null).flatMap(({ label, href }) => (href ? [label] : []));
+  expect(ways(['lead'])).toEqual(['Paper', 'Regions', 'Class list', 'Scans', 'Reading', 'Moderation', 'Marks']);
+  expect(ways(['reader'])).toEqual(['Class list', 'Scans', 'Reading']);
+  expect(ways(['external'])).toEqual(['Paper', 'Regions', 'Class list', 'Scans', 'Moderation', 'Marks']);
+  expect(ways(['officer'])).toEqual([]);
+});
+
+it('tells a reader nothing of what is held or scored', () => {
+  const seen = stagesOf({ id: 's', roles: ['reader'] }, { ...locked, answers: { all: 6, readable: 6, held: null, scored: null } }, null);
+  expect(seen.slice(-2).map(({ note }) => note)).toEqual(['', '']);
 });

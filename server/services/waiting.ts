@@ -1,0 +1,41 @@
+import { answerCounts, pageCounts } from '../../db/queries/progress';
+import { heldStates } from '../../db/queries/ledger';
+import { isPaperLocked } from '../../db/queries/sittings';
+import { waitingKinds, type WaitingLine } from '../../shared/contracts/waiting';
+import type { SittingView } from '../../shared/contracts/sittings';
+import type { Actor } from '../auth/access';
+import type { Context } from '../context';
+import { deskStanding } from './desk';
+import { coursesOf, sittingsIn } from './sittings';
+
+function toRead(context: Context, actor: Actor, sitting: SittingView): Pick<WaitingLine, 'count' | 'item'> {
+  const { items } = deskStanding(context, actor, sitting.id);
+  const most = items.reduce<(typeof items)[number] | null>((found, item) => (item.toRead > (found?.toRead ?? 0) ? item : found), null);
+  return { count: most?.toRead ?? 0, item: most ? { id: most.id, number: most.number, label: most.label } : null };
+}
+
+function linesOf(context: Context, actor: Actor, sitting: SittingView): WaitingLine[] {
+  const { db } = context;
+  const { id } = sitting;
+  const isLead = sitting.roles.includes('lead');
+  const isReader = sitting.roles.includes('reader');
+  if (!isLead && !isReader) return [];
+  const line = (kind: WaitingLine['kind'], count: number, item: WaitingLine['item'] = null): WaitingLine => ({ kind, sittingId: id, sitting: `${sitting.courseCode}, ${sitting.title}`, count, item });
+  if (!isPaperLocked(db, id)) return isLead ? [line('lock', 1)] : [];
+  const lines = [line('sort', pageCounts(db, id).loose)];
+  if (isReader) {
+    const { count, item } = toRead(context, actor, sitting);
+    lines.push(line('read', count, item));
+  }
+  if (isLead) lines.push(line('rule', answerCounts(db, id, heldStates)?.held ?? 0));
+  return lines.filter(({ count }) => count > 0);
+}
+
+/** What waits for a person over all sittings, most pressing first. */
+export function waitingFor(context: Context, actor: Actor): WaitingLine[] {
+  return coursesOf(context, actor)
+    .filter(({ roles }) => roles.length > 0)
+    .flatMap((course) => sittingsIn(context, actor, course.id))
+    .flatMap((sitting) => linesOf(context, actor, sitting))
+    .sort((one, other) => waitingKinds.indexOf(one.kind) - waitingKinds.indexOf(other.kind));
+}
