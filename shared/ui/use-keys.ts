@@ -1,9 +1,11 @@
 import { useEffect, useRef } from 'react';
+import { usePreference } from './preferences';
 import { commandOf, type KeyPlace, type LetterKeys } from './keys';
 
 export type KeyMap = Readonly<Record<string, (press: KeyboardEvent) => void>>;
 
 interface KeyOptions {
+  /** As the person prefers, unless a screen says otherwise. */
   readonly letters?: LetterKeys;
   readonly isOff?: boolean;
   /** The commands belong to the dialog that is open; otherwise an open dialog silences them. */
@@ -29,7 +31,9 @@ function isForControl(target: EventTarget | null, command: string): boolean {
  * Keys that act on the whole screen: a map from the key's name (`B`, `Shift+Z`, `Enter`, `PageUp`, `/`, `?`) to what it does.
  * A field marked with `takesCommands` gives up its letters while it is empty; every other field keeps them.
  */
-export function useKeys(map: KeyMap, { letters = 'on', isOff = false, isInDialog = false }: KeyOptions = {}): void {
+export function useKeys(map: KeyMap, { letters: asked, isOff = false, isInDialog = false }: KeyOptions = {}): void {
+  const [preferred] = usePreference('letters');
+  const letters = asked ?? preferred;
   const latest = useRef(map);
   useEffect(() => {
     latest.current = map;

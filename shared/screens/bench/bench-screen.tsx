@@ -1,42 +1,41 @@
 import { useState } from 'react';
 import { View } from 'react-native';
-import { useMe, useSignOut } from '../../client/session';
+import { useMe } from '../../client/session';
 import { useCourseSittings } from '../../client/sittings';
 import type { SittingView } from '../../contracts/sittings';
 import { Button } from '../../ui/button';
 import { ScreenFrame } from '../../ui/screen-frame';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
+import { useIsPhone } from '../../ui/use-breakpoint';
+import { homePlaces } from '../frame/home-places';
 import { QueryState } from '../query-state';
 import { NewSittingDialog } from '../sittings/new-sitting-dialog';
 import { SittingStand } from './sitting-stand';
+import { WaitingLines } from './waiting-lines';
 import { words } from './words';
 
 /** Home: the sittings of one's courses, each with its burette. */
 export function BenchScreen() {
   const { data: me } = useMe();
-  const signOut = useSignOut();
+  const isPhone = useIsPhone();
   const [isBeginning, setBeginning] = useState(false);
   const leads = me?.courses.some(({ roles }) => roles.includes('lead')) ?? false;
   return (
     <ScreenFrame
       name={words.name}
       subtitle={words.institution}
-      places={[{ label: words.name, href: '/', icon: 'bench', isChosen: true }]}
+      places={homePlaces('bench')}
       actions={
-        <View style={{ flexDirection: 'row', gap: 12 }}>
-          {leads ? (
-            <Button icon="plus" onPress={() => setBeginning(true)}>
-              {words.newSitting}
-            </Button>
-          ) : null}
-          <Button kind="text" onPress={() => signOut.mutate('here')} isBusy={signOut.isPending}>
-            {words.signOut}
+        leads ? (
+          <Button icon="plus" onPress={() => setBeginning(true)}>
+            {words.newSitting}
           </Button>
-        </View>
+        ) : null
       }
     >
-      <View style={{ padding: 24, gap: 32 }}>
+      <View style={{ padding: isPhone ? 16 : 24, gap: 32 }}>
+        {me?.courses.some(({ roles }) => roles.length > 0) ? <WaitingLines /> : null}
         {(me?.courses ?? []).map((course) => (
           <Course key={course.id} id={course.id} name={`${course.code}, ${course.title}`} mayBegin={course.roles.includes('lead')} />
         ))}

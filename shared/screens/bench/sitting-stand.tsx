@@ -1,41 +1,73 @@
 import { View } from 'react-native';
 import { useProgress } from '../../client/sittings';
 import type { SittingView } from '../../contracts/sittings';
+import { ButtonLink } from '../../ui/button';
+import { BuretteRow } from '../../ui/burette-row';
 import { BuretteTube } from '../../ui/burette-tube';
-import { Link } from '../../ui/link';
 import { Text } from '../../ui/text';
-import { useColors } from '../../ui/theme';
+import { useIsPhone } from '../../ui/use-breakpoint';
 import { levelOf, stagesOf } from '../frame/stages';
 import { dayText } from '../times';
 import { words } from './words';
 
-const height = 28;
+const step = 48;
 
-/** One sitting in the rack: its burette, where it stands, and the ways into it that this person has. */
+/** One sitting in the rack: its burette, how it stands, and the way into it. On a phone the burette lies. */
 export function SittingStand({ sitting }: { sitting: SittingView }) {
-  const colors = useColors();
+  const isPhone = useIsPhone();
   const { data: progress } = useProgress(sitting.id);
   const stages = stagesOf(sitting, progress, null);
-  const ways = stages.filter((stage) => stage.href !== undefined);
-  return (
-    <View style={{ flexDirection: 'row', gap: 8, width: 300 }} role="group" aria-label={`${sitting.courseCode}, ${sitting.title}`}>
-      <BuretteTube stages={stages.length} level={levelOf(progress)} step={height * 2} />
-      <View style={{ flex: 1, gap: 6, paddingTop: 16 }}>
-        <Text variant="head" level={3}>{`${sitting.courseCode}, ${sitting.title}`}</Text>
-        <Text variant="small" tone="ink2">{`${dayText(sitting.heldOn)}, paper ${sitting.lockedAt === null ? words.open : words.locked}`}</Text>
-        {stages.map((stage) => (
-          <Text key={stage.label} variant="small">
-            <Text variant="small" weight={600}>{`${stage.label}: `}</Text>
-            {stage.note}
+  const level = levelOf(progress);
+  const now = stages[Math.min(stages.length - 1, Math.floor(level))];
+  const others = stages.filter(({ label, note }) => note !== '' && ['Scans', 'Reading', 'Moderation'].includes(label) && label !== now?.label);
+  const name = `${sitting.courseCode}, ${sitting.title}`;
+  const text = (
+    <View style={{ gap: 4 }}>
+      <Text variant="head" level={3}>
+        {name}
+      </Text>
+      <Text variant="small" tone="ink2">
+        {dayText(sitting.heldOn)}
+      </Text>
+      {now && progress ? (
+        <View style={{ paddingTop: 6, gap: 2 }}>
+          <Text variant="small" weight={600}>
+            {`${now.label}${now.note === '' ? '' : `, ${now.note}`}`}
           </Text>
-        ))}
-        <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 16, paddingTop: 8 }}>
-          {ways.map((stage) => (
-            <Link key={stage.label} href={stage.href ?? '/'} style={() => ({ minHeight: 36, justifyContent: 'center', borderBottomWidth: 2, borderColor: colors.manganate })}>
-              <Text weight={600}>{stage.label}</Text>
-            </Link>
-          ))}
+          {progress.isLocked
+            ? others.map(({ label, note }) => (
+                <Text key={label} variant="small" tone="ink2">
+                  {`${label}: ${note}`}
+                </Text>
+              ))
+            : null}
         </View>
+      ) : null}
+    </View>
+  );
+  const way = (
+    <View style={{ alignSelf: 'flex-start', paddingTop: 10 }}>
+      <ButtonLink href={`/sittings/${sitting.id}`} label={`${words.open}: ${name}`}>
+        {words.open}
+      </ButtonLink>
+    </View>
+  );
+  if (isPhone) {
+    return (
+      <View role="group" aria-label={name} style={{ alignSelf: 'stretch', width: '100%' }}>
+        <BuretteRow stages={stages.length} level={level} label={`${Math.floor(level)} of ${stages.length} stages done`}>
+          {text}
+        </BuretteRow>
+        {way}
+      </View>
+    );
+  }
+  return (
+    <View style={{ flexDirection: 'row', gap: 16, width: 270 }} role="group" aria-label={name}>
+      <BuretteTube stages={stages.length} level={level} step={step} />
+      <View style={{ flex: 1, paddingTop: 20 }}>
+        {text}
+        {way}
       </View>
     </View>
   );
