@@ -66,7 +66,7 @@ const described: Readonly<Record<Section, Described>> = {
   },
   marks: {
     label: 'Marks',
-    icon: 'overview',
+    icon: 'check',
     who: ['lead', 'external'],
     note: ({ answers }) => (answers.scored === null ? '' : `${count(answers.scored)} of ${count(answers.all)} answers`),
     done: ({ answers }) => share(answers.scored ?? 0, answers.all),

@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useEffect, useState } from 'react';
 import { Image, ScrollView, View } from 'react-native';
 import { pagePictureUrl } from '../../client/pictures';
 import { useColors } from '../../ui/theme';
@@ -19,6 +19,16 @@ export function PageOnMat({ id, rev, label, isWhole }: PageOnMatProps) {
   const colors = useColors();
   const [room, setRoom] = useState({ width: 0, height: 0 });
   const [ratio, setRatio] = useState(a4);
+  const uri = pagePictureUrl(id, 'display', rev);
+  useEffect(() => {
+    let isHere = true;
+    Image.getSize(uri, (width, height) => {
+      if (isHere && width > 0) setRatio(height / width);
+    });
+    return () => {
+      isHere = false;
+    };
+  }, [uri]);
   const gap = 14;
   const widest = Math.max(0, room.width - 2 * gap);
   const width = isWhole ? Math.min(widest, Math.max(0, room.height - 2 * gap) / ratio) : widest;
@@ -28,13 +38,9 @@ export function PageOnMat({ id, rev, label, isWhole }: PageOnMatProps) {
         {room.width > 0 ? (
           <View style={{ boxShadow: shadow.scan, borderRadius: radius.scan }}>
             <Image
-              key={`${id}-${rev}`}
-              source={{ uri: pagePictureUrl(id, 'display', rev) }}
+              key={uri}
+              source={{ uri }}
               accessibilityLabel={label}
-              onLoad={({ nativeEvent }) => {
-                const { width: w, height: h } = nativeEvent.source;
-                if (w > 0 && h > 0) setRatio(h / w);
-              }}
               resizeMode="contain"
               style={{ width, height: width * ratio, borderRadius: radius.scan }}
             />

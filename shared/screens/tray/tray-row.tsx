@@ -105,8 +105,8 @@ export function TrayRowView({ row, sittingId, canSend, isChosen, onShow, onCance
             ) : null
           }
         >
-          {small(words.row.looseWhy, 'iodine')}
-          {small(words.row.looseDo)}
+          {small(words.row.looseWhy(row.pages), 'iodine')}
+          {small(words.row.looseDo(row.pages))}
         </Frame>
       );
     case 'sending':

@@ -64,9 +64,10 @@ function Tray({ sitting, batches, progress }: TrayProps) {
   const batch = useBatch(shown);
   const sent = sending.filter(({ state }) => state === 'sent').length;
   const isOver = useDrop(setFiles, !canSend || files.length > 0);
+  const made = batches.reduce((sum, { files: { done } }) => sum + done, 0);
   useEffect(() => {
     if (sent > 0) lookAtPagesAgain(client, sitting.id);
-  }, [client, sent, sitting.id]);
+  }, [client, sent, made, sitting.id]);
   const choose = (capture: boolean) => void pickFiles(capture ? 'image/jpeg' : accepted, { capture, many: !capture }).then(setFiles);
   const rows = trayRows(batches, sending, batch.data?.uploads ?? [], shown);
   const side = isWide ? 24 : 16;
