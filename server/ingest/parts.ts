@@ -1,6 +1,6 @@
 import { createHash, randomUUID } from 'node:crypto';
 import { createReadStream, createWriteStream } from 'node:fs';
-import { copyFile, mkdir, open, readdir, rename, rm, stat } from 'node:fs/promises';
+import { copyFile, link, mkdir, open, readdir, rename, rm, stat } from 'node:fs/promises';
 import { dirname, join } from 'node:path';
 import { pipeline } from 'node:stream/promises';
 
@@ -40,11 +40,16 @@ export function createParts(dataDir: string): Parts {
     },
     join: async (uploadId, count) => {
       const path = join(folder, uploadId, `whole-${randomUUID()}`);
-      await copyFile(partPath(uploadId, 0), path);
-      for (let part = 1; part < count; part += 1) await pipeline(createReadStream(partPath(uploadId, part)), createWriteStream(path, { flags: 'a' }));
+      if (count === 1) {
+        // A second name for the same bytes, which are on disk already; the part stays until dropped.
+        await link(partPath(uploadId, 0), path);
+      } else {
+        await copyFile(partPath(uploadId, 0), path);
+        for (let part = 1; part < count; part += 1) await pipeline(createReadStream(partPath(uploadId, part)), createWriteStream(path, { flags: 'a' }));
+        await syncToDisk(path);
+      }
       const hash = createHash('sha256');
       await pipeline(createReadStream(path), hash);
-      await syncToDisk(path);
       return { path, sha256: hash.digest('hex'), size: (await stat(path)).size };
     },
     drop: (uploadId) => rm(join(folder, uploadId), { recursive: true, force: true }),

@@ -101,7 +101,7 @@ export async function ingestUpload(context: Context, uploadId: string): Promise<
     if (!made.ok) return refuse(context, upload, batch, expected > 1 ? `Page ${index + 1}: ${made.refusal}` : made.refusal);
     if (made.pages > mostPagesOfFile) return refuse(context, upload, batch, `The file holds ${made.pages} pages; ${mostPagesOfFile} are the most.`);
     expected = made.pages;
-    pages.push({ made, stored: await storePage(context, made) });
+    pages.push({ made, stored: await storePage(context, made, upload.sha256) });
   }
   keep(context, { upload, batch, pages, cutPage: 'place' in named ? named.place.page : null });
 }

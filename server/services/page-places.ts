@@ -28,22 +28,23 @@ export function cutFor({ db }: Pick<Context, 'db'>, place: Pick<PagePlace, 'layo
   return found ? { page: found, boxes: found.boxes } : null;
 }
 
-/** Puts the pictures of a page on disk; their rows follow in the transaction of the act. */
-export async function storePage({ storage }: Pick<Context, 'storage'>, made: MadePage): Promise<StoredPage> {
-  const [display, thumb, ...crops] = await Promise.all([made.display, made.thumb, ...made.crops.map(({ jpeg }) => jpeg)].map((bytes) => storage.put(bytes)));
+/** Puts the pictures of a page on disk; their rows follow in the transaction of the act. `original` is shown where no other display was made. */
+export async function storePage({ storage }: Pick<Context, 'storage'>, made: MadePage, original: string): Promise<StoredPage> {
+  const shaOf = async (bytes: Uint8Array): Promise<string> => (await storage.put(bytes)).sha256;
+  const [display, thumb, ...crops] = await Promise.all([made.display ? shaOf(made.display) : original, shaOf(made.thumb), ...made.crops.map(({ jpeg }) => shaOf(jpeg))]);
   return {
-    display: display?.sha256 ?? '',
-    thumb: thumb?.sha256 ?? '',
+    display,
+    thumb,
     widthPx: made.width,
     heightPx: made.height,
-    crops: made.crops.map(({ box, width, height }, index) => ({ box, blob: crops[index]?.sha256 ?? '', widthPx: width, heightPx: height })),
+    crops: made.crops.map(({ box, width, height }, index) => ({ box, blob: crops[index] ?? '', widthPx: width, heightPx: height })),
   };
 }
 
-/** Notes every picture of a page among the stored bytes. */
+/** Notes every picture made of a page among the stored bytes. */
 export function noteBlobs({ db }: Pick<Context, 'db'>, made: MadePage, stored: StoredPage): void {
   const row = (sha256: string, bytes: Uint8Array): void => insertBlob(db, { sha256, size: bytes.length, mediaType: 'image/jpeg' });
-  row(stored.display, made.display);
+  if (made.display) row(stored.display, made.display);
   row(stored.thumb, made.thumb);
   stored.crops.forEach(({ blob }, index) => row(blob, made.crops[index]?.jpeg ?? new Uint8Array()));
 }

@@ -55,7 +55,7 @@ async function remake(context: Context, image: PageImageRow, turns: number, plac
   if (image.original === null) throw notFound();
   const made = await context.pictures.make({ path: context.storage.localPath(image.original), index: image.index, turns, cut: cutFor(context, place) });
   if (!made.ok) throw conflict(made.refusal);
-  return { made, stored: await storePage(context, made) };
+  return { made, stored: await storePage(context, made, image.original) };
 }
 
 const seen = (found: Found, rev: number): void => {

@@ -1,4 +1,4 @@
-import { copyFile, mkdir, readFile, rm } from 'node:fs/promises';
+import { copyFile, mkdir, rm, stat } from 'node:fs/promises';
 import { basename, join } from 'node:path';
 import { randomUUID } from 'node:crypto';
 import { v7 as uuidv7 } from 'uuid';
@@ -100,14 +100,14 @@ export async function completeUpload(context: Context, actor: Actor, uploadId: s
 /** Brings in a file that lies on this machine, by the same steps as one that is sent. The file stays where it is. */
 export async function receiveFile(context: Context, actor: Actor, batchId: string, path: string): Promise<UploadView> {
   const { parts } = context;
-  const bytes = await readFile(path);
-  if (bytes.length > partBytes) throw new AppError('too_large', `${basename(path)} is larger than one part.`);
-  const upload = beginUpload(context, actor, batchId, { fileName: basename(path), size: bytes.length });
+  const { size } = await stat(path);
+  if (size > partBytes) throw new AppError('too_large', `${basename(path)} is larger than one part.`);
+  const upload = beginUpload(context, actor, batchId, { fileName: basename(path), size });
   await mkdir(parts.incoming, { recursive: true });
   const passing = join(parts.incoming, randomUUID());
   try {
     await copyFile(path, passing);
-    await keepPart(context, actor, upload.id, 0, { path: passing, size: bytes.length });
+    await keepPart(context, actor, upload.id, 0, { path: passing, size });
   } finally {
     await rm(passing, { force: true });
   }

@@ -1,6 +1,7 @@
 import { startTestServer } from '../support/test-server';
 import { benchBundle } from './bundle';
 import { printLines } from './figures';
+import { benchIngest } from './ingest';
 import { benchRecording } from './recording';
 import { benchScoring } from './scoring';
 
@@ -8,5 +9,5 @@ import { benchScoring } from './scoring';
 const server = await startTestServer();
 const lines = [...(await benchRecording(server))];
 await server.close();
-lines.push(...(await benchScoring()), ...(await benchBundle()));
+lines.push(...(await benchScoring()), ...(await benchIngest()), ...(await benchBundle()));
 process.exit(printLines(lines) ? 0 : 1);
