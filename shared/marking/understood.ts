@@ -1,0 +1,25 @@
+import { readAnswer } from './read-answer';
+
+export type Understood =
+  | { readonly kind: 'nothing' }
+  /** Waits without complaint: `6.` is not yet a value. */
+  | { readonly kind: 'waiting' }
+  | { readonly kind: 'value'; readonly value: string; readonly form: string }
+  | { readonly kind: 'refused'; readonly message: string };
+
+const smallNumbers = ['No', 'One', 'Two', 'Three', 'Four', 'Five', 'Six', 'Seven', 'Eight', 'Nine', 'Ten'] as const;
+const unitWords = (unit: string | null): string => (unit === null ? 'no unit' : `unit ${unit}`);
+const decimalsWords = (decimals: number): string => `${smallNumbers[decimals] ?? decimals} ${decimals === 1 ? 'decimal' : 'decimals'}`;
+
+/**
+ * What is said back of a typed text before it is recorded, without a word on its mark.
+ * understood('5,75', []) is the value 5.75 with "Two decimals, no unit."; the typed text itself stays as it is.
+ */
+export function understood(text: string, units: readonly string[]): Understood {
+  if (text.trim() === '') return { kind: 'nothing' };
+  const read = readAnswer(text, units);
+  if (!read.ok) return read.unfinished ? { kind: 'waiting' } : { kind: 'refused', message: read.message };
+  const value = read.unit === null ? read.canonical : read.canonical.slice(0, -read.unit.length).trim();
+  const written = read.figures === null ? 'A fraction' : /e/.test(value) ? 'A power of ten' : decimalsWords(read.decimals);
+  return { kind: 'value', value, form: `${written}, ${unitWords(read.unit)}.` };
+}
