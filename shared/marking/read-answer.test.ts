@@ -88,3 +88,10 @@ describe('reading a typed answer', () => {
     expect(value('9007199254740993')).toBe('9007199254740993');
   });
 });
+
+it('takes the e of a unit as no exponent', () => {
+  expect(readAnswer('13.6 eV', ['eV', 'kJ/mol'])).toMatchObject({ ok: true, unit: 'eV', canonical: '13.6 eV' });
+  expect(readAnswer('13.6eV', ['eV'])).toMatchObject({ ok: true, unit: 'eV' });
+  expect(readAnswer('13.6 e', ['eV'])).toEqual({ ok: false, unfinished: true });
+  expect(readAnswer('1.36e1 eV', ['eV'])).toMatchObject({ ok: true, unit: 'eV', canonical: '1.36e1 eV' });
+});

@@ -90,11 +90,15 @@ interface Power {
   readonly rest: Rest;
 }
 
-function readExponent(rest: Rest): Power | ReadAnswer | null {
+function readExponent(rest: Rest, units: readonly string[]): Power | ReadAnswer | null {
   const match = exponent.exec(rest.text);
   if (!match) return null;
   const [taken, sign = '', digits = ''] = match;
-  if (digits === '') return unfinished;
+  if (digits === '') {
+    // An e may begin a unit: eV is no exponent.
+    const word = rest.text.trim();
+    return units.some((unit) => unit.startsWith(word) || word === unit) ? null : unfinished;
+  }
   const power = BigInt(digits) * (isNegative(sign) ? -1n : 1n);
   if (power > largestExponent || power < -largestExponent) return refuse(rest.at, taken.length, `An exponent goes from -${largestExponent} to ${largestExponent}.`);
   return { text: `e${power}`, power, rest: skip(rest, taken.length) };
@@ -148,7 +152,7 @@ function readFraction(mantissa: Mantissa, sign: string, units: readonly string[]
 }
 
 function readDecimal(mantissa: Mantissa, sign: string, units: readonly string[]): ReadAnswer {
-  const power = readExponent(mantissa.rest);
+  const power = readExponent(mantissa.rest, units);
   if (isOutcome(power)) return power;
   const tail = readTail(power?.rest ?? mantissa.rest, units);
   if (isOutcome(tail)) return tail;
