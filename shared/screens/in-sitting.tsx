@@ -13,6 +13,8 @@ interface InSittingProps {
   readonly isFixed?: boolean;
   /** A scan or a sheet needs the room. */
   readonly isSlim?: boolean;
+  /** A desk or a form has the foot of a phone to itself. */
+  readonly isBarHidden?: boolean;
   /** A sheet beside the content on wide. */
   readonly side?: ReactNode;
 }
@@ -20,10 +22,10 @@ interface InSittingProps {
 /** On a phone four sections stand at the foot beside the overview, the work before the building. */
 const atFoot: readonly Section[] = ['reading', 'moderation', 'marks', 'scans', 'paper', 'class-list', 'regions'];
 
-const sectionOf = (path: string): Section | null => (path.includes('/sorting') ? 'scans' : (sections.find((section) => path.endsWith(`/${section}`)) ?? null));
+const sectionOf = (path: string): Section | null => (path.startsWith('/desk/') ? 'reading' : path.endsWith('/sorting') ? 'scans' : (sections.find((section) => path.endsWith(`/${section}`)) ?? null));
 
 /** What stands round every screen of a sitting: its burette at the left of a wide screen, its places at the foot of a phone. */
-export function InSitting({ sittingId, children, isFixed = false, isSlim = false, side }: InSittingProps) {
+export function InSitting({ sittingId, children, isFixed = false, isSlim = false, isBarHidden = false, side }: InSittingProps) {
   const path = usePathname();
   const chosen = sectionOf(path);
   const { data: sitting } = useSitting(sittingId);
@@ -38,7 +40,7 @@ export function InSitting({ sittingId, children, isFixed = false, isSlim = false
   const name = stages.find((stage) => stage.isChosen)?.label ?? overview.label;
   const rail = isSlim ? <BuretteSlim stages={stages} level={levelOf(progress)} /> : <Burette stages={stages} level={levelOf(progress)} />;
   return (
-    <ScreenFrame name={sitting ? `${name}, ${sitting.courseCode}` : name} isHeadHidden isFixed={isFixed} places={places} rail={rail} isRailSlim={isSlim} side={side}>
+    <ScreenFrame name={sitting ? `${name}, ${sitting.courseCode}` : name} isHeadHidden isFixed={isFixed} places={places} rail={rail} isRailSlim={isSlim} isBarHidden={isBarHidden} side={side}>
       {children}
     </ScreenFrame>
   );

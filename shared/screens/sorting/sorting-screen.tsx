@@ -15,7 +15,7 @@ import { useIsWide } from '../../ui/use-breakpoint';
 import { InSitting } from '../in-sitting';
 import { QueryState } from '../query-state';
 import { choosePlace, startOf } from './choose-place';
-import { PageOnMat } from './page-on-mat';
+import { PageOnMat } from '../page-on-mat';
 import { PlaceForm } from './place-form';
 import { words } from './words';
 

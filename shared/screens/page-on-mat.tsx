@@ -1,8 +1,8 @@
 import { useEffect, useState } from 'react';
 import { Image, ScrollView, View } from 'react-native';
-import { pagePictureUrl } from '../../client/pictures';
-import { useColors } from '../../ui/theme';
-import { radius, shadow } from '../../ui/tokens';
+import { pagePictureUrl } from '../client/pictures';
+import { useColors } from '../ui/theme';
+import { radius, shadow } from '../ui/tokens';
 
 interface PageOnMatProps {
   readonly id: string;

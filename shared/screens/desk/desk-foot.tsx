@@ -1,0 +1,160 @@
+import type { Ref } from 'react';
+import { View, type TextInput } from 'react-native';
+import type { DeskItem } from '../../contracts/desk';
+import type { Code } from '../../marking/scheme';
+import { understood } from '../../marking/understood';
+import { Button } from '../../ui/button';
+import { KeyStrip } from '../../ui/key-strip';
+import { Pad, type PadSign } from '../../ui/pad';
+import { Text } from '../../ui/text';
+import { useColors } from '../../ui/theme';
+import { usePreference } from '../../ui/preferences';
+import { useIsWide } from '../../ui/use-breakpoint';
+import { Vessel } from '../../ui/vessel';
+import { CodeChoice } from './code-choice';
+import { words } from './words';
+
+export interface DeskFootProps {
+  readonly item: DeskItem;
+  readonly text: string;
+  readonly onText: (text: string) => void;
+  readonly fieldRef: Ref<TextInput>;
+  readonly note: string;
+  readonly isChoosingCode: boolean;
+  readonly chosenCode: Code | null;
+  readonly onChooseCode: (code: Code) => void;
+  readonly onOther: () => void;
+  readonly onCancelOther: () => void;
+  readonly onRecord: () => void;
+  readonly onCode: (code: Code) => void;
+}
+
+/** What was understood, in one line; a refusal names its place. */
+function Line({ text, units, note }: { text: string; units: readonly string[]; note: string }) {
+  const isWide = useIsWide();
+  const back = understood(text, units);
+  const head = isWide ? 'head' : 'body';
+  const noteLine = note === '' ? null : (
+    <Text variant="small" tone="manganate" lines={1}>
+      {words.noteOpen(note)}
+    </Text>
+  );
+  if (back.kind === 'refused') {
+    return (
+      <View role="alert">
+        <Text variant={head} weight={600} tone="methyl">
+          {back.message}
+        </Text>
+        {noteLine}
+      </View>
+    );
+  }
+  const [lead, tail] = back.kind === 'value' ? [words.understood, back.form] : back.kind === 'waiting' ? [words.goOn, ''] : [words.typeIt, words.typeItHelp];
+  const value =
+    back.kind === 'value' ? (
+      <Text variant={isWide ? 'readingM' : 'reading'} weight={500}>
+        {` ${back.value}`}
+      </Text>
+    ) : null;
+  return (
+    <View aria-live="polite" style={isWide ? { gap: 2 } : { flexDirection: 'row', flexWrap: 'wrap', columnGap: 8, alignItems: 'baseline' }}>
+      <Text variant={head} weight={600}>
+        {lead}
+        {value}
+      </Text>
+      <Text variant={isWide ? 'body' : 'small'} tone="ink2">
+        {tail}
+      </Text>
+      {noteLine}
+    </View>
+  );
+}
+
+/** The lower half of the desk: field, what was understood, and the acts; on a phone the pad. */
+export function DeskFoot(props: DeskFootProps) {
+  const { item, text, onText, fieldRef, note, onRecord, onCode } = props;
+  const colors = useColors();
+  const isWide = useIsWide();
+  const [side] = usePreference('actions');
+  const isEmpty = text === '';
+  const canRecord = understood(text, item.units).kind === 'value';
+  const aside = item.units.length === 0 ? words.noUnit : words.unit(item.units);
+  const field = (
+    <Vessel
+      label={words.reading}
+      aside={aside}
+      value={text}
+      onChange={onText}
+      variant={isWide ? 'readingXL' : 'readingL'}
+      height={isWide ? 84 : 52}
+      maxLength={64}
+      takesCommands
+      isFocusedFirst
+      inputRef={fieldRef}
+      keyboard={isWide ? 'default' : 'none'}
+      testID="desk-field"
+    />
+  );
+  if (!isWide) {
+    const signs: PadSign[] = [{ label: ',' }, { label: '/' }, { label: '+' }, { label: 'e' }, { label: '×10', text: 'x10^' }, ...item.units.map((unit): PadSign => ({ label: unit, text: ` ${unit}` }))];
+    return (
+      <View>
+        <View style={{ minHeight: 40, justifyContent: 'center', paddingHorizontal: 16, paddingVertical: 6, backgroundColor: colors.paper, borderTopWidth: 1, borderColor: colors.hair }}>
+          <Line text={text} units={item.units} note={note} />
+        </View>
+        <Pad
+          field={field}
+          side={side}
+          onType={(sign) => onText(text + sign)}
+          onDelete={() => onText(text.slice(0, -1))}
+          onEmpty={() => onText('')}
+          signs={signs}
+          actions={[
+            { label: words.blank, onPress: () => onCode('blank'), isClosed: !isEmpty, testID: 'code-blank' },
+            { label: words.other, onPress: props.onOther, isClosed: !isEmpty, testID: 'other' },
+            { label: words.recordShort, onPress: onRecord, isClosed: !canRecord, isPrimary: true, testID: 'record' },
+          ]}
+        />
+      </View>
+    );
+  }
+  return (
+    <View>
+      <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 32, paddingHorizontal: 40, paddingVertical: 14, minHeight: 168, borderTopWidth: 1, borderColor: colors.hair, backgroundColor: colors.paper }}>
+        <View style={{ flex: 1.1, minWidth: 260 }}>{field}</View>
+        <View style={{ flex: 1, minWidth: 220, paddingTop: 22 }}>
+          {props.isChoosingCode ? <CodeChoice chosen={props.chosenCode} onChoose={props.onChooseCode} onRecord={onRecord} onCancel={props.onCancelOther} /> : <Line text={text} units={item.units} note={note} />}
+        </View>
+        <View style={{ flex: 1.05, minWidth: 300, gap: 8, paddingTop: 18 }}>
+          <Button kind="primary" isWide keyCap="Enter" align="between" onPress={onRecord} closed={canRecord ? undefined : ''} testID="record">
+            {words.record}
+          </Button>
+          <View style={{ flexDirection: 'row', gap: 8 }}>
+            <Button keyCap="B" onPress={() => onCode('blank')} closed={isEmpty ? undefined : ''} testID="code-blank">
+              {words.blank}
+            </Button>
+            <Button keyCap="X" onPress={() => onCode('cannot-read')} closed={isEmpty ? undefined : ''} testID="code-cannot-read">
+              {words.cannotRead}
+            </Button>
+            <Button keyCap="W" onPress={props.onOther} closed={isEmpty ? undefined : ''} testID="other">
+              {words.other}
+            </Button>
+          </View>
+          <View style={{ alignItems: 'flex-start' }}>
+            <Button kind="text" isSmall keyCap="S" onPress={() => onCode('ask-the-lead')} closed={isEmpty ? undefined : ''} testID="code-ask-the-lead">
+              {words.askLead}
+            </Button>
+          </View>
+        </View>
+      </View>
+      <KeyStrip
+        hints={[
+          { keys: ['0–9'], does: 'types' },
+          { keys: ['U'], does: 'takes the last one back' },
+          { keys: ['N'], does: 'note' },
+        ]}
+        last={{ keys: ['?'], does: 'all keys' }}
+      />
+    </View>
+  );
+}

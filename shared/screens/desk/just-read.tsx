@@ -1,0 +1,67 @@
+import { View } from 'react-native';
+import { useRecent } from '../../client/desk';
+import type { QueueView } from '../../client/reading-queue';
+import { Button } from '../../ui/button';
+import { Text } from '../../ui/text';
+import { useColors } from '../../ui/theme';
+import { clockTime } from '../times';
+import { saidText } from './use-desk-work';
+import { words } from './words';
+import type { DoneAnswer } from './work-list';
+
+interface JustReadProps {
+  readonly sittingId: string;
+  readonly itemId: string;
+  readonly done: readonly DoneAnswer[];
+  readonly queue: QueueView;
+  readonly onTakeBack: () => void;
+}
+
+const rows = 8;
+
+/** The last readings of this item, those of this page first, with a way to take the last one back. */
+export function JustRead({ sittingId, itemId, done, queue, onTakeBack }: JustReadProps) {
+  const colors = useColors();
+  const recent = useRecent(sittingId, itemId);
+  const unsent = new Set(queue.waiting.map(({ id }) => id));
+  const here = [...done].reverse().map(({ readingId, lease, said, at }) => ({ id: readingId, number: lease.candidateNumber, said, at }));
+  const ids = new Set(here.map(({ id }) => id));
+  const before = (recent.data?.readings ?? [])
+    .filter(({ id }) => !ids.has(id))
+    .map(({ id, candidateNumber, text, code, recordedAt }) => ({ id, number: candidateNumber, said: { ...(text === null ? {} : { text }), ...(code === null ? {} : { code }) }, at: recordedAt }));
+  const list = [...here, ...before].slice(0, rows);
+  const [last] = list;
+  return (
+    <View style={{ gap: 10 }}>
+      <Text variant="head" level={2}>
+        {words.justRead}
+      </Text>
+      {last === undefined ? (
+        <Text variant="small" tone="ink2">
+          {words.justReadNone}
+        </Text>
+      ) : (
+        <View role="list" aria-label={words.justRead}>
+          {list.map(({ id, number, said, at }) => (
+            <View key={id} role="listitem" style={{ flexDirection: 'row', alignItems: 'center', gap: 8, minHeight: 40, borderBottomWidth: 1, borderColor: colors.hair }}>
+              <Text variant="readingS" style={{ width: 62 }}>
+                {number}
+              </Text>
+              <Text variant={said.code === undefined ? 'reading' : 'small'} align="right" lines={1} style={{ flex: 1 }}>
+                {saidText(said)}
+              </Text>
+              <Text variant="label" weight={400} tone="ink2" align="right" style={{ width: 46 }}>
+                {unsent.has(id) ? words.waiting : clockTime(at)}
+              </Text>
+            </View>
+          ))}
+        </View>
+      )}
+      {last === undefined ? null : (
+        <Button onPress={onTakeBack} keyCap="U" align="between" isWide>
+          {words.takeBack(last.number)}
+        </Button>
+      )}
+    </View>
+  );
+}

@@ -1,0 +1,142 @@
+import { useQueryClient } from '@tanstack/react-query';
+import { useCallback, useEffect, useRef, useState } from 'react';
+import { v7 as uuidv7 } from 'uuid';
+import { fetchLeases, recentQueryOptions, standingQueryOptions, takeBack, useReadingQueue, warmPictures } from '../../client/desk';
+import { codeWords, words } from './words';
+import { emptyWork, looking, onView, withLeases, withReading, withTakenBack, type OnView, type Said } from './work-list';
+
+/** Answers held ahead, so that the next is there at once. */
+const ahead = 5;
+const fewest = 3;
+
+interface DeskPlace {
+  readonly sittingId: string;
+  readonly itemId: string;
+  readonly personId: string;
+}
+
+export interface DeskWork {
+  readonly shown: OnView;
+  readonly justDone: ReturnType<typeof useReadingQueue>['view'];
+  readonly done: typeof emptyWork.done;
+  /** Nothing more is to be had for now. */
+  readonly isAtEnd: boolean;
+  readonly isFetching: boolean;
+  readonly error: string | null;
+  /** The last thing that happened, for the live region. */
+  readonly message: string;
+  record(said: Said): Promise<void>;
+  takeBackLast(): Promise<void>;
+  look(step: 1 | -1): void;
+  fetchMore(): void;
+  forgetRefused(id: string): void;
+  tryAgain(): void;
+}
+
+/** The work of one item at the desk: leases ahead, readings into the queue, looking back, taking back. */
+export function useDeskWork({ sittingId, itemId, personId }: DeskPlace): DeskWork {
+  const client = useQueryClient();
+  const { queue, view } = useReadingQueue(personId);
+  const [work, setWork] = useState(emptyWork);
+  const [isFetching, setFetching] = useState(false);
+  const [isAtEnd, setAtEnd] = useState(false);
+  const [error, setError] = useState<string | null>(null);
+  const [message, setMessage] = useState('');
+  const opened = useRef(new Map<string, number>());
+  const isBusy = useRef(false);
+  const shown = onView(work);
+
+  const fetchMore = useCallback(() => {
+    if (isBusy.current) return;
+    isBusy.current = true;
+    setFetching(true);
+    const unsent = new Set([...queue.snapshot().waiting, ...queue.snapshot().refused].map(({ answerId }) => answerId));
+    fetchLeases(itemId, Math.min(20, ahead + unsent.size))
+      .then((leases) => {
+        warmPictures(leases);
+        setWork((before) => withLeases(before, leases, unsent));
+        setAtEnd(leases.every(({ answerId }) => unsent.has(answerId)));
+        setError(null);
+      })
+      .catch((problem: unknown) => setError(problem instanceof Error ? problem.message : String(problem)))
+      .finally(() => {
+        isBusy.current = false;
+        setFetching(false);
+      });
+  }, [itemId, queue]);
+
+  const isLow = work.held.length < fewest;
+  useEffect(() => {
+    if (isLow && !isAtEnd && error === null) fetchMore();
+  }, [isLow, isAtEnd, error, fetchMore, work.done.length]);
+
+  useEffect(() => {
+    if (shown.kind === 'next' && !opened.current.has(shown.lease.answerId)) opened.current.set(shown.lease.answerId, Date.now());
+  });
+
+  const { recorded, recordedIds } = view;
+  useEffect(() => {
+    const last = work.done.find(({ readingId }) => readingId === recordedIds.at(-1));
+    if (last) setMessage(words.recorded(last.lease.candidateNumber));
+    // The server answers again, so what could not be fetched is asked for once more.
+    setError(null);
+    if (recorded > 0 && recorded % 10 === 0) void client.invalidateQueries({ queryKey: standingQueryOptions(sittingId).queryKey });
+    // eslint-disable-next-line react-hooks/exhaustive-deps -- said once for each reading the server took
+  }, [recorded]);
+  useEffect(() => {
+    if (isAtEnd) void client.invalidateQueries({ queryKey: standingQueryOptions(sittingId).queryKey });
+  }, [client, isAtEnd, sittingId]);
+
+  const record = async (said: Said): Promise<void> => {
+    if (shown.kind !== 'next' && shown.kind !== 'later') return;
+    const { lease } = shown;
+    const id = uuidv7();
+    const at = Date.now();
+    await queue.keep({ id, sittingId, itemId, answerId: lease.answerId, leaseId: lease.id, candidateNumber: lease.candidateNumber, openedAt: opened.current.get(lease.answerId) ?? at, keptAt: at, ...said });
+    setWork((before) => withReading(before, { readingId: id, lease, said, at }));
+  };
+
+  const takeBackLast = async (): Promise<void> => {
+    const onLook = shown.kind === 'done' ? shown.done : work.done.at(-1);
+    const recent = onLook ? undefined : (await client.fetchQuery(recentQueryOptions(sittingId, itemId))).readings[0];
+    const [readingId, number] = onLook ? [onLook.readingId, onLook.lease.candidateNumber] : recent ? [recent.id, recent.candidateNumber] : [null, ''];
+    if (readingId === null) return;
+    if (queue.snapshot().waiting.some(({ id }) => id === readingId)) {
+      setMessage(words.notYetSent);
+      return;
+    }
+    try {
+      const { lease } = await takeBack(readingId);
+      if (lease) warmPictures([lease]);
+      setWork((before) => withTakenBack(before, readingId, lease));
+      setAtEnd(false);
+      setMessage(lease ? words.taken(number) : words.takenElsewhere(number));
+      void client.invalidateQueries({ queryKey: recentQueryOptions(sittingId, itemId).queryKey });
+    } catch (problem) {
+      setMessage(problem instanceof Error ? problem.message : String(problem));
+    }
+  };
+
+  return {
+    shown,
+    justDone: view,
+    done: work.done,
+    isAtEnd,
+    isFetching,
+    error,
+    message,
+    record,
+    takeBackLast,
+    look: (step) => setWork((before) => looking(before, step)),
+    fetchMore: () => {
+      setAtEnd(false);
+      setError(null);
+      fetchMore();
+    },
+    forgetRefused: (id) => void queue.forget(id),
+    tryAgain: () => queue.tryAgain(),
+  };
+}
+
+/** What was said of an answer, as the desk writes it. */
+export const saidText = ({ text, code }: Said): string => (code === undefined ? (text ?? '') : codeWords[code]);
