@@ -86,3 +86,33 @@ it('takes up in order what an earlier page left', async () => {
   await vi.waitFor(() => expect(queue.snapshot().recorded).toBe(3));
   expect(order).toEqual(['1', '2', '3']);
 });
+
+it.each(['internal', 'not_ready', 'too_many_requests'] as const)('tries again when the server says %s', async (code) => {
+  let fails = 2;
+  const { made, device } = ends(() => (fails-- > 0 ? new ApiError(code, 'Not just now.') : null));
+  const queue = new ReadingQueue(made);
+  await queue.keep(reading('1'));
+  await vi.waitFor(() => expect(queue.snapshot().recorded).toBe(1));
+  expect([queue.snapshot().refused.length, device.size]).toEqual([0, 0]);
+});
+
+it('sends a refused reading again when asked, under the same id', async () => {
+  let isRefused = true;
+  const { made, device, order } = ends(() => (isRefused ? new ApiError('not_found', 'Not found.') : null));
+  const queue = new ReadingQueue(made);
+  await queue.keep(reading('1'));
+  await vi.waitFor(() => expect(queue.snapshot().refused.length).toBe(1));
+  isRefused = false;
+  await queue.sendAgain('1');
+  await vi.waitFor(() => expect(queue.snapshot().recorded).toBe(1));
+  expect([order, device.size]).toEqual([['1', '1'], 0]);
+});
+
+it('sends nothing while paused for another person', async () => {
+  const { made, device, order } = ends();
+  const queue = new ReadingQueue(made);
+  queue.pause();
+  await queue.keep(reading('1'));
+  await Promise.resolve();
+  expect([device.size, order.length, queue.snapshot().needsSignIn]).toEqual([1, 0, true]);
+});

@@ -44,6 +44,8 @@ export interface QueueView {
 }
 
 const longestPauseMs = 15_000;
+/** What the server says when it cannot take anything just now: the reading itself is not at fault. */
+const isForNow = (error: unknown): boolean => error instanceof OfflineError || (error instanceof ApiError && (error.code === 'internal' || error.code === 'not_ready' || error.code === 'too_many_requests'));
 const rememberedIds = 50;
 
 /**
@@ -88,6 +90,21 @@ export class ReadingQueue {
     this.tell({});
   }
 
+  /** Sends a refused reading once more, as it is. */
+  async sendAgain(id: string): Promise<void> {
+    const found = this.kept.find((reading) => reading.id === id);
+    if (found?.refusal === undefined) return;
+    const { refusal: _said, ...again } = found;
+    await this.ends.store.put(again);
+    this.kept = this.kept.map((one) => (one.id === id ? again : one));
+    this.tryAgain();
+  }
+
+  /** Sends nothing until its person is signed in again: under another person's session nothing may go. */
+  pause(): void {
+    this.tell({ needsSignIn: true });
+  }
+
   /** After a sign-in or when the connection is back. */
   tryAgain(): void {
     this.tell({ needsSignIn: false });
@@ -128,7 +145,7 @@ export class ReadingQueue {
       this.tell({ isOffline: false, recorded: this.view.recorded + 1, recordedIds: [...this.view.recordedIds, reading.id].slice(-rememberedIds) });
       return true;
     } catch (error) {
-      if (error instanceof OfflineError || (error instanceof ApiError && error.code === 'internal')) this.tell({ isOffline: true });
+      if (isForNow(error)) this.tell({ isOffline: true });
       else if (error instanceof ApiError && error.code === 'not_signed_in') this.tell({ needsSignIn: true, isOffline: false });
       else {
         const refused = { ...reading, refusal: error instanceof Error ? error.message : 'It was refused.' };

@@ -8,6 +8,8 @@ import { emptyWork, looking, onView, withLeases, withReading, withTakenBack, typ
 /** Answers held ahead, so that the next is there at once. */
 const ahead = 5;
 const fewest = 3;
+/** As many as the server gives at once. */
+const most = 20;
 
 interface DeskPlace {
   readonly sittingId: string;
@@ -44,17 +46,21 @@ export function useDeskWork({ sittingId, itemId, personId }: DeskPlace): DeskWor
   const [message, setMessage] = useState('');
   const opened = useRef(new Map<string, number>());
   const isBusy = useRef(false);
+  const isEndOpen = useRef(false);
   const shown = onView(work);
 
   const fetchMore = useCallback(() => {
     if (isBusy.current) return;
     isBusy.current = true;
     setFetching(true);
+    const askedAt = Date.now();
     const unsent = new Set([...queue.snapshot().waiting, ...queue.snapshot().refused].map(({ answerId }) => answerId));
-    fetchLeases(itemId, Math.min(20, ahead + unsent.size))
+    fetchLeases(itemId, Math.min(most, ahead + unsent.size))
       .then((leases) => {
         warmPictures(leases);
-        setWork((before) => withLeases(before, leases, unsent));
+        setWork((before) => withLeases(before, leases, unsent, askedAt));
+        // Where more wait here than can be asked for at once, the end is not known before they are sent.
+        isEndOpen.current = ahead + unsent.size > most;
         setAtEnd(leases.every(({ answerId }) => unsent.has(answerId)));
         setError(null);
       })
@@ -69,6 +75,11 @@ export function useDeskWork({ sittingId, itemId, personId }: DeskPlace): DeskWor
   useEffect(() => {
     if (isLow && !isAtEnd && error === null) fetchMore();
   }, [isLow, isAtEnd, error, fetchMore, work.done.length]);
+  // What came had been read by then.
+  const isStarved = work.held.length === 0 && !isFetching;
+  useEffect(() => {
+    if (isStarved && !isAtEnd && error === null) fetchMore();
+  }, [isStarved, isAtEnd, error, fetchMore]);
 
   useEffect(() => {
     if (shown.kind === 'next' && !opened.current.has(shown.lease.answerId)) opened.current.set(shown.lease.answerId, Date.now());
@@ -80,6 +91,7 @@ export function useDeskWork({ sittingId, itemId, personId }: DeskPlace): DeskWor
     if (last) setMessage(words.recorded(last.lease.candidateNumber));
     // The server answers again, so what could not be fetched is asked for once more.
     setError(null);
+    if (isEndOpen.current) setAtEnd(false);
     if (recorded > 0 && recorded % 10 === 0) void client.invalidateQueries({ queryKey: standingQueryOptions(sittingId).queryKey });
     // eslint-disable-next-line react-hooks/exhaustive-deps -- said once for each reading the server took
   }, [recorded]);

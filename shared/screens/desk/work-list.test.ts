@@ -11,6 +11,13 @@ it('adds no answer twice, and none whose reading is still on its way', () => {
   expect(more.held.map(({ answerId }) => answerId)).toEqual(['a', 'b', 'c', 'd']);
 });
 
+it('does not bring back what was read while the server answered', () => {
+  const after = withReading(three, { ...done('a'), at: 20 });
+  expect(withLeases(after, ['a', 'd'].map(lease), new Set(), 10).held.map(({ answerId }) => answerId)).toEqual(['b', 'c', 'd']);
+  // Read before it was asked, it comes again: the reading was refused or taken back.
+  expect(withLeases(after, ['a'].map(lease), new Set(), 30).held.map(({ answerId }) => answerId)).toEqual(['b', 'c', 'a']);
+});
+
 it('shows the next once the first is read, and looks back at what was said', () => {
   const after = withReading(three, done('a'));
   expect(onView(after)).toMatchObject({ kind: 'next', lease: { answerId: 'b' } });

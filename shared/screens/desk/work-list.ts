@@ -27,9 +27,13 @@ export interface WorkList {
 export const emptyWork: WorkList = { held: [], done: [], back: 0 };
 const remembered = 50;
 
-/** Adds leases that are not here yet and were not read here; the order the server gave stays. */
-export function withLeases(work: WorkList, leases: readonly DeskLease[], unsent: ReadonlySet<string>): WorkList {
-  const known = new Set([...work.held.map(({ answerId }) => answerId), ...unsent]);
+/**
+ * Adds leases that are not here yet; the order the server gave stays. Left out are answers whose reading has not reached the
+ * server, and those read since it was asked: its answer was made before it knew of them.
+ */
+export function withLeases(work: WorkList, leases: readonly DeskLease[], unsent: ReadonlySet<string>, askedAt = Infinity): WorkList {
+  const readSince = work.done.filter(({ at }) => at >= askedAt).map(({ lease }) => lease.answerId);
+  const known = new Set([...work.held.map(({ answerId }) => answerId), ...unsent, ...readSince]);
   return { ...work, held: [...work.held, ...leases.filter(({ answerId }) => !known.has(answerId))] };
 }
 
