@@ -1,5 +1,5 @@
 import { useRouter } from 'expo-router';
-import { useEffect, useRef, useState } from 'react';
+import { useLayoutEffect, useRef, useState } from 'react';
 import { View, type TextInput } from 'react-native';
 import type { DeskItem } from '../../contracts/desk';
 import type { Code } from '../../marking/scheme';
@@ -18,6 +18,7 @@ import { DeskTools } from './desk-tools';
 import { ItemEnd } from './item-end';
 import { JustRead } from './just-read';
 import { KeysDialog, NoteDialog } from './desk-dialogs';
+import { keepFocusIn } from './keep-focus';
 import { ScanMat } from './scan-mat';
 import { saidText, useDeskWork } from './use-desk-work';
 import { words } from './words';
@@ -56,9 +57,9 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
   const canType = shown.kind === 'next' || shown.kind === 'later';
 
   const answerId = lease?.answerId;
-  useEffect(() => {
+  // Before it is painted: the next answer never stands for a moment as the last one was turned.
+  useLayoutEffect(() => {
     setPicture(view);
-    setText('');
     setCode(null);
     setOpen(null);
     field.current?.focus();
@@ -67,13 +68,22 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
   const say = (said: Said) => {
     if (!canType || isRecording.current) return;
     isRecording.current = true;
-    void work.record(note === '' ? said : { ...said, note }).finally(() => {
+    // The field is free at once: what is typed from here on belongs to the next answer.
+    setText('');
+    setNote('');
+    void work.record(note === '' ? said : { ...said, note }).then((isKept) => {
       isRecording.current = false;
-      setText('');
-      setNote('');
       field.current?.focus();
+      if (isKept) return;
+      setText(said.text ?? '');
+      setNote(note);
     });
   };
+  const look = (step: 1 | -1) => {
+    setText('');
+    work.look(step);
+  };
+  const takeBack = () => void work.takeBackLast().then((isBack) => isBack && setText(''));
   const sayCode = (chosen: Code) => {
     setOpen(null);
     if (text === '') say({ code: chosen });
@@ -100,14 +110,14 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
       S: () => sayCode('ask-the-lead'),
       W: () => (open === 'other' ? close() : setOpen('other')),
       ...(open === 'other' ? Object.fromEntries(rareCodes.map((rare, index) => [String(index + 1), () => setCode(rare)])) : {}),
-      U: () => void work.takeBackLast(),
+      U: takeBack,
       N: () => setOpen('note'),
       T: turn,
       Z: () => zoom(1.5),
       'Shift+Z': () => zoom(1 / 1.5),
       P: whole,
-      PageUp: () => work.look(1),
-      PageDown: () => work.look(-1),
+      PageUp: () => look(1),
+      PageDown: () => look(-1),
       '?': () => setOpen('keys'),
       Escape: () => {
         if (open !== null) close();
@@ -119,12 +129,13 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
     { isOff: open === 'note' || open === 'keys' },
   );
 
-  const readHere = work.done.filter(({ at }) => at > countedAt).length;
+  const unsent = new Set(work.justDone.waiting.map(({ id }) => id));
+  const readHere = work.done.filter(({ at, readingId }) => at > countedAt || unsent.has(readingId)).length;
   const last = work.done.at(-1);
   return (
-    <View style={{ flex: 1, minHeight: 0 }}>
+    <View {...(keepFocusIn(field) as object)} style={{ flex: 1, minHeight: 0 }}>
       <DeskHead sittingId={sittingId} course={course} title={title} item={item} items={items} readHere={readHere} />
-      <DeskStrips queue={work.justDone} onForget={work.forgetRefused} />
+      <DeskStrips queue={work.justDone} problem={work.problem} onForget={work.forgetRefused} onSendAgain={work.sendRefused} />
       <Text variant="micro" live="polite" style={{ position: 'absolute', width: 1, height: 1, overflow: 'hidden', opacity: 0 }} testID="desk-said">
         {work.message}
       </Text>
@@ -138,10 +149,10 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
                 <View style={{ minHeight: 168, gap: 12, padding: isWide ? 40 : 16, borderTopWidth: 1, borderColor: colors.hair }}>
                   <Text variant="head">{words.lookBack(lease.candidateNumber, saidText(shown.done.said))}</Text>
                   <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 10 }}>
-                    <Button keyCap="U" icon="takeBack" onPress={() => void work.takeBackLast()}>
+                    <Button keyCap="U" icon="takeBack" onPress={takeBack}>
                       {words.takeBack(lease.candidateNumber)}
                     </Button>
-                    <Button keyCap="Page Down" onPress={() => work.look(-1)}>
+                    <Button keyCap="Page Down" onPress={() => look(-1)}>
                       {words.lookOn}
                     </Button>
                   </View>
@@ -164,12 +175,12 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
               )}
             </>
           ) : (
-            <ItemEnd sittingId={sittingId} item={item} items={items} work={work} />
+            <ItemEnd sittingId={sittingId} item={item} items={items} left={item.toRead - readHere} work={work} />
           )}
         </View>
         {isWide ? (
           <View style={{ width: 250, padding: 18, borderLeftWidth: 1, borderColor: colors.hair }}>
-            <JustRead sittingId={sittingId} itemId={item.id} done={work.done} queue={work.justDone} onTakeBack={() => void work.takeBackLast()} />
+            <JustRead sittingId={sittingId} itemId={item.id} done={work.done} queue={work.justDone} onTakeBack={takeBack} />
           </View>
         ) : null}
       </View>
@@ -181,7 +192,7 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
             last
               ? () => {
                   setOpen(null);
-                  void work.takeBackLast();
+                  takeBack();
                 }
               : null
           }

@@ -2,15 +2,17 @@ import { View } from 'react-native';
 import type { QueueView } from '../../client/reading-queue';
 import { Button, ButtonLink } from '../../ui/button';
 import { Strip } from '../../ui/strip';
-import { words } from './words';
+import { codeWords, words } from './words';
 
 interface DeskStripsProps {
   readonly queue: QueueView;
+  readonly problem: string | null;
   readonly onForget: (id: string) => void;
+  readonly onSendAgain: (id: string) => void;
 }
 
 /** What the reader must know of readings still on the device: waiting for the connection, for a sign-in, or refused. */
-export function DeskStrips({ queue, onForget }: DeskStripsProps) {
+export function DeskStrips({ queue, problem, onForget, onSendAgain }: DeskStripsProps) {
   const { waiting, refused, isOffline, needsSignIn } = queue;
   return (
     <View>
@@ -30,17 +32,27 @@ export function DeskStrips({ queue, onForget }: DeskStripsProps) {
           {words.offline(waiting.length)}
         </Strip>
       ) : null}
-      {refused.map(({ id, candidateNumber, refusal }) => (
+      {problem === null ? null : (
+        <Strip kind="iodine" testID="desk-problem">
+          {problem}
+        </Strip>
+      )}
+      {refused.map(({ id, candidateNumber, text, code, refusal }) => (
         <Strip
           key={id}
           kind="methyl"
           action={
-            <Button isSmall onPress={() => onForget(id)}>
-              {words.refusedLook}
-            </Button>
+            <View style={{ flexDirection: 'row', gap: 8 }}>
+              <Button isSmall onPress={() => onSendAgain(id)}>
+                {words.sendAgain(candidateNumber)}
+              </Button>
+              <Button isSmall kind="danger" onPress={() => onForget(id)}>
+                {words.discard(candidateNumber)}
+              </Button>
+            </View>
           }
         >
-          {words.refused(candidateNumber, refusal ?? '')}
+          {words.refused(candidateNumber, code === undefined ? (text ?? '') : codeWords[code], refusal ?? '')}
         </Strip>
       ))}
     </View>

@@ -8,16 +8,18 @@ interface ItemEndProps {
   readonly sittingId: string;
   readonly item: DeskItem;
   readonly items: readonly DeskItem[];
+  /** Of this item, read by this reader not yet: then other readers hold them. */
+  readonly left: number;
   readonly work: DeskWork;
 }
 
 /** Where no answer stands to be read: fetching, failed, the item read, or nothing left. */
-export function ItemEnd({ sittingId, item, items, work }: ItemEndProps) {
+export function ItemEnd({ sittingId, item, items, left, work }: ItemEndProps) {
   const name = words.item(item.number, item.label);
   const next = [...items].sort((one, other) => other.toRead - one.toRead).find(({ id, toRead }) => id !== item.id && toRead > 0);
   if (work.error !== null) {
     return (
-      <Failed head={words.allRead} action={<Button onPress={work.fetchMore}>{words.lookAgain}</Button>}>
+      <Failed head={words.noAnswers} action={<Button onPress={work.fetchMore}>{words.lookAgain}</Button>}>
         {work.error}
       </Failed>
     );
@@ -27,7 +29,7 @@ export function ItemEnd({ sittingId, item, items, work }: ItemEndProps) {
     const nextName = words.item(next.number, next.label);
     return (
       <Empty
-        head={words.itemRead(name)}
+        head={left > 0 ? words.restElsewhere(name) : words.itemRead(name)}
         action={
           <ButtonLink kind="primary" href={`/desk/${sittingId}?item=${next.id}`} testID="next-item">
             {words.goToItem(nextName)}
@@ -40,7 +42,7 @@ export function ItemEnd({ sittingId, item, items, work }: ItemEndProps) {
   }
   return (
     <Empty head={words.allRead} action={<Button onPress={work.fetchMore}>{words.lookAgain}</Button>}>
-      {item.toRead > 0 ? words.heldByOthers : words.allReadText}
+      {left > 0 ? words.heldByOthers : words.allReadText}
     </Empty>
   );
 }

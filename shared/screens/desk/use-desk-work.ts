@@ -27,11 +27,16 @@ export interface DeskWork {
   readonly error: string | null;
   /** The last thing that happened, for the live region. */
   readonly message: string;
-  record(said: Said): Promise<void>;
-  takeBackLast(): Promise<void>;
+  /** What could not be done just now, in sight until the next act. */
+  readonly problem: string | null;
+  /** Whether the device has it; what it could not keep is still to be recorded. */
+  record(said: Said): Promise<boolean>;
+  /** Whether an answer came back. */
+  takeBackLast(): Promise<boolean>;
   look(step: 1 | -1): void;
   fetchMore(): void;
   forgetRefused(id: string): void;
+  sendRefused(id: string): void;
   tryAgain(): void;
 }
 
@@ -44,6 +49,7 @@ export function useDeskWork({ sittingId, itemId, personId }: DeskPlace): DeskWor
   const [isAtEnd, setAtEnd] = useState(false);
   const [error, setError] = useState<string | null>(null);
   const [message, setMessage] = useState('');
+  const [problem, setProblem] = useState<string | null>(null);
   const opened = useRef(new Map<string, number>());
   const isBusy = useRef(false);
   const isEndOpen = useRef(false);
@@ -92,40 +98,50 @@ export function useDeskWork({ sittingId, itemId, personId }: DeskPlace): DeskWor
     // The server answers again, so what could not be fetched is asked for once more.
     setError(null);
     if (isEndOpen.current) setAtEnd(false);
-    if (recorded > 0 && recorded % 10 === 0) void client.invalidateQueries({ queryKey: standingQueryOptions(sittingId).queryKey });
+    if (recorded > 0 && (isAtEnd || recorded % 10 === 0)) void client.invalidateQueries({ queryKey: standingQueryOptions(sittingId).queryKey });
     // eslint-disable-next-line react-hooks/exhaustive-deps -- said once for each reading the server took
   }, [recorded]);
   useEffect(() => {
     if (isAtEnd) void client.invalidateQueries({ queryKey: standingQueryOptions(sittingId).queryKey });
   }, [client, isAtEnd, sittingId]);
 
-  const record = async (said: Said): Promise<void> => {
-    if (shown.kind !== 'next' && shown.kind !== 'later') return;
+  const record = async (said: Said): Promise<boolean> => {
+    if (shown.kind !== 'next' && shown.kind !== 'later') return false;
     const { lease } = shown;
     const id = uuidv7();
     const at = Date.now();
-    await queue.keep({ id, sittingId, itemId, answerId: lease.answerId, leaseId: lease.id, candidateNumber: lease.candidateNumber, openedAt: opened.current.get(lease.answerId) ?? at, keptAt: at, ...said });
+    try {
+      await queue.keep({ id, sittingId, itemId, answerId: lease.answerId, leaseId: lease.id, candidateNumber: lease.candidateNumber, openedAt: opened.current.get(lease.answerId) ?? at, keptAt: at, ...said });
+    } catch {
+      setProblem(words.notKept);
+      return false;
+    }
+    setProblem(null);
     setWork((before) => withReading(before, { readingId: id, lease, said, at }));
+    return true;
   };
 
-  const takeBackLast = async (): Promise<void> => {
-    const onLook = shown.kind === 'done' ? shown.done : work.done.at(-1);
-    const recent = onLook ? undefined : (await client.fetchQuery(recentQueryOptions(sittingId, itemId))).readings[0];
-    const [readingId, number] = onLook ? [onLook.readingId, onLook.lease.candidateNumber] : recent ? [recent.id, recent.candidateNumber] : [null, ''];
-    if (readingId === null) return;
-    if (queue.snapshot().waiting.some(({ id }) => id === readingId)) {
-      setMessage(words.notYetSent);
-      return;
-    }
+  const takeBackLast = async (): Promise<boolean> => {
     try {
+      const onLook = shown.kind === 'done' ? shown.done : work.done.at(-1);
+      const recent = onLook ? undefined : (await client.fetchQuery(recentQueryOptions(sittingId, itemId))).readings[0];
+      const [readingId, number] = onLook ? [onLook.readingId, onLook.lease.candidateNumber] : recent ? [recent.id, recent.candidateNumber] : [null, ''];
+      if (readingId === null) return false;
+      if (queue.snapshot().waiting.some(({ id }) => id === readingId)) {
+        setProblem(words.notYetSent);
+        return false;
+      }
       const { lease } = await takeBack(readingId);
       if (lease) warmPictures([lease]);
       setWork((before) => withTakenBack(before, readingId, lease));
       setAtEnd(false);
-      setMessage(lease ? words.taken(number) : words.takenElsewhere(number));
+      setMessage(lease ? words.taken(number) : '');
+      setProblem(lease ? null : words.takenElsewhere(number));
       void client.invalidateQueries({ queryKey: recentQueryOptions(sittingId, itemId).queryKey });
-    } catch (problem) {
-      setMessage(problem instanceof Error ? problem.message : String(problem));
+      return lease !== null;
+    } catch (refusal) {
+      setProblem(refusal instanceof Error ? refusal.message : String(refusal));
+      return false;
     }
   };
 
@@ -137,6 +153,7 @@ export function useDeskWork({ sittingId, itemId, personId }: DeskPlace): DeskWor
     isFetching,
     error,
     message,
+    problem,
     record,
     takeBackLast,
     look: (step) => setWork((before) => looking(before, step)),
@@ -146,6 +163,7 @@ export function useDeskWork({ sittingId, itemId, personId }: DeskPlace): DeskWor
       fetchMore();
     },
     forgetRefused: (id) => void queue.forget(id),
+    sendRefused: (id) => void queue.sendAgain(id),
     tryAgain: () => queue.tryAgain(),
   };
 }
