@@ -120,16 +120,16 @@ export function DeskFoot(props: DeskFootProps) {
   }
   return (
     <View>
-      <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 32, paddingHorizontal: 40, paddingVertical: 14, minHeight: 168, borderTopWidth: 1, borderColor: colors.hair, backgroundColor: colors.paper }}>
-        <View style={{ flex: 1.1, minWidth: 260 }}>{field}</View>
-        <View style={{ flex: 1, minWidth: 220, paddingTop: 22 }}>
+      <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 28, paddingHorizontal: 40, paddingVertical: 14, minHeight: 168, borderTopWidth: 1, borderColor: colors.hair, backgroundColor: colors.paper }}>
+        <View style={{ flex: 1, minWidth: 240 }}>{field}</View>
+        <View style={{ flex: 1, minWidth: 200, paddingTop: 22 }}>
           {props.isChoosingCode ? <CodeChoice chosen={props.chosenCode} onChoose={props.onChooseCode} onRecord={onRecord} onCancel={props.onCancelOther} /> : <Line text={text} units={item.units} note={note} />}
         </View>
-        <View style={{ flex: 1.05, minWidth: 300, gap: 8, paddingTop: 18 }}>
+        <View style={{ width: 376, gap: 8, paddingTop: 18 }}>
           <Button kind="primary" isWide keyCap="Enter" align="between" onPress={onRecord} closed={canRecord ? undefined : ''} testID="record">
             {words.record}
           </Button>
-          <View style={{ flexDirection: 'row', gap: 8 }}>
+          <View style={{ flexDirection: 'row', justifyContent: 'space-between', gap: 8 }}>
             <Button keyCap="B" onPress={() => onCode('blank')} closed={isEmpty ? undefined : ''} testID="code-blank">
               {words.blank}
             </Button>

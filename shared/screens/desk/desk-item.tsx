@@ -15,7 +15,7 @@ import { DeskFoot } from './desk-foot';
 import { DeskHead } from './desk-head';
 import { DeskStrips } from './desk-strips';
 import { DeskTools } from './desk-tools';
-import { ItemEnd } from './item-end';
+import { isOver, ItemEnd, nextItem } from './item-end';
 import { JustRead } from './just-read';
 import { KeysDialog, NoteDialog } from './desk-dialogs';
 import { keepFocusIn } from './keep-focus';
@@ -49,6 +49,7 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
   const [note, setNote] = useState('');
   const [picture, setPicture] = useState(view);
   const [open, setOpen] = useState<Open>(null);
+  const [isUnkept, setUnkept] = useState(false);
   const [code, setCode] = useState<Code | null>(null);
   const field = useRef<TextInput>(null);
   const isRecording = useRef(false);
@@ -68,22 +69,22 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
   const say = (said: Said) => {
     if (!canType || isRecording.current) return;
     isRecording.current = true;
-    // The field is free at once: what is typed from here on belongs to the next answer.
     setText('');
     setNote('');
-    void work.record(note === '' ? said : { ...said, note }).then((isKept) => {
-      isRecording.current = false;
-      field.current?.focus();
-      if (isKept) return;
-      setText(said.text ?? '');
-      setNote(note);
-    });
+    setUnkept(false);
+    work
+      .record(note === '' ? said : { ...said, note })
+      .catch(() => {
+        // The device would not keep it: what was typed is there again.
+        setText((typed) => (typed === '' ? (said.text ?? '') : typed));
+        setNote(note);
+        setUnkept(true);
+      })
+      .finally(() => {
+        isRecording.current = false;
+        field.current?.focus();
+      });
   };
-  const look = (step: 1 | -1) => {
-    setText('');
-    work.look(step);
-  };
-  const takeBack = () => void work.takeBackLast().then((isBack) => isBack && setText(''));
   const sayCode = (chosen: Code) => {
     setOpen(null);
     if (text === '') say({ code: chosen });
@@ -104,7 +105,11 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
 
   useKeys(
     {
-      Enter: record,
+      Enter: ({ repeat }) => {
+        const next = isOver(work) ? nextItem(items, item.id) : undefined;
+        if (next && !repeat) router.push(`/desk/${sittingId}?item=${next.id}`);
+        else record();
+      },
       B: () => sayCode('blank'),
       X: () => sayCode('cannot-read'),
       S: () => sayCode('ask-the-lead'),
@@ -129,13 +134,14 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
     { isOff: open === 'note' || open === 'keys' },
   );
 
+  const refused = new Set(work.justDone.refused.map(({ id }) => id));
   const unsent = new Set(work.justDone.waiting.map(({ id }) => id));
-  const readHere = work.done.filter(({ at, readingId }) => at > countedAt || unsent.has(readingId)).length;
-  const last = work.done.at(-1);
+  const readHere = work.done.filter(({ at, readingId }) => !refused.has(readingId) && (at > countedAt || unsent.has(readingId))).length;
+  const last = work.done.filter(({ readingId }) => !refused.has(readingId)).at(-1);
   return (
     <View {...(keepFocusIn(field) as object)} style={{ flex: 1, minHeight: 0 }}>
       <DeskHead sittingId={sittingId} course={course} title={title} item={item} items={items} readHere={readHere} />
-      <DeskStrips queue={work.justDone} problem={work.problem} onForget={work.forgetRefused} onSendAgain={work.sendRefused} />
+      <DeskStrips queue={work.justDone} problem={work.problem} onSignIn={work.signIn} onForget={work.forgetRefused} onSendAgain={work.sendRefused} />
       <Text variant="micro" live="polite" style={{ position: 'absolute', width: 1, height: 1, overflow: 'hidden', opacity: 0 }} testID="desk-said">
         {work.message}
       </Text>

@@ -1,3 +1,4 @@
+import { Redirect } from 'expo-router';
 import { useState } from 'react';
 import { useStanding } from '../../client/desk';
 import { useMe } from '../../client/session';
@@ -47,5 +48,7 @@ function Desk({ standing, countedAt, itemId }: DeskProps) {
       </Empty>
     );
   }
+  // In the address, so that looking at the page anew stays with the item.
+  if (item.id !== itemId) return <Redirect href={`/desk/${sittingId}?item=${item.id}`} />;
   return <DeskItemWork sittingId={sittingId} course={courseCode} title={title} personId={me.id} item={item} items={items} countedAt={countedAt} />;
 }

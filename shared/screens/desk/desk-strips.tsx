@@ -1,28 +1,32 @@
 import { View } from 'react-native';
 import type { QueueView } from '../../client/reading-queue';
-import { Button, ButtonLink } from '../../ui/button';
+import { Button } from '../../ui/button';
 import { Strip } from '../../ui/strip';
 import { codeWords, words } from './words';
 
 interface DeskStripsProps {
   readonly queue: QueueView;
   readonly problem: string | null;
+  readonly onSignIn: () => void;
   readonly onForget: (id: string) => void;
+  /** The device refused to keep the last one. */
+  readonly isUnkept: boolean;
   readonly onSendAgain: (id: string) => void;
 }
 
 /** What the reader must know of readings still on the device: waiting for the connection, for a sign-in, or refused. */
-export function DeskStrips({ queue, problem, onForget, onSendAgain }: DeskStripsProps) {
+export function DeskStrips({ queue, problem, onSignIn, onForget, onSendAgain }: DeskStripsProps) {
   const { waiting, refused, isOffline, needsSignIn } = queue;
   return (
     <View>
+      {isUnkept ? <Strip kind="methyl">{words.unkept}</Strip> : null}
       {needsSignIn ? (
         <Strip
           kind="iodine"
           action={
-            <ButtonLink isSmall href="/sign-in">
+            <Button isSmall onPress={onSignIn}>
               {words.signInAgain}
-            </ButtonLink>
+            </Button>
           }
         >
           {words.signIn(waiting.length)}

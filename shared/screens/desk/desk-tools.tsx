@@ -23,7 +23,7 @@ export function DeskTools({ lease, isWhole, zoom, onTurn, onCloser, onFarther, o
   const isWide = useIsWide();
   return (
     <View style={{ minHeight: 48, flexDirection: 'row', alignItems: 'center', gap: isWide ? 12 : 4, paddingLeft: isWide ? 40 : 16, paddingRight: isWide ? 28 : 8, backgroundColor: colors.mat }}>
-      <Text variant="reading" weight={600}>
+      <Text variant="reading" weight={600} testID="desk-candidate">
         {lease.candidateNumber}
       </Text>
       <Text variant="small" style={{ flex: 1 }}>

@@ -23,6 +23,7 @@ const rows = 8;
 export function JustRead({ sittingId, itemId, done, queue, onTakeBack }: JustReadProps) {
   const colors = useColors();
   const recent = useRecent(sittingId, itemId);
+  const refused = new Set(queue.refused.map(({ id }) => id));
   const unsent = new Set(queue.waiting.map(({ id }) => id));
   const here = [...done].reverse().map(({ readingId, lease, said, at }) => ({ id: readingId, number: lease.candidateNumber, said, at }));
   const ids = new Set(here.map(({ id }) => id));
@@ -30,13 +31,13 @@ export function JustRead({ sittingId, itemId, done, queue, onTakeBack }: JustRea
     .filter(({ id }) => !ids.has(id))
     .map(({ id, candidateNumber, text, code, recordedAt }) => ({ id, number: candidateNumber, said: { ...(text === null ? {} : { text }), ...(code === null ? {} : { code }) }, at: recordedAt }));
   const list = [...here, ...before].slice(0, rows);
-  const [last] = list;
+  const last = list.find(({ id }) => !refused.has(id));
   return (
     <View style={{ gap: 10 }}>
       <Text variant="head" level={2}>
         {words.justRead}
       </Text>
-      {last === undefined ? (
+      {list.length === 0 ? (
         <Text variant="small" tone="ink2">
           {words.justReadNone}
         </Text>
@@ -51,7 +52,7 @@ export function JustRead({ sittingId, itemId, done, queue, onTakeBack }: JustRea
                 {saidText(said)}
               </Text>
               <Text variant="label" weight={400} tone="ink2" align="right" style={{ width: 46 }}>
-                {unsent.has(id) ? words.waiting : clockTime(at)}
+                {refused.has(id) ? words.notStored : unsent.has(id) ? words.waiting : clockTime(at)}
               </Text>
             </View>
           ))}

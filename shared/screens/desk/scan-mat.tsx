@@ -17,6 +17,8 @@ interface ScanMatProps {
 }
 
 const gap = 16;
+/** The answer is what is read; the working helps. */
+const answerShare = 0.56;
 
 type Crop = DeskLease['crops'][number];
 
@@ -31,9 +33,12 @@ export function ScanMat({ lease, turns, zoom }: ScanMatProps) {
   const answers = lease.crops.filter(({ use }) => use === 'answer');
   const inner = { width: Math.max(1, room.width - (isWide ? 64 : 0)), height: Math.max(1, room.height - (isWide ? 40 : 0)) };
   const shown = isWide ? [...workings, ...answers] : [...answers, ...workings];
-  const beside = fitBeside(shown.map((crop) => turned(crop, turns)), inner, gap);
   const scaleOf = (crop: Crop): number => {
-    if (isWide) return beside * zoom;
+    if (isWide) {
+      const mine = shown.filter(({ use }) => use === crop.use);
+      const share = shown.length === mine.length ? 1 : crop.use === 'answer' ? answerShare : 1 - answerShare;
+      return fitBeside(mine.map((one) => turned(one, turns)), { width: (inner.width - gap) * share, height: inner.height }, gap) * zoom;
+    }
     const share = workings.length === 0 ? 1 : 0.5;
     return fitAlone(turned(crop, turns), { width: inner.width, height: (inner.height - 6) * share }) * zoom;
   };

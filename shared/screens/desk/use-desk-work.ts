@@ -1,9 +1,10 @@
 import { useQueryClient } from '@tanstack/react-query';
 import { useCallback, useEffect, useRef, useState } from 'react';
 import { v7 as uuidv7 } from 'uuid';
-import { fetchLeases, recentQueryOptions, standingQueryOptions, takeBack, useReadingQueue, warmPictures } from '../../client/desk';
+import { fetchLeases, giveBack, recentQueryOptions, standingQueryOptions, takeBack, useReadingQueue, warmPictures } from '../../client/desk';
+import { meQueryOptions } from '../../client/session';
 import { codeWords, words } from './words';
-import { emptyWork, looking, onView, withLeases, withReading, withTakenBack, type OnView, type Said } from './work-list';
+import { emptyWork, looking, onView, withLeases, withReading, withoutReading, withTakenBack, type OnView, type Said } from './work-list';
 
 /** Answers held ahead, so that the next is there at once. */
 const ahead = 5;
@@ -37,7 +38,8 @@ export interface DeskWork {
   fetchMore(): void;
   forgetRefused(id: string): void;
   sendRefused(id: string): void;
-  tryAgain(): void;
+  /** To the sign-in, where the session has run out; what is kept goes afterwards. */
+  signIn(): void;
 }
 
 /** The work of one item at the desk: leases ahead, readings into the queue, looking back, taking back. */
@@ -91,6 +93,13 @@ export function useDeskWork({ sittingId, itemId, personId }: DeskPlace): DeskWor
     if (shown.kind === 'next' && !opened.current.has(shown.lease.answerId)) opened.current.set(shown.lease.answerId, Date.now());
   });
 
+  const held = useRef(work.held);
+  useEffect(() => {
+    held.current = work.held;
+  });
+  // Who leaves the item does not keep its answers from others.
+  useEffect(() => () => held.current.forEach(({ id }) => giveBack(id)), []);
+
   const { recorded, recordedIds } = view;
   useEffect(() => {
     const last = work.done.find(({ readingId }) => readingId === recordedIds.at(-1));
@@ -123,7 +132,8 @@ export function useDeskWork({ sittingId, itemId, personId }: DeskPlace): DeskWor
 
   const takeBackLast = async (): Promise<boolean> => {
     try {
-      const onLook = shown.kind === 'done' ? shown.done : work.done.at(-1);
+      const refused = new Set(queue.snapshot().refused.map(({ id }) => id));
+      const onLook = shown.kind === 'done' ? shown.done : work.done.filter(({ readingId }) => !refused.has(readingId)).at(-1);
       const recent = onLook ? undefined : (await client.fetchQuery(recentQueryOptions(sittingId, itemId))).readings[0];
       const [readingId, number] = onLook ? [onLook.readingId, onLook.lease.candidateNumber] : recent ? [recent.id, recent.candidateNumber] : [null, ''];
       if (readingId === null) return false;
@@ -162,9 +172,16 @@ export function useDeskWork({ sittingId, itemId, personId }: DeskPlace): DeskWor
       setError(null);
       fetchMore();
     },
-    forgetRefused: (id) => void queue.forget(id),
+    forgetRefused: (id) => {
+      setWork((before) => withoutReading(before, id));
+      setAtEnd(false);
+      void queue.forget(id);
+    },
     sendRefused: (id) => void queue.sendAgain(id),
-    tryAgain: () => queue.tryAgain(),
+    signIn: () => {
+      queue.tryAgain();
+      void client.invalidateQueries({ queryKey: meQueryOptions().queryKey });
+    },
   };
 }
 

@@ -42,6 +42,9 @@ export function withReading(work: WorkList, done: DoneAnswer): WorkList {
   return { held: work.held.filter(({ answerId }) => answerId !== done.lease.answerId), done: [...work.done, done].slice(-remembered), back: 0 };
 }
 
+/** Takes a reading the server refused off what is read: its answer may come again. */
+export const withoutReading = (work: WorkList, readingId: string): WorkList => ({ ...work, done: work.done.filter((done) => done.readingId !== readingId), back: 0 });
+
 /** Puts an answer that was taken back first in line; one that went to somebody else only leaves the list. */
 export function withTakenBack(work: WorkList, readingId: string, lease: DeskLease | null): WorkList {
   const rest = lease === null ? work.held : [lease, ...work.held.filter(({ answerId }) => answerId !== lease.answerId)];

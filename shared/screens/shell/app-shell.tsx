@@ -1,7 +1,8 @@
 import { QueryClientProvider } from '@tanstack/react-query';
 import { Redirect, usePathname, useRouter } from 'expo-router';
-import { useState, type ReactNode } from 'react';
+import { useEffect, useState, type ReactNode } from 'react';
 import { View } from 'react-native';
+import { sendReadingsOf } from '../../client/desk';
 import { createQueryClient } from '../../client/query-client';
 import { useMe } from '../../client/session';
 import { adoptGlobalStyle } from '../../ui/global-style';
@@ -40,6 +41,10 @@ function Ground({ children }: { children: ReactNode }) {
 function Door({ children }: { children: ReactNode }) {
   const me = useMe();
   const isAtDoor = usePathname() === '/sign-in';
+  const who = me.data === undefined ? undefined : (me.data?.id ?? null);
+  useEffect(() => {
+    if (who !== undefined) sendReadingsOf(who);
+  }, [who]);
   return (
     <QueryState query={me} fetching="Looking whether you are signed in" failed="The server does not answer.">
       {(person) => {

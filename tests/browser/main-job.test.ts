@@ -1,0 +1,51 @@
+import { mkdtempSync, readdirSync, rmSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import type { Page } from 'playwright-core';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { openPage, startBrowserBench, type BrowserBench } from '../support/browser';
+import { buildDemoSitting, drawDemoPages } from '../support/demo-sitting';
+import { readWithKeys, readWithPad } from '../support/read-at-desk';
+import { itemsRead, writtenPaper } from '../support/written-paper';
+import type { BuiltPaper } from '../support/paper';
+
+/** Sends every file of a folder through the tray, as a person does. */
+async function upload(page: Page, address: string, sittingId: string, folder: string, pages: number): Promise<void> {
+  await page.goto(`${address}/sittings/${sittingId}/scans`);
+  const chooser = page.waitForEvent('filechooser');
+  await page.getByTestId('add-scans').click();
+  await (await chooser).setFiles(readdirSync(folder).map((name) => join(folder, name)));
+  await page.getByTestId('send-files').click();
+  await page.getByText(`${pages} pages, all with a script`).waitFor({ timeout: 60_000 });
+}
+
+for (const viewport of ['wide', 'phone'] as const) {
+  describe(`the main job, ${viewport}`, () => {
+    const paper = writtenPaper();
+    let bench: BrowserBench;
+    let folder: string;
+    let built: BuiltPaper;
+    beforeAll(async () => {
+      folder = mkdtempSync(join(tmpdir(), 'meniscus-pages-'));
+      [bench] = await Promise.all([startBrowserBench(), drawDemoPages(folder, paper.truth, itemsRead)]);
+      built = buildDemoSitting(bench.server, paper.truth.map(({ candidate }) => candidate), itemsRead);
+    });
+    afterAll(async () => {
+      await bench.close();
+      rmSync(folder, { recursive: true, force: true });
+    });
+
+    it('a reader uploads the batch and reads all answers, one of each code among them', async () => {
+      const { page, context, complaints } = await openPage(bench, 'readerOne', viewport);
+      await upload(page, bench.address, built.sittingId, folder, paper.truth.length);
+      await page.goto(`${bench.address}/desk/${built.sittingId}`);
+      page.setDefaultTimeout(15_000);
+      const read = await (viewport === 'wide' ? readWithKeys : readWithPad)(page, paper, 24);
+      expect(read).toBe(24);
+      const recorded = bench.server.context.db.$client.prepare('select count(*) from reading').pluck().get();
+      expect(recorded).toBe(24);
+      expect(complaints).toEqual([]);
+      await context.close();
+    });
+  });
+}
