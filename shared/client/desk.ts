@@ -1,6 +1,6 @@
 import { queryOptions, useQuery } from '@tanstack/react-query';
 import { createStore, del, entries, set, type UseStore } from 'idb-keyval';
-import { useEffect, useSyncExternalStore } from 'react';
+import { useSyncExternalStore } from 'react';
 import type { DeskLease, getDeskStanding, getRecentReadings, takeBackReading, takeLeases } from '../contracts/desk';
 import type { ResponseOf } from '../contracts/route';
 import { api } from './api';
@@ -26,6 +26,9 @@ export const fetchLeases = async (itemId: string, count: number): Promise<DeskLe
   (await api<ResponseOf<typeof takeLeases>>('/desk/leases', { method: 'POST', body: { itemId, count } })).leases;
 
 export const takeBack = (readingId: string) => api<ResponseOf<typeof takeBackReading>>(`/readings/${readingId}/take-back`, { method: 'POST' });
+
+/** Gives an answer back unread; where that does not get through, the lease runs out by itself. */
+export const giveBack = (leaseId: string): void => void api(`/desk/leases/${leaseId}`, { method: 'DELETE' }).catch(() => undefined);
 
 const warmed = new Set<string>();
 
@@ -92,12 +95,17 @@ export function queueOf(personId: string): ReadingQueue {
   return queue;
 }
 
+/** Sends what this person has left on the device, from whatever screen; what others have left waits for them. */
+export function sendReadingsOf(personId: string | null): void {
+  for (const [owner, queue] of queues) if (owner !== personId) queue.pause();
+  if (personId === null) return;
+  const queue = queueOf(personId);
+  queue.tryAgain();
+  void queue.resume();
+}
+
 export function useReadingQueue(personId: string): { readonly queue: ReadingQueue; readonly view: QueueView } {
   const queue = queueOf(personId);
   const view = useSyncExternalStore(queue.subscribe, queue.snapshot, queue.snapshot);
-  useEffect(() => {
-    queue.tryAgain();
-    void queue.resume();
-  }, [queue]);
   return { queue, view };
 }

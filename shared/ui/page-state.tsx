@@ -41,7 +41,7 @@ function Graduations() {
 }
 
 interface StateProps {
-  readonly head: string;
+  readonly head: ReactNode;
   readonly children: ReactNode;
   /** One way on. */
   readonly action?: ReactNode;
