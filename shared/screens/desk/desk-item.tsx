@@ -49,7 +49,6 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
   const [note, setNote] = useState('');
   const [picture, setPicture] = useState(view);
   const [open, setOpen] = useState<Open>(null);
-  const [isUnkept, setUnkept] = useState(false);
   const [code, setCode] = useState<Code | null>(null);
   const field = useRef<TextInput>(null);
   const isRecording = useRef(false);
@@ -69,22 +68,22 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
   const say = (said: Said) => {
     if (!canType || isRecording.current) return;
     isRecording.current = true;
+    // The field is free at once: what is typed from here on belongs to the next answer.
     setText('');
     setNote('');
-    setUnkept(false);
-    work
-      .record(note === '' ? said : { ...said, note })
-      .catch(() => {
-        // The device would not keep it: what was typed is there again.
-        setText((typed) => (typed === '' ? (said.text ?? '') : typed));
-        setNote(note);
-        setUnkept(true);
-      })
-      .finally(() => {
-        isRecording.current = false;
-        field.current?.focus();
-      });
+    void work.record(note === '' ? said : { ...said, note }).then((isKept) => {
+      isRecording.current = false;
+      field.current?.focus();
+      if (isKept) return;
+      setText(said.text ?? '');
+      setNote(note);
+    });
   };
+  const look = (step: 1 | -1) => {
+    setText('');
+    work.look(step);
+  };
+  const takeBack = () => void work.takeBackLast().then((isBack) => isBack && setText(''));
   const sayCode = (chosen: Code) => {
     setOpen(null);
     if (text === '') say({ code: chosen });

@@ -9,8 +9,6 @@ interface DeskStripsProps {
   readonly problem: string | null;
   readonly onSignIn: () => void;
   readonly onForget: (id: string) => void;
-  /** The device refused to keep the last one. */
-  readonly isUnkept: boolean;
   readonly onSendAgain: (id: string) => void;
 }
 
@@ -19,7 +17,6 @@ export function DeskStrips({ queue, problem, onSignIn, onForget, onSendAgain }: 
   const { waiting, refused, isOffline, needsSignIn } = queue;
   return (
     <View>
-      {isUnkept ? <Strip kind="methyl">{words.unkept}</Strip> : null}
       {needsSignIn ? (
         <Strip
           kind="iodine"

@@ -61,7 +61,6 @@ export const words = {
   offline: (n: number) => `No connection. ${s(n, 'reading')} ${n === 1 ? 'is' : 'are'} kept on this device and ${n === 1 ? 'goes' : 'go'} when it returns.`,
   signIn: (n: number) => `You are signed out. ${s(n, 'reading')} ${n === 1 ? 'is' : 'are'} kept on this device until you sign in again.`,
   signInAgain: 'Sign in',
-  unkept: 'This device could not keep the reading. Free some space in it, then record again: what you typed is still here.',
   refused: (number: string, said: string, why: string) => `${number}, ${said}: ${why}`,
   sendAgain: (number: string) => `Send ${number} again`,
   discard: (number: string) => `Discard ${number}`,
