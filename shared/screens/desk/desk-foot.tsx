@@ -10,8 +10,10 @@ import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
 import { usePreference } from '../../ui/preferences';
 import { useIsWide } from '../../ui/use-breakpoint';
+import { useKeys } from '../../ui/use-keys';
 import { Vessel } from '../../ui/vessel';
 import { CodeChoice } from './code-choice';
+import { withNextUnit } from './unit-key';
 import { words } from './words';
 
 export interface DeskFootProps {
@@ -77,6 +79,8 @@ export function DeskFoot(props: DeskFootProps) {
   const isWide = useIsWide();
   const [side] = usePreference('actions');
   const isEmpty = text === '';
+  const putUnit = () => onText(withNextUnit(text, item.units));
+  useKeys(item.units.length === 0 ? {} : { ArrowUp: putUnit });
   const canRecord = understood(text, item.units).kind === 'value';
   const aside = item.units.length === 0 ? words.noUnit : words.unit(item.units);
   const field = (
@@ -120,8 +124,17 @@ export function DeskFoot(props: DeskFootProps) {
   }
   return (
     <View>
-      <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 28, paddingHorizontal: 40, paddingVertical: 14, minHeight: 168, borderTopWidth: 1, borderColor: colors.hair, backgroundColor: colors.paper }}>
-        <View style={{ flex: 1, minWidth: 240 }}>{field}</View>
+      <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 28, paddingHorizontal: 40, paddingVertical: 14, minHeight: 220, borderTopWidth: 1, borderColor: colors.hair, backgroundColor: colors.paper }}>
+        <View style={{ flex: 1, minWidth: 240, gap: 8 }}>
+          {field}
+          {item.units.length === 0 ? null : (
+            <View style={{ flexDirection: 'row' }}>
+              <Button kind="text" isSmall keyCap="↑" onPress={putUnit} closed={isEmpty ? '' : undefined} testID="put-unit">
+                {words.putUnit(item.units)}
+              </Button>
+            </View>
+          )}
+        </View>
         <View style={{ flex: 1, minWidth: 200, paddingTop: 22 }}>
           {props.isChoosingCode ? <CodeChoice chosen={props.chosenCode} onChoose={props.onChooseCode} onRecord={onRecord} onCancel={props.onCancelOther} /> : <Line text={text} units={item.units} note={note} />}
         </View>

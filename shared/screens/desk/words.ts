@@ -18,6 +18,7 @@ export const words = {
   reading: 'Reading',
   noUnit: 'no unit',
   unit: (units: readonly string[]) => units.join(', '),
+  putUnit: (units: readonly string[]) => (units.length === 1 ? `Unit ${units[0]}` : 'Next unit'),
   progress: (of: number) => `of ${of.toLocaleString('en-GB')}`,
   progressLabel: 'readings of this item',
   page: (pageNo: number, of: number) => `page ${pageNo} of ${of}`,
@@ -89,6 +90,7 @@ export const keyGroups = [
     head: 'Reading',
     hints: [
       { keys: ['0–9', '.', ',', '−', '/', 'e'], does: 'typed as they are' },
+      { keys: ['↑'], does: 'the unit, where the item has one; again for the next' },
       { keys: ['Enter'], does: 'record and next' },
       { keys: ['Esc'], does: 'empty the field, then leave' },
       { keys: ['U'], does: 'take back the last reading' },
