@@ -54,7 +54,7 @@ export function KeyList({ groups }: { groups: readonly { readonly head: string; 
           </Text>
           {hints.map(({ keys, does }) => (
             <View key={does} style={{ minHeight: 36, flexDirection: 'row', alignItems: 'center', gap: 12, borderBottomWidth: 1, borderColor: colors.hair }}>
-              <Text variant="readingS" style={{ width: 150 }}>
+              <Text variant="readingS" style={{ width: 190 }}>
                 {keys.join('  ')}
               </Text>
               <Text variant="small" style={{ flex: 1 }}>

@@ -1,5 +1,5 @@
 import type { Ref } from 'react';
-import { View, type TextInput } from 'react-native';
+import { useWindowDimensions, View, type TextInput } from 'react-native';
 import type { DeskItem } from '../../contracts/desk';
 import type { Code } from '../../marking/scheme';
 import { understood } from '../../marking/understood';
@@ -72,11 +72,50 @@ function Line({ text, units, note }: { text: string; units: readonly string[]; n
   );
 }
 
+/** From here on there is room for the larger buttons beside the field. */
+const roomy = 1280;
+const actsWidth = { roomy: 376, narrow: 320 } as const;
+
+interface ActsProps extends Pick<DeskFootProps, 'onRecord' | 'onCode' | 'onOther'> {
+  readonly canRecord: boolean;
+  readonly isEmpty: boolean;
+}
+
+/** The acts with their keys, on wide. */
+function Acts({ canRecord, isEmpty, onRecord, onCode, onOther }: ActsProps) {
+  const isSmall = useWindowDimensions().width < roomy;
+  const closed = isEmpty ? undefined : '';
+  return (
+    <View style={{ width: isSmall ? actsWidth.narrow : actsWidth.roomy, gap: 8, paddingTop: 18 }}>
+      <Button kind="primary" isWide keyCap="Enter" align="between" onPress={onRecord} closed={canRecord ? undefined : ''} testID="record">
+        {words.record}
+      </Button>
+      <View style={{ flexDirection: 'row', justifyContent: 'space-between', gap: 8 }}>
+        <Button isSmall={isSmall} keyCap="B" onPress={() => onCode('blank')} closed={closed} testID="code-blank">
+          {words.blank}
+        </Button>
+        <Button isSmall={isSmall} keyCap="X" onPress={() => onCode('cannot-read')} closed={closed} testID="code-cannot-read">
+          {words.cannotRead}
+        </Button>
+        <Button isSmall={isSmall} keyCap="W" onPress={onOther} closed={closed} testID="other">
+          {words.other}
+        </Button>
+      </View>
+      <View style={{ alignItems: 'flex-start' }}>
+        <Button kind="text" isSmall keyCap="S" onPress={() => onCode('ask-the-lead')} closed={closed} testID="code-ask-the-lead">
+          {words.askLead}
+        </Button>
+      </View>
+    </View>
+  );
+}
+
 /** The lower half of the desk: field, what was understood, and the acts; on a phone the pad. */
 export function DeskFoot(props: DeskFootProps) {
   const { item, text, onText, fieldRef, note, onRecord, onCode } = props;
   const colors = useColors();
   const isWide = useIsWide();
+  const isRoomy = useWindowDimensions().width >= roomy;
   const [side] = usePreference('actions');
   const isEmpty = text === '';
   const putUnit = () => onText(withNextUnit(text, item.units));
@@ -124,8 +163,8 @@ export function DeskFoot(props: DeskFootProps) {
   }
   return (
     <View>
-      <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 28, paddingHorizontal: 40, paddingVertical: 14, minHeight: 220, borderTopWidth: 1, borderColor: colors.hair, backgroundColor: colors.paper }}>
-        <View style={{ flex: 1, minWidth: 240, gap: 8 }}>
+      <View style={{ flexDirection: 'row', gap: isRoomy ? 28 : 20, paddingHorizontal: isRoomy ? 40 : 24, paddingVertical: 14, minHeight: isRoomy ? 196 : 216, borderTopWidth: 1, borderColor: colors.hair, backgroundColor: colors.paper }}>
+        <View style={{ flex: 1, minWidth: 0, gap: 8 }}>
           {field}
           {item.units.length === 0 ? null : (
             <View style={{ flexDirection: 'row' }}>
@@ -135,30 +174,19 @@ export function DeskFoot(props: DeskFootProps) {
             </View>
           )}
         </View>
-        <View style={{ flex: 1, minWidth: 200, paddingTop: 22 }}>
-          {props.isChoosingCode ? <CodeChoice chosen={props.chosenCode} onChoose={props.onChooseCode} onRecord={onRecord} onCancel={props.onCancelOther} /> : <Line text={text} units={item.units} note={note} />}
-        </View>
-        <View style={{ width: 376, gap: 8, paddingTop: 18 }}>
-          <Button kind="primary" isWide keyCap="Enter" align="between" onPress={onRecord} closed={canRecord ? undefined : ''} testID="record">
-            {words.record}
-          </Button>
-          <View style={{ flexDirection: 'row', justifyContent: 'space-between', gap: 8 }}>
-            <Button keyCap="B" onPress={() => onCode('blank')} closed={isEmpty ? undefined : ''} testID="code-blank">
-              {words.blank}
-            </Button>
-            <Button keyCap="X" onPress={() => onCode('cannot-read')} closed={isEmpty ? undefined : ''} testID="code-cannot-read">
-              {words.cannotRead}
-            </Button>
-            <Button keyCap="W" onPress={props.onOther} closed={isEmpty ? undefined : ''} testID="other">
-              {words.other}
-            </Button>
+        {props.isChoosingCode ? (
+          // In place of the acts: Enter is said once.
+          <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: isRoomy ? actsWidth.roomy + 28 : actsWidth.narrow + 20, minWidth: 0, paddingTop: 22 }}>
+            <CodeChoice chosen={props.chosenCode} onChoose={props.onChooseCode} onRecord={onRecord} onCancel={props.onCancelOther} />
           </View>
-          <View style={{ alignItems: 'flex-start' }}>
-            <Button kind="text" isSmall keyCap="S" onPress={() => onCode('ask-the-lead')} closed={isEmpty ? undefined : ''} testID="code-ask-the-lead">
-              {words.askLead}
-            </Button>
-          </View>
-        </View>
+        ) : (
+          <>
+            <View style={{ flex: 1, minWidth: 0, paddingTop: 22 }}>
+              <Line text={text} units={item.units} note={note} />
+            </View>
+            <Acts canRecord={canRecord} isEmpty={isEmpty} onRecord={onRecord} onCode={onCode} onOther={props.onOther} />
+          </>
+        )}
       </View>
       <KeyStrip
         hints={[

@@ -151,7 +151,7 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
               {picture.isWhole ? <PageOnMat id={lease.pageImageId} rev={1} label={words.pagePicture(lease.candidateNumber, lease.pageNo)} isWhole={false} /> : <ScanMat lease={lease} turns={picture.turns} zoom={picture.zoom} />}
               <DeskTools lease={lease} isWhole={picture.isWhole} zoom={picture.zoom} onTurn={turn} onCloser={() => zoom(1.5)} onFarther={() => zoom(1 / 1.5)} onWhole={whole} />
               {shown.kind === 'done' ? (
-                <View style={{ minHeight: isWide ? 264 : 168, gap: 12, padding: isWide ? 40 : 16, borderTopWidth: 1, borderColor: colors.hair }}>
+                <View style={{ minHeight: isWide ? 240 : 168, gap: 12, padding: isWide ? 40 : 16, borderTopWidth: 1, borderColor: colors.hair }}>
                   <Text variant="head">{words.lookBack(lease.candidateNumber, saidText(shown.done.said))}</Text>
                   <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 10 }}>
                     <Button keyCap="U" icon="takeBack" onPress={takeBack}>

@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useLayoutEffect, useRef, useState } from 'react';
 import { ScrollView, View } from 'react-native';
 import { cropUrl } from '../../client/pictures';
 import type { DeskLease } from '../../contracts/desk';
@@ -42,21 +42,33 @@ export function ScanMat({ lease, turns, zoom }: ScanMatProps) {
     const share = workings.length === 0 ? 1 : 0.5;
     return fitAlone(turned(crop, turns), { width: inner.width, height: (inner.height - 6) * share }) * zoom;
   };
+  const sizes = shown.map((crop): Size => {
+    const { width, height } = turned(crop, turns);
+    const scale = scaleOf(crop);
+    return { width: Math.round(width * scale), height: Math.round(height * scale) };
+  });
+  // Closer is closer to the answer: what lies before it goes out of sight first.
+  const along = useRef<ScrollView>(null);
+  const before = isWide && zoom > 1 ? sizes.slice(0, workings.length).reduce((sum, { width }) => sum + width + gap, 0) : 0;
+  useLayoutEffect(() => {
+    along.current?.scrollTo({ x: before, animated: false });
+  }, [before]);
+  const between = 6;
+  const tall = sizes.reduce((sum, { height }) => sum + height, 0) + between * (sizes.length - 1);
+  const eyeAt = isWide || workings.length === 0 ? 0.5 : ((room.height - tall) / 2 + (sizes[0]?.height ?? 0) / 2) / Math.max(1, room.height);
   return (
     <View testID="mat" onLayout={({ nativeEvent }) => setRoom(nativeEvent.layout)} style={{ flex: 1, minHeight: 0, backgroundColor: colors.mat, overflow: 'hidden' }}>
       {room.width > 0 ? (
         <ScrollView contentContainerStyle={{ flexGrow: 1 }}>
-          <ScrollView horizontal contentContainerStyle={{ flexGrow: 1, flexDirection: isWide ? 'row' : 'column', alignItems: 'center', justifyContent: 'center', gap: isWide ? gap : 6, paddingHorizontal: isWide ? 32 : 0 }}>
-            {shown.map((crop) => {
-              const { width, height } = turned(crop, turns);
-              const scale = scaleOf(crop);
+          <ScrollView ref={along} horizontal contentContainerStyle={{ flexGrow: 1, flexDirection: isWide ? 'row' : 'column', alignItems: 'center', justifyContent: 'center', gap: isWide ? gap : between, paddingHorizontal: isWide ? 32 : 0 }}>
+            {shown.map((crop, index) => {
               const alt = crop.use === 'answer' ? words.answerPicture(lease.candidateNumber) : words.workingPicture(lease.candidateNumber);
-              return <ScanPicture key={crop.box} src={cropUrl(lease.answerId, crop)} alt={alt} width={Math.round(width * scale)} height={Math.round(height * scale)} turns={turns} />;
+              return <ScanPicture key={crop.box} src={cropUrl(lease.answerId, crop)} alt={alt} width={sizes[index]?.width ?? 0} height={sizes[index]?.height ?? 0} turns={turns} />;
             })}
           </ScrollView>
         </ScrollView>
       ) : null}
-      {zoom === 1 ? <EyeLine at={isWide || workings.length === 0 ? 0.5 : 0.25} /> : null}
+      {zoom === 1 ? <EyeLine at={eyeAt} /> : null}
     </View>
   );
 }
