@@ -1,4 +1,5 @@
 import { and, asc, count, desc, eq, inArray, isNull, or, sql, type SQL } from 'drizzle-orm';
+import { heldStates } from '../../shared/contracts/enums';
 import type { LedgerChip, LedgerSort } from '../../shared/contracts/ledger';
 import type { Database } from '../client';
 import {
@@ -21,9 +22,6 @@ export interface LedgerQuestion {
   readonly sort: LedgerSort;
   readonly direction: 'up' | 'down';
 }
-
-/** States in which no mark stands until there is a ruling. */
-export const heldStates = ['discordant', 'cannot-read', 'set-aside'] as const;
 
 const chipFilter = (chip: LedgerChip): SQL | undefined => {
   if (chip === 'all') return undefined;

@@ -1,6 +1,6 @@
 import { deskItems } from '../../db/queries/desk';
-import { heldOffsets, heldStates, ledgerCounts, ledgerRows, readingsOfAnswers, uncoveredBy, type LedgerQuestion } from '../../db/queries/ledger';
-import { answerStates } from '../../shared/contracts/enums';
+import { heldOffsets, ledgerCounts, ledgerRows, readingsOfAnswers, uncoveredBy, type LedgerQuestion } from '../../db/queries/ledger';
+import { answerStates, heldStates } from '../../shared/contracts/enums';
 import type { getLedger, LedgerChip, LedgerRow } from '../../shared/contracts/ledger';
 import type { QueryOf, ResponseOf } from '../../shared/contracts/route';
 import { reasonInWords } from '../../shared/marking/reasons';

@@ -1,6 +1,6 @@
 import { answerCounts, candidatesByAttendance, itemCount, layoutCounts, pageCounts, readingsTaken } from '../../db/queries/progress';
-import { heldStates } from '../../db/queries/ledger';
 import { isPaperLocked } from '../../db/queries/sittings';
+import { heldStates } from '../../shared/contracts/enums';
 import type { ProgressView } from '../../shared/contracts/progress';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';

@@ -1,6 +1,6 @@
 import { answerCounts, pageCounts } from '../../db/queries/progress';
-import { heldStates } from '../../db/queries/ledger';
 import { isPaperLocked } from '../../db/queries/sittings';
+import { heldStates } from '../../shared/contracts/enums';
 import { waitingKinds, type WaitingLine } from '../../shared/contracts/waiting';
 import type { SittingView } from '../../shared/contracts/sittings';
 import type { Actor } from '../auth/access';

@@ -32,6 +32,8 @@ export const answerStates = [
   'set-aside',
   'ruled',
 ] as const;
+/** No mark stands until a person has ruled. */
+export const heldStates = ['discordant', 'cannot-read', 'set-aside'] as const satisfies readonly (typeof answerStates)[number][];
 export type AnswerState = (typeof answerStates)[number];
 
 export const leasePurposes = ['live'] as const;

@@ -1,0 +1,99 @@
+import { View } from 'react-native';
+import type { Derivation as DerivationData } from '../../chemistry/derivation';
+import { useAnswerHistory } from '../../client/ledger';
+import type { AnswerView, HistoryAct } from '../../contracts/ledger';
+import { marksText } from '../../marking/grains';
+import { Cover } from '../../ui/cover';
+import { Derivation } from '../../ui/derivation';
+import { TabPanel, Tabs } from '../../ui/tabs';
+import { Text } from '../../ui/text';
+import { useColors } from '../../ui/theme';
+import { codeWords } from '../desk/words';
+import { PageOnMat } from '../page-on-mat';
+import { QueryState } from '../query-state';
+import { momentText } from '../times';
+import { words } from './words';
+
+export const moreTabs = ['history', 'derivation', 'page'] as const;
+export type MoreTab = (typeof moreTabs)[number];
+
+interface AnswerMoreProps {
+  readonly answer: AnswerView;
+  readonly tab: MoreTab;
+  readonly onTab: (tab: MoreTab) => void;
+}
+
+/** History, derivation and the whole page of an answer. */
+export function AnswerMore({ answer, tab, onTab }: AnswerMoreProps) {
+  return (
+    <View style={{ gap: 12 }}>
+      <Tabs id="answer-more" label={words.sheet.tabsLabel} tabs={moreTabs.map((key) => ({ key, label: words.sheet.tabs[key] }))} chosen={tab} onChoose={onTab} isSmall />
+      <TabPanel id="answer-more" chosen={tab}>
+        {tab === 'history' ? <History answerId={answer.answerId} /> : null}
+        {tab === 'derivation' ? <Worked answer={answer} /> : null}
+        {tab === 'page' && answer.pageImageId ? (
+          <View style={{ height: 560 }}>
+            <PageOnMat id={answer.pageImageId} rev={1} label={`Page ${answer.pageNo ?? ''} of ${answer.candidateNumber}`} isWhole />
+          </View>
+        ) : null}
+      </TabPanel>
+    </View>
+  );
+}
+
+function Worked({ answer }: { answer: AnswerView }) {
+  const derivation = answer.scheme.derivation as DerivationData | null;
+  if (!derivation) return null;
+  return (
+    <View style={{ gap: 8 }}>
+      <Derivation
+        groups={derivation.groups.map(({ subshells, counted, coefficient, contribution, isAsked, place }) => ({ subshells, counted, coefficient: coefficient.text, contribution: contribution.text, isAsked, isOuter: place === 'outer' }))}
+        nuclearCharge={derivation.nuclearCharge}
+        sigma={derivation.sigma.text}
+        zeff={derivation.zeff.text}
+        asked={answer.scheme.key === derivation.sigma.text ? 'sigma' : 'zeff'}
+      />
+      <Text variant="small" tone="ink2">
+        {[derivation.selfScreening, derivation.source].filter((sentence) => sentence !== null).join(' ')}
+      </Text>
+    </View>
+  );
+}
+
+function History({ answerId }: { answerId: string }) {
+  const history = useAnswerHistory(answerId, true);
+  return (
+    <QueryState query={history} fetching="Fetching the history" failed="The history did not come.">
+      {({ acts }) => (
+        <View role="list" style={{ gap: 2 }}>
+          {acts.map((act, index) => (
+            <Act key={index} act={act} />
+          ))}
+        </View>
+      )}
+    </QueryState>
+  );
+}
+
+function Act({ act }: { act: HistoryAct }) {
+  const colors = useColors();
+  const said = act.given === null ? '' : act.given.code === null ? (act.given.text ?? '') : codeWords[act.given.code];
+  const mark = act.grains === null ? '' : `, ${marksText(act.grains)} marks`;
+  const scheme = act.act === 'scored' && act.schemeOrdinal !== null ? `, ${words.sheet.scheme(act.schemeOrdinal)}` : '';
+  const head = act.act === 'scored' ? words.acts.scored : `${act.who} ${words.acts[act.act]}`;
+  return (
+    <View role="listitem" style={{ flexDirection: 'row', gap: 10, paddingVertical: 4 }}>
+      <View style={{ width: 10, height: 10, marginTop: 6, borderRadius: 5, borderWidth: 1.5, borderColor: colors.ink2, backgroundColor: act.grains === null ? 'transparent' : colors.copperFluid }} />
+      <View style={{ flex: 1, gap: 1 }}>
+        <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 6, alignItems: 'center' }}>
+          <Text variant="small">{`${head}${said === '' ? '' : ` ${said}`}${mark}${scheme}`}</Text>
+          {act.isCovered ? <Cover /> : null}
+        </View>
+        {act.reason === null ? null : <Text variant="small">{act.reason}</Text>}
+        <Text variant="micro" tone="ink2">
+          {momentText(act.at)}
+        </Text>
+      </View>
+    </View>
+  );
+}

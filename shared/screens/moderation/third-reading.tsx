@@ -1,0 +1,90 @@
+import { useEffect, useRef, useState } from 'react';
+import { View, type TextInput } from 'react-native';
+import { v7 as uuidv7 } from 'uuid';
+import { useThirdReading } from '../../client/ledger';
+import type { AnswerView } from '../../contracts/ledger';
+import type { Code } from '../../marking/scheme';
+import { understood } from '../../marking/understood';
+import { Button } from '../../ui/button';
+import { Text } from '../../ui/text';
+import { useIsPhone } from '../../ui/use-breakpoint';
+import { useKeys } from '../../ui/use-keys';
+import { Vessel } from '../../ui/vessel';
+import { rareCodes } from '../desk/code-choice';
+import { codeWords } from '../desk/words';
+import { words } from './words';
+
+const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
+const rareWithLead: readonly Code[] = rareCodes;
+
+/** What the lead reads from the image: typed or a code, before anything is uncovered. */
+export function ThirdReading({ answer, isInDialog, onDone }: { answer: AnswerView; isInDialog: boolean; onDone: () => void }) {
+  const isPhone = useIsPhone();
+  const send = useThirdReading(answer.answerId);
+  const [openedAt] = useState(() => Date.now());
+  const [text, setText] = useState('');
+  const [isRare, setRare] = useState(false);
+  const field = useRef<TextInput>(null);
+  const back = understood(text, answer.units);
+  useEffect(() => field.current?.focus(), []);
+  const give = (given: { text: string } | { code: Code }) => {
+    if (!send.isPending) send.mutate({ id: uuidv7(), openedAt, ...given }, { onSuccess: onDone });
+  };
+  const code = (chosen: Code) => () => {
+    if (text === '') give({ code: chosen });
+  };
+  useKeys(
+    {
+      Enter: () => {
+        if (back.kind === 'value') give({ text });
+      },
+      B: code('blank'),
+      X: code('cannot-read'),
+      W: () => setRare(!isRare),
+      ...(isRare ? Object.fromEntries(rareWithLead.map((rare, index) => [String(index + 1), code(rare)])) : {}),
+    },
+    { isInDialog },
+  );
+  const help = back.kind === 'value' ? `Understood as ${back.value}. ${back.form}` : words.sheet.fromImage;
+  return (
+    <View style={{ gap: 10 }}>
+      <Vessel label={words.sheet.read} value={text} onChange={setText} help={help} error={back.kind === 'refused' ? back.message : undefined} variant="readingM" height={52} maxLength={64} takesCommands isFocusedFirst={!isPhone} inputRef={field} testID="third-reading" />
+      {text === '' ? (
+        <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 8 }}>
+          <Button isSmall keyCap="B" onPress={code('blank')} testID="third-blank">
+            {words.sheet.blank}
+          </Button>
+          <Button isSmall keyCap="X" onPress={code('cannot-read')} testID="third-cannot-read">
+            {words.sheet.cannotRead}
+          </Button>
+          <Button isSmall keyCap="W" onPress={() => setRare(!isRare)} isExpanded={isRare} testID="third-other">
+            {words.sheet.other}
+          </Button>
+        </View>
+      ) : (
+        <Button kind="primary" isWide keyCap="Enter" onPress={() => give({ text })} isBusy={send.isPending} closed={back.kind === 'value' ? undefined : ''} testID="record-third">
+          {words.sheet.record}
+        </Button>
+      )}
+      {isRare && text === '' ? (
+        <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 8 }}>
+          {rareWithLead.map((rare, index) => (
+            <Button key={rare} isSmall keyCap={String(index + 1)} onPress={code(rare)} testID={`third-${rare}`}>
+              {capital(codeWords[rare])}
+            </Button>
+          ))}
+        </View>
+      ) : null}
+      {answer.isCovered ? (
+        <Text variant="small" tone="ink2">
+          {words.sheet.opens}
+        </Text>
+      ) : null}
+      {send.error ? (
+        <Text variant="small" tone="methyl" live="assertive">
+          {send.error.message}
+        </Text>
+      ) : null}
+    </View>
+  );
+}
