@@ -1,4 +1,4 @@
-import { mkdtempSync, readdirSync, rmSync } from 'node:fs';
+import { mkdtempSync, readdirSync, readFileSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import type { Page } from 'playwright-core';
@@ -6,6 +6,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { openPage, startBrowserBench, type BrowserBench } from '../support/browser';
 import { buildDemoSitting, drawDemoPages } from '../support/demo-sitting';
 import { readWithKeys, readWithPad } from '../support/read-at-desk';
+import { marksByTruth, marksInFile, ruleAll } from '../support/rule-held';
 import { itemsRead, writtenPaper } from '../support/written-paper';
 import type { BuiltPaper } from '../support/paper';
 
@@ -44,6 +45,19 @@ for (const viewport of ['wide', 'phone'] as const) {
       expect(read).toBe(24);
       const recorded = bench.server.context.db.$client.prepare('select count(*) from reading').pluck().get();
       expect(recorded).toBe(24);
+      expect(complaints).toEqual([]);
+      await context.close();
+    });
+
+    it('a lead sees them scored as the truth says, rules on those set aside, and exports; the file equals the truth', async () => {
+      const { page, context, complaints } = await openPage(bench, 'lead', viewport);
+      await page.goto(`${bench.address}/sittings/${built.sittingId}/moderation?show=to-rule`);
+      await ruleAll(page, paper);
+      await page.goto(`${bench.address}/sittings/${built.sittingId}/marks`);
+      const saving = page.waitForEvent('download');
+      await page.getByTestId('export-marks').click();
+      const path = await (await saving).path();
+      expect(marksInFile(readFileSync(path, 'utf8'))).toEqual(marksByTruth(paper));
       expect(complaints).toEqual([]);
       await context.close();
     });

@@ -14,6 +14,8 @@ const candidateWidth = 96;
 const itemWidth = 62;
 const totalWidth = 84;
 const missingWidth = 150;
+/** With more items than these a column has room for its number only. */
+const labelled = 8;
 
 /** Candidates by items. A mark that is missing says why in a word; a phone shows the total and what is missing. */
 export function MarksTable({ totals }: { totals: Totals }) {
@@ -34,18 +36,18 @@ export function MarksTable({ totals }: { totals: Totals }) {
             ? null
             : items.map(({ id, number, label }) => (
                 <HeadCell key={id} width={itemWidth} align="right">
-                  {`${number} ${label}`}
+                  {items.length > labelled ? String(number) : `${number} ${label}`}
                 </HeadCell>
               ))}
           <HeadCell width={totalWidth} align="right">{`${words.total} / ${marksText(of)}`}</HeadCell>
           <HeadCell grow={1}>{words.missing}</HeadCell>
         </TableHead>
       </View>
-      <View role="rowgroup" style={{ height: virtual.getTotalSize() }}>
+      <View role="rowgroup" style={{ height: virtual.getTotalSize(), position: 'relative' }}>
         {virtual.getVirtualItems().map(({ index, start }) => {
           const row = rows[index];
           return row ? (
-            <View key={row.candidateId} style={{ position: 'absolute', left: 0, right: 0, top: start + 38 }}>
+            <View key={row.candidateId} style={{ position: 'absolute', left: 0, right: 0, top: start }}>
               <MarksRow row={row} index={index} isPhone={isPhone} />
             </View>
           ) : null;

@@ -21,7 +21,7 @@ export const words = {
   candidate: 'Candidate',
   total: 'Total',
   missing: 'Missing',
-  missingItems: (items: readonly number[]) => (items.length === 1 ? `item ${items[0]}` : `items ${items.join(', ')}`),
+  missingItems: (items: readonly number[]) => (items.length === 1 ? `item ${items[0]}` : items.length > 5 ? `${items.length} items` : `items ${items.join(', ')}`),
   none: 'No scripts yet',
   noneText: 'Marks appear once the paper is locked and the class list is in.',
   attendance: { absent: 'absent', withdrawn: 'withdrawn', deferred: 'deferred' } as Readonly<Record<string, string>>,
