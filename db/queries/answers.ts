@@ -57,7 +57,7 @@ export function cropsOfAnswer(db: Database, answerId: string) {
 /** The page image that holds an answer, where its page is in. */
 export function pageOfAnswer(db: Database, scriptId: string, pageNo: number) {
   return db
-    .select({ image: pageImage.id })
+    .select({ image: pageImage.id, rev: pageImage.rev })
     .from(page)
     .innerJoin(pageImage, eq(pageImage.id, page.image))
     .where(and(eq(page.script, scriptId), eq(page.pageNo, pageNo)))

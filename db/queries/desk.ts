@@ -1,7 +1,7 @@
 import { and, asc, count, desc, eq, inArray, isNull, lte, ne, notExists, sql } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/sqlite-core';
 import { preparedOnce, type Database } from '../client';
-import { answer, box, candidate, course, crop, item, itemScheme, lease, page, reading, readingEnd, schemeVersionItem, script, sitting } from '../schema';
+import { answer, box, candidate, course, crop, item, itemScheme, lease, page, pageImage, reading, readingEnd, schemeVersionItem, script, sitting } from '../schema';
 
 export type LeaseRow = typeof lease.$inferSelect;
 
@@ -114,9 +114,13 @@ export const findLease = (db: Database, id: string): LeaseRow | undefined => sta
 
 export const endLeaseAt = (db: Database, id: string, at: number): void => void statements(db).endLease.run({ id, at });
 
-/** Ends whatever lease is open on an answer. */
-export const endOpenLeases = (db: Database, answerId: string, at: number): void =>
-  void db.update(lease).set({ endedAt: at }).where(and(eq(lease.answer, answerId), isNull(lease.endedAt))).run();
+/** Takes the picture from under every lease of an answer, open or run out: a reading that still comes by one is of another page. */
+export const withdrawLeases = (db: Database, answerId: string, at: number): void =>
+  void db
+    .update(lease)
+    .set({ endedAt: sql`coalesce(${lease.endedAt}, ${at})`, withdrawnAt: at })
+    .where(and(eq(lease.answer, answerId), isNull(lease.withdrawnAt)))
+    .run();
 
 /** Leases that ran out free their answers for others. */
 export const endExpiredLeases = (db: Database, now: number): void =>
@@ -148,6 +152,7 @@ export function leasedAnswers(db: Database, leaseIds: readonly string[]) {
       use: box.use,
       pageNo: box.pageNo,
       pageImageId: crop.pageImage,
+      pageImageRev: pageImage.rev,
       blob: crop.blob,
       widthPx: crop.widthPx,
       heightPx: crop.heightPx,
@@ -158,6 +163,7 @@ export function leasedAnswers(db: Database, leaseIds: readonly string[]) {
     .innerJoin(script, eq(script.id, answer.script))
     .leftJoin(candidate, eq(candidate.id, script.candidate))
     .innerJoin(crop, eq(crop.answer, answer.id))
+    .innerJoin(pageImage, eq(pageImage.id, crop.pageImage))
     .innerJoin(box, and(eq(box.id, crop.box), ne(box.use, 'number')))
     .where(inArray(lease.id, [...leaseIds]))
     .orderBy(asc(answer.shuffle), asc(box.use), asc(box.pageNo), asc(box.y))

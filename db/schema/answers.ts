@@ -50,6 +50,8 @@ export const lease = sqliteTable(
     takenAt: instant().notNull(),
     expiresAt: instant().notNull(),
     endedAt: instant(),
+    /** The page it was taken on was taken out: what is typed from it does not count. */
+    withdrawnAt: instant(),
   },
   (table) => [
     uniqueIndex('lease_one_open').on(table.answer, table.purpose).where(sql`"ended_at" is null`),

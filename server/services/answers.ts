@@ -96,6 +96,7 @@ export function answerView(context: Context, actor: Actor, answerId: string): An
   const nameOf = pseudonyms(context, head.sitting);
   const worked = work(scheme.body.asked);
   const answerCrop = crops.find((crop) => crop.use === 'answer') ?? crops[0];
+  const onPage = answerCrop ? pageOfAnswer(db, head.script, answerCrop.pageNo) : undefined;
   return {
     answerId,
     sittingId: head.sitting,
@@ -110,7 +111,8 @@ export function answerView(context: Context, actor: Actor, answerId: string): An
     isCovered: covered,
     cannotSettle: cannotSettle(actor, access.roles.has('lead'), readings),
     crops: crops.flatMap(({ box, use, blob, widthPx, heightPx }) => (use === 'number' ? [] : [{ box, version: pictureVersion(blob), use, widthPx, heightPx }])),
-    pageImageId: answerCrop ? (pageOfAnswer(db, head.script, answerCrop.pageNo)?.image ?? null) : null,
+    pageImageId: onPage?.image ?? null,
+    pageImageRev: onPage?.rev ?? 1,
     pageNo: answerCrop?.pageNo ?? null,
     readings: readings.map((reading) => ({
       id: reading.id,

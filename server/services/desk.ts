@@ -42,6 +42,7 @@ export function describeLeases(db: Database, leaseIds: readonly string[]): DeskL
       pageNo: row.pageNo,
       pageCount: row.pageCount,
       pageImageId: row.pageImageId,
+      pageImageRev: row.pageImageRev,
       crops: [],
     };
     leases.set(row.id, { ...known, crops: [...known.crops, { box: row.box, version: pictureVersion(row.blob), use: row.use, widthPx: row.widthPx, heightPx: row.heightPx }] });

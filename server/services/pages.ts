@@ -1,6 +1,6 @@
 import { inTransaction } from '../../db/client';
 import { mediaTypeOfBlob } from '../../db/queries/blobs';
-import { endOpenLeases, endReading } from '../../db/queries/desk';
+import { withdrawLeases, endReading } from '../../db/queries/desk';
 import { actsFromImage, cropOfBox, dropCrops, findPageImage, hasAnswerCrop, loosePages, placeById, placeOf, placesOfSitting, setEvidence, setPlaceImage, updatePageImage, type PageImageRow, type PagePlace } from '../../db/queries/page-images';
 import type { LoosePage, PageImageView, PagePlaceView } from '../../shared/contracts/scans';
 import type { GuardRole } from '../../shared/contracts/route';
@@ -118,7 +118,7 @@ function emptyPlace(context: Context, image: PageImageRow): void {
   setPlaceImage(db, image.page, null);
   const answers = dropCrops(db, image.id);
   for (const answer of answers) {
-    endOpenLeases(db, answer, clock.now());
+    withdrawLeases(db, answer, clock.now());
     if (!hasAnswerCrop(db, answer)) setEvidence(db, answer, 'none');
   }
   if (answers.length > 0) settleAnswers(context, answers);

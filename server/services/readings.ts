@@ -93,7 +93,8 @@ export function recordReading(context: Context, actor: Actor, id: string, sent: 
       grammar: grammarVersion,
     });
     if (lease.endedAt === null) endLeaseAt(db, lease.id, at);
-    if (surplus) endReading(db, { reading: id, why: 'surplus', by: actor.personId, at });
+    if (lease.withdrawnAt !== null) endReading(db, { reading: id, why: 'reopened', by: actor.personId, at });
+    else if (surplus) endReading(db, { reading: id, why: 'surplus', by: actor.personId, at });
     recordAct(context, { actor: actor.personId, act: 'reading-recorded', sitting: target.sitting, subject: sent.answerId, after: { reading: id } });
     settleAnswers(context, [sent.answerId]);
   });

@@ -22,6 +22,7 @@ export const deskLease = z.object({
   pageNo: z.int(),
   pageCount: z.int(),
   pageImageId: uuid,
+  pageImageRev: z.int(),
   crops: z.array(deskCrop),
 });
 export type DeskLease = z.infer<typeof deskLease>;

@@ -91,6 +91,7 @@ export const answerView = z.object({
   cannotSettle: z.string().nullable(),
   crops: z.array(z.object({ box: uuid, version: z.string(), use: z.enum(['answer', 'working']), widthPx: z.int(), heightPx: z.int() })),
   pageImageId: uuid.nullable(),
+  pageImageRev: z.int(),
   pageNo: z.int().nullable(),
   readings: z.array(shownReading),
   mine: z.object({ id: uuid, text: z.string().nullable(), code: code.nullable(), grains: grains.nullable() }).nullable(),

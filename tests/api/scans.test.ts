@@ -109,15 +109,29 @@ describe('scans', () => {
 
   it('takes a page out with the readings made from it only for a lead who says so', async () => {
     const { body } = await reader.post('/api/desk/leases').send({ itemId: paper.items[1], count: 1 }).expect(200);
-    const [lease] = (body as { leases: { id: string; answerId: string; pageImageId: string }[] }).leases;
+    const [lease] = (body as { leases: { id: string; answerId: string; pageImageId: string; pageImageRev: number }[] }).leases;
     await reader.put(`/api/readings/${uuidv7()}`).send({ answerId: lease?.answerId, leaseId: lease?.id, text: '3.75', openedAt: 1 }).expect(200);
-    const out = (agent: Agent, reopen: boolean) => agent.post(`/api/page-images/${lease?.pageImageId}/loosen`).set('If-Match', '1').send({ reopen });
+    const out = (agent: Agent, reopen: boolean) => agent.post(`/api/page-images/${lease?.pageImageId}/loosen`).set('If-Match', String(lease?.pageImageRev)).send({ reopen });
     expect(((await out(lead, false)).body as { error: { code: string } }).error.code).toBe('conflict');
     expect(((await out(reader, true)).body as { error: { code: string } }).error.code).toBe('not_allowed');
     await out(lead, true).expect(200);
     const answer = await lead.get(`/api/answers/${lease?.answerId}`).expect(200);
     expect(answer.body).toMatchObject({ state: 'not-read', score: null, crops: [] });
     expect(await toRead()).toEqual([2, 2]);
+  });
+
+  it('does not count a reading that comes by a lease on a page which was taken out meanwhile', async () => {
+    const { body } = await reader.post('/api/desk/leases').send({ itemId: paper.items[0], count: 1 }).expect(200);
+    const [lease] = (body as { leases: { id: string; answerId: string; pageImageId: string; pageImageRev: number }[] }).leases;
+    const loosened = await reader.post(`/api/page-images/${lease?.pageImageId}/loosen`).set('If-Match', String(lease?.pageImageRev)).send({ reopen: false }).expect(200);
+    await reader.put(`/api/readings/${uuidv7()}`).send({ answerId: lease?.answerId, leaseId: lease?.id, text: '6.10', openedAt: 1 }).expect(200);
+    const answer = await lead.get(`/api/answers/${lease?.answerId}`).expect(200);
+    expect(answer.body).toMatchObject({ state: 'not-read', score: null });
+    const { places } = await loosePages();
+    const page = loosened.body as { id: string; rev: number };
+    const place = places.find(({ candidateNumber }) => candidateNumber === (answer.body as { candidateNumber: string }).candidateNumber);
+    await reader.post(`/api/page-images/${page.id}/place`).set('If-Match', String(page.rev)).send({ candidateId: place?.candidateId, pageNo: 1 }).expect(200);
+    expect((await lead.get(`/api/answers/${lease?.answerId}`)).body).toMatchObject({ state: 'not-read', readings: [] });
   });
 
   it('takes a file in parts that resume, and completes it only when all are there', async () => {

@@ -148,7 +148,7 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
         <View style={{ flex: 1, minWidth: 0, minHeight: 0 }}>
           {lease ? (
             <>
-              {picture.isWhole ? <PageOnMat id={lease.pageImageId} rev={1} label={words.pagePicture(lease.candidateNumber, lease.pageNo)} isWhole={false} /> : <ScanMat lease={lease} turns={picture.turns} zoom={picture.zoom} />}
+              {picture.isWhole ? <PageOnMat id={lease.pageImageId} rev={lease.pageImageRev} label={words.pagePicture(lease.candidateNumber, lease.pageNo)} isWhole={false} /> : <ScanMat lease={lease} turns={picture.turns} zoom={picture.zoom} />}
               <DeskTools lease={lease} isWhole={picture.isWhole} zoom={picture.zoom} onTurn={turn} onCloser={() => zoom(1.5)} onFarther={() => zoom(1 / 1.5)} onWhole={whole} />
               {shown.kind === 'done' ? (
                 <View style={{ minHeight: isWide ? 240 : 168, gap: 12, padding: isWide ? 40 : 16, borderTopWidth: 1, borderColor: colors.hair }}>

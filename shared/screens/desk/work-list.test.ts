@@ -2,7 +2,7 @@ import { expect, it } from 'vitest';
 import type { DeskLease } from '../../contracts/desk';
 import { emptyWork, looking, onView, withLeases, withReading, withTakenBack } from './work-list';
 
-const lease = (answerId: string): DeskLease => ({ id: `l-${answerId}`, answerId, candidateNumber: answerId, pageNo: 1, pageCount: 1, pageImageId: 'p', crops: [] });
+const lease = (answerId: string): DeskLease => ({ id: `l-${answerId}`, answerId, candidateNumber: answerId, pageNo: 1, pageCount: 1, pageImageId: 'p', pageImageRev: 1, crops: [] });
 const done = (answerId: string) => ({ readingId: `r-${answerId}`, lease: lease(answerId), said: { text: '1' }, at: 1 });
 const three = withLeases(emptyWork, ['a', 'b', 'c'].map(lease), new Set());
 

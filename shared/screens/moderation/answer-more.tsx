@@ -33,7 +33,7 @@ export function AnswerMore({ answer, tab, onTab }: AnswerMoreProps) {
         {tab === 'derivation' ? <Worked answer={answer} /> : null}
         {tab === 'page' && answer.pageImageId ? (
           <View style={{ height: 560 }}>
-            <PageOnMat id={answer.pageImageId} rev={1} label={`Page ${answer.pageNo ?? ''} of ${answer.candidateNumber}`} isWhole />
+            <PageOnMat id={answer.pageImageId} rev={answer.pageImageRev} label={`Page ${answer.pageNo ?? ''} of ${answer.candidateNumber}`} isWhole />
           </View>
         ) : null}
       </TabPanel>

@@ -17,7 +17,7 @@ interface LedgerTableProps {
   readonly heldOffsets: readonly number[];
   readonly rowAt: (row: number) => LedgerRow | undefined;
   readonly chosen: number;
-  /** Without First, Second and the scale, where the sheet needs the room. */
+  /** Without the scale, where the sheet needs the room. */
   readonly isNarrow: boolean;
   readonly onView: (from: number, to: number) => void;
   readonly onChoose: (row: number) => void;
@@ -28,7 +28,7 @@ const features = tableFeatures({});
 const column = createColumnHelper<typeof features, LedgerRow>();
 const sortOf: Readonly<Partial<Record<ColumnKey, LedgerSort>>> = { candidate: 'candidate', item: 'item', pair: 'state', scale: 'value', mark: 'mark' };
 const columns = (Object.keys(words.columns) as ColumnKey[]).map((key) => column.display({ id: key, header: words.columns[key] }));
-const wideOnly: ReadonlySet<string> = new Set<ColumnKey>(['scale', 'second']);
+const wideOnly: ReadonlySet<string> = new Set<ColumnKey>(['scale']);
 const none: LedgerRow[] = [];
 
 /** The rows of the ledger, virtual; the server sorts. Rows that have not come yet are lines without values. */

@@ -1,0 +1,1 @@
+ALTER TABLE `lease` ADD `withdrawn_at` integer;
