@@ -34,7 +34,7 @@ export function PageOnMat({ id, rev, label, isWhole }: PageOnMatProps) {
   const width = isWhole ? Math.min(widest, Math.max(0, room.height - 2 * gap) / ratio) : widest;
   return (
     <View style={{ flex: 1, minHeight: 0, backgroundColor: colors.mat }} onLayout={({ nativeEvent }) => setRoom(nativeEvent.layout)}>
-      <ScrollView contentContainerStyle={{ padding: gap, alignItems: 'center' }}>
+      <ScrollView {...({ tabIndex: 0, role: 'group', 'aria-label': label } as object)} contentContainerStyle={{ padding: gap, alignItems: 'center' }}>
         {room.width > 0 ? (
           <View style={{ boxShadow: shadow.scan, borderRadius: radius.scan }}>
             <Image

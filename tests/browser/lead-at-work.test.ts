@@ -1,21 +1,7 @@
-import axeSource from 'axe-core';
-import type { Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { openPage, startBrowserBench, type BrowserBench } from '../support/browser';
 import { cast, castPassword } from '../support/cast';
 import { buildPaper } from '../support/paper';
-
-/** What axe finds on the page as it stands, by the rules of WCAG 2.2 A and AA. */
-async function axeViolations(page: Page): Promise<string[]> {
-  await page.addScriptTag({ content: axeSource.source }).catch(() => undefined);
-  const isThere = await page.evaluate(() => 'axe' in globalThis);
-  if (!isThere) await page.evaluate(axeSource.source);
-  return page.evaluate(async () => {
-    const { axe } = globalThis as unknown as { axe: { run(options: object): Promise<{ violations: { id: string; nodes: { html: string }[] }[] }> } };
-    const { violations } = await axe.run({ runOnly: ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'] });
-    return violations.flatMap(({ id, nodes }) => nodes.map(({ html }) => `${id}: ${html}`));
-  });
-}
 
 describe('a lead at work', () => {
   let bench: BrowserBench;
@@ -70,24 +56,4 @@ describe('a lead at work', () => {
     expect(await page.content()).not.toContain('6.10');
     await context.close();
   });
-
-  for (const viewport of ['wide', 'phone'] as const) {
-    for (const scheme of ['light', 'dark'] as const) {
-      it(`axe finds nothing on the screens, ${viewport}, ${scheme}`, async () => {
-        const door = await openPage(bench, null, viewport, scheme);
-        await door.page.goto(`${bench.address}/sign-in`);
-        await door.page.getByLabel('Password').waitFor();
-        expect(await axeViolations(door.page)).toEqual([]);
-        await door.context.close();
-
-        const { page, context } = await openPage(bench, 'lead', viewport, scheme);
-        for (const path of ['', `sittings/${sittingId}/paper`, `sittings/${sittingId}/regions`, `sittings/${sittingId}/class-list`]) {
-          await page.goto(`${bench.address}/${path}`);
-          await page.waitForLoadState('networkidle');
-          expect(await axeViolations(page), path || 'bench').toEqual([]);
-        }
-        await context.close();
-      });
-    }
-  }
 });

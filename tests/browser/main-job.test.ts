@@ -6,6 +6,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { openPage, startBrowserBench, type BrowserBench } from '../support/browser';
 import { buildDemoSitting, drawDemoPages } from '../support/demo-sitting';
 import { readWithKeys, readWithPad } from '../support/read-at-desk';
+import { listenToResponses } from '../support/reader-session';
 import { marksByTruth, marksInFile, ruleAll } from '../support/rule-held';
 import { itemsRead, writtenPaper } from '../support/written-paper';
 import type { BuiltPaper } from '../support/paper';
@@ -38,6 +39,7 @@ for (const viewport of ['wide', 'phone'] as const) {
 
     it('a reader uploads the batch and reads all answers, one of each code among them', async () => {
       const { page, context, complaints } = await openPage(bench, 'readerOne', viewport);
+      const heard = listenToResponses(page);
       await upload(page, bench.address, built.sittingId, folder, paper.truth.length);
       await page.goto(`${bench.address}/desk/${built.sittingId}`);
       page.setDefaultTimeout(15_000);
@@ -45,6 +47,12 @@ for (const viewport of ['wide', 'phone'] as const) {
       expect(read).toBe(24);
       const recorded = bench.server.context.db.$client.prepare('select count(*) from reading').pluck().get();
       expect(recorded).toBe(24);
+      await page.goto(`${bench.address}/sittings/${built.sittingId}`);
+      await page.waitForLoadState('networkidle');
+      // The reader's whole session: every answer of the interface, to its last field.
+      const { addresses, leaks } = await heard();
+      expect(leaks).toEqual([]);
+      expect(addresses).toEqual(expect.arrayContaining(['/api/desk/leases', '/api/desk/standing', '/api/desk/recent', '/api/me', '/api/waiting']));
       expect(complaints).toEqual([]);
       await context.close();
     });
