@@ -1,4 +1,5 @@
 import { inTransaction } from '../../db/client';
+import { committedTogether } from '../../db/group-commit';
 import { endLeaseAt, endReading, findLease, findReading, hasOpenLease, insertReading, ownLiveReading, readingTarget } from '../../db/queries/desk';
 import { liveReadings, standingRuling } from '../../db/queries/settling';
 import { toFractionText } from '../../shared/chemistry/exact';
@@ -99,6 +100,9 @@ export function recordReading(context: Context, actor: Actor, id: string, sent: 
     settleAnswers(context, [sent.answerId]);
   });
 }
+
+/** The same, sharing its commit with readings that arrive at the same moment; on disk when this resolves. */
+export const keepReading = (context: Context, actor: Actor, id: string, sent: SentReading): Promise<void> => committedTogether(context.db, () => recordReading(context, actor, id, sent));
 
 /** Ends an own reading and gives its answer back to the reader, unless another reader holds it by now. */
 export function takeBackReading(context: Context, actor: Actor, id: string): DeskLease | null {
