@@ -114,6 +114,16 @@ export function TrayRowView({ row, sittingId, canSend, isChosen, onShow, onCance
         <Frame state="waiting" head={words.row.sending(row.bundle, row.files)}>
           {small(row.isOffline ? words.row.offline : words.row.sendingAt(row.sent, row.files), row.isOffline ? 'iodine' : 'ink2')}
           <ProgressRule done={row.doneBytes} of={row.bytes} label={words.row.sending(row.bundle, row.files)} />
+          {row.now.map(({ key, fileName, sentBytes, size }) => (
+            <View key={key} style={{ flexDirection: 'row', alignItems: 'center', gap: 10 }}>
+              <Text variant="micro" tone="ink2" lines={1} style={{ width: 120 }}>
+                {fileName}
+              </Text>
+              <View style={{ flex: 1 }}>
+                <ProgressRule done={sentBytes} of={size} label={fileName} height={5} thickness={2} />
+              </View>
+            </View>
+          ))}
         </Frame>
       );
     case 'batch': {

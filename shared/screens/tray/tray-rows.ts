@@ -5,7 +5,7 @@ export type TrayRow =
   | { readonly kind: 'refused-here'; readonly key: string; readonly bundle: string; readonly fileName: string; readonly problem: string }
   | { readonly kind: 'refused' | 'duplicate'; readonly key: string; readonly bundle: string; readonly fileName: string; readonly problem: string }
   | { readonly kind: 'loose'; readonly key: string; readonly bundle: string; readonly pages: number }
-  | { readonly kind: 'sending'; readonly key: string; readonly bundle: string; readonly files: number; readonly sent: number; readonly doneBytes: number; readonly bytes: number; readonly isOffline: boolean }
+  | { readonly kind: 'sending'; readonly key: string; readonly bundle: string; readonly files: number; readonly sent: number; readonly doneBytes: number; readonly bytes: number; readonly isOffline: boolean; readonly now: readonly SendingFile[] }
   | { readonly kind: 'batch'; readonly key: string; readonly batch: BatchSummary; readonly brokenOff: number };
 
 const sum = (numbers: readonly number[]): number => numbers.reduce((total, number) => total + number, 0);
@@ -31,7 +31,7 @@ export function trayRows(batches: readonly BatchSummary[], sending: readonly Sen
     const files = onTheWay(sending, id);
     if (files.every(({ state }) => state === 'sent')) return [];
     const sent = files.filter(({ state }) => state === 'sent').length;
-    return [{ kind: 'sending', key: `sending-${id}`, bundle, files: files.length, sent, doneBytes: sum(files.map(({ sentBytes }) => sentBytes)), bytes: sum(files.map(({ size }) => size)), isOffline: files.some(({ state }) => state === 'offline') }];
+    return [{ kind: 'sending', key: `sending-${id}`, bundle, files: files.length, sent, doneBytes: sum(files.map(({ sentBytes }) => sentBytes)), bytes: sum(files.map(({ size }) => size)), isOffline: files.some(({ state }) => state === 'offline'), now: files.filter(({ state }) => state === 'sending' || state === 'offline') }];
   });
   const stacks = batches.map((batch): TrayRow => {
     const mine = onTheWay(sending, batch.id).filter(({ state }) => state === 'sending' || state === 'offline').length;
