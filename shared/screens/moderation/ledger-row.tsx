@@ -133,14 +133,14 @@ export function LedgerCard({ row, index, isChosen, onOpen }: Omit<LedgerRowProps
               <ChemText beside="small">{row.label}</ChemText>
             </Text>
           </View>
-          <View style={{ flexDirection: 'row', gap: 14, alignItems: 'center' }}>
-            <Pair row={row} />
+          <Pair row={row} />
+          <View style={{ flexDirection: 'row', gap: 14, alignItems: 'center', minHeight: 20 }}>
             <Given row={row} at={0} />
             {row.readings.length > 1 ? <Given row={row} at={1} /> : null}
+            <Text variant="small" tone="ink2" lines={1} style={{ flex: 1 }}>
+              {row.why}
+            </Text>
           </View>
-          <Text variant="small" tone="ink2" lines={1}>
-            {row.why}
-          </Text>
         </View>
       </Cell>
       <Cell width={84} align="right">

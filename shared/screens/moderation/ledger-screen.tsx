@@ -108,13 +108,13 @@ export function LedgerScreen({ sittingId }: { sittingId: string }) {
         {({ counts, items }) => (
           <View style={{ flex: 1, minHeight: 0 }}>
             <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'flex-end', gap: 14, paddingHorizontal: side, paddingTop: 12, paddingBottom: 8 }}>
-              <Text variant="title" level={1} style={{ flexGrow: 1 }}>
+              <Text variant="title" level={1} style={{ flexGrow: 1, flexBasis: isPhone ? '100%' : undefined }}>
                 {words.title}
               </Text>
-              <View style={{ width: isPhone ? 130 : 170 }}>
+              <View style={isPhone ? { flex: 1 } : { width: 170 }}>
                 <Select label={words.item} height={40} value={asked.item ?? ''} onChange={(item) => ask({ item: item === '' ? null : item })} options={[{ value: '', label: words.allItems }, ...items.map(({ id, number, label }) => ({ value: id, label: `${number} ${label}` }))]} testID="ledger-item" />
               </View>
-              <View style={{ width: isPhone ? 180 : 220 }}>
+              <View style={isPhone ? { flex: 1.3 } : { width: 220 }}>
                 <Vessel label={words.find} value={find} onChange={setFind} height={40} maxLength={64} inputRef={findField} testID="ledger-find" />
               </View>
             </View>
