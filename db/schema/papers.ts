@@ -1,4 +1,5 @@
 import { index, integer, primaryKey, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core';
+import { vettingOutcomes } from '../../shared/contracts/enums';
 import type { ItemScheme } from '../../shared/marking/scheme';
 import { id, instant, rev } from './columns';
 import { person } from './people';
@@ -55,4 +56,34 @@ export const schemeVersionItem = sqliteTable(
     itemScheme: text().notNull().references(() => itemScheme.hash),
   },
   (table) => [primaryKey({ columns: [table.version, table.item] })],
+);
+
+/** Append-only: what a second person worked out for an item, before its key was uncovered to them. */
+export const vettingCheck = sqliteTable(
+  'vetting_check',
+  {
+    id: id(),
+    item: text().notNull().references(() => item.id),
+    itemScheme: text().notNull().references(() => itemScheme.hash),
+    person: text().notNull().references(() => person.id),
+    text: text().notNull(),
+    agrees: integer({ mode: 'boolean' }).notNull(),
+    at: instant().notNull(),
+  },
+  (table) => [index('vetting_check_by_item').on(table.item, table.itemScheme)],
+);
+
+/** Append-only: a scheme signed or sent back. It holds for that scheme only: a changed one has another hash. */
+export const vetting = sqliteTable(
+  'vetting',
+  {
+    id: id(),
+    item: text().notNull().references(() => item.id),
+    itemScheme: text().notNull().references(() => itemScheme.hash),
+    person: text().notNull().references(() => person.id),
+    outcome: text({ enum: vettingOutcomes }).notNull(),
+    comment: text(),
+    at: instant().notNull(),
+  },
+  (table) => [index('vetting_by_item').on(table.item, table.itemScheme)],
 );

@@ -10,6 +10,7 @@ import { scanRoutes } from './scans';
 import { serviceRoutes } from './service';
 import { sessionRoutes } from './session';
 import { sittingRoutes } from './sittings';
+import { vettingRoutes } from './vetting';
 
 /** Every resource of the interface. */
 export function registerRoutes(router: Router, context: Context, passport: AppPassport): void {
@@ -22,4 +23,5 @@ export function registerRoutes(router: Router, context: Context, passport: AppPa
   itemRoutes(router, context);
   classListRoutes(router, context);
   scanRoutes(router, context);
+  vettingRoutes(router, context);
 }

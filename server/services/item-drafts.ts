@@ -97,7 +97,7 @@ export function readDraft(draft: ItemDraft): ReadDraft {
 }
 
 /** The accepted roundings of a key, fewest decimals last: of 61/10 "6.1", of 91/20 "4.5" and "4.6". */
-function roundingTexts({ key, roundings: policy }: ItemScheme): string[] {
+export function roundingTexts({ key, roundings: policy }: ItemScheme): string[] {
   if (policy.downToDecimals === null) return [];
   const value = fromFractionText(key.value);
   const texts: string[] = [];

@@ -9,6 +9,7 @@ import { scanRoutes } from './scans';
 import { serviceRoutes } from './service';
 import { sessionRoutes } from './session';
 import { sittingRoutes } from './sittings';
+import { vettingRoutes } from './vetting';
 import { waitingRoutes } from './waiting';
 
 /** Every route of the interface, by name: for OpenAPI and for the test that walks them all. */
@@ -24,4 +25,5 @@ export const allRoutes: Readonly<Record<string, RouteContract>> = {
   ...layoutRoutes,
   ...scanRoutes,
   ...waitingRoutes,
+  ...vettingRoutes,
 };

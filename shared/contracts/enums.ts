@@ -43,6 +43,8 @@ export const rulingKinds = ['value', 'code', 'mark'] as const;
 export type RulingKind = (typeof rulingKinds)[number];
 export const scoreCauses = ['settled', 'ruled', 'amended', 'taken-back'] as const;
 
+export const vettingOutcomes = ['signed', 'sent-back'] as const;
+
 export const exportKinds = ['marks-csv'] as const;
 
 export const auditActs = [
@@ -57,6 +59,8 @@ export const auditActs = [
   'item-removed',
   'items-ordered',
   'paper-locked',
+  'key-worked',
+  'item-vetted',
   'class-list-imported',
   'attendance-changed',
   'layout-changed',

@@ -53,6 +53,8 @@ function buildWorld(server: TestServer): World {
       recordThirdReading: { text: '6.10', openedAt: now },
       ruleAnswer: { kind: 'value', text: '6.10' },
       makeExport: { kind: 'marks-csv' },
+      checkKey: { text: '6.10' },
+      vetItem: { outcome: 'signed', comment: null },
       makeBatch: { bundle: 'B' },
       changeBatch: { state: 'cancelled' },
       beginUpload: { fileName: 'page.jpg', size: 10 },
@@ -71,7 +73,7 @@ const addressOf = (contract: RouteContract, ids: World['ids']): string =>
   })}`.replace(/:n\b|:page\b/g, '1');
 
 /** Routes whose thing is one's own, or not made here: to anybody else it is not there, whatever the role. */
-const ownOnly = new Set(['endLease', 'recordReading', 'takeBackReading', 'takeBackRuling', 'getExportFile', 'getCrop', 'changeBatch']);
+const ownOnly = new Set(['endLease', 'recordReading', 'takeBackReading', 'takeBackRuling', 'getExportFile', 'getCrop', 'changeBatch', 'checkKey', 'vetItem']);
 /** Nothing was uploaded here yet, so those let in find nothing. */
 const notThereYet = new Set(['getSample', 'getPageImageFile', 'placePage', 'turnPage']);
 /** Bytes in, so that the guard runs after the transport; tested beside their resource. */

@@ -1,0 +1,61 @@
+import type { Agent } from 'supertest';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import type { VettingItem } from '../../shared/contracts/vetting';
+import { buildPaper, itemDraft, type BuiltPaper } from '../support/paper';
+import { startTestServer, type TestServer } from '../support/test-server';
+
+describe('vetting', () => {
+  let server: TestServer;
+  let paper: BuiltPaper;
+  let external: Agent;
+  let lead: Agent;
+  beforeAll(async () => {
+    server = await startTestServer();
+    paper = buildPaper(server, { locked: false });
+    external = await server.signInAs('external');
+    lead = await server.signInAs('lead');
+  });
+  afterAll(() => server.close());
+
+  const itemsFor = async (agent: Agent) => ((await agent.get(`/api/sittings/${paper.sittingId}/vetting`).expect(200)).body as { items: VettingItem[] }).items;
+  const write = (agent: Agent, text: string, rev = '1') => agent.put(`/api/items/${paper.items[0]}/vetting-check`).set('If-Match', rev).send({ text });
+  const vet = (agent: Agent, outcome: string, comment: string | null = null, rev = '1') => agent.post(`/api/items/${paper.items[0]}/vetting`).set('If-Match', rev).send({ outcome, comment });
+  const codeOf = (response: { body: unknown }) => (response.body as { error: { code: string } }).error.code;
+
+  it('covers the key from who has not worked it, and keeps the maker from vetting', async () => {
+    const [first] = await itemsFor(external);
+    expect(first).toMatchObject({ number: 1, label: 'Cl 3p', key: null, derivation: null, decides: [], cannotVet: null, mine: null });
+    expect(JSON.stringify(await itemsFor(external))).not.toContain('6.10');
+    expect((await itemsFor(lead))[0]).toMatchObject({ key: '6.10', cannotVet: 'You made or changed this item. Somebody else has to vet it.' });
+    expect(codeOf(await write(lead, '6.10'))).toBe('not_allowed');
+    expect(codeOf(await vet(external, 'signed'))).toBe('conflict');
+  });
+
+  it('keeps what was worked as it was typed, and uncovers the key then', async () => {
+    expect(codeOf(await write(external, '6.1.0'))).toBe('invalid_request');
+    const { body } = await write(external, '6,10').expect(200);
+    // Slater's rules (J. C. Slater, Phys. Rev. 36, 57, 1930) for Cl 3p: 17 - (6 x 0.35 + 8 x 0.85 + 2 x 1.00) = 6.10.
+    expect(body).toMatchObject({ key: '6.10', mine: { text: '6,10', agrees: true } });
+    expect((body as VettingItem).decides.map(({ name, words }) => [name, words])).toContainEqual(['Roundings', '6.1, in full']);
+  });
+
+  it('asks for words when it is sent back, and signs with the name of who signs', async () => {
+    expect(codeOf(await vet(external, 'sent-back'))).toBe('invalid_request');
+    await vet(external, 'sent-back', 'Ask for two decimals only.').expect(200);
+    const { body } = await vet(external, 'signed').expect(200);
+    expect((body as VettingItem).vettings.map(({ outcome, isOwn }) => [outcome, isOwn])).toEqual([['signed', true], ['sent-back', true]]);
+    expect((await itemsFor(lead))[0]?.vettings[0]).toMatchObject({ outcome: 'signed', by: 'Daniel Ashgrove', isOwn: false });
+  });
+
+  it('a changed item is open again; changed back, its signature stands again', async () => {
+    await lead.put(`/api/items/${paper.items[0]}`).set('If-Match', '1').send(itemDraft('Cl', '3p', { marks: '2' })).expect(200);
+    expect((await itemsFor(external))[0]).toMatchObject({ vettings: [], mine: null, key: null });
+    expect(codeOf(await vet(external, 'signed'))).toBe('conflict');
+    await lead.put(`/api/items/${paper.items[0]}`).set('If-Match', '2').send(itemDraft()).expect(200);
+    expect((await itemsFor(external))[0]).toMatchObject({ mine: { text: '6,10' }, vettings: [{ outcome: 'signed' }, { outcome: 'sent-back' }] });
+  });
+
+  it('is not for readers', async () => {
+    await (await server.signInAs('readerOne')).get(`/api/sittings/${paper.sittingId}/vetting`).expect(403);
+  });
+});
