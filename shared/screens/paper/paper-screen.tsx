@@ -5,7 +5,7 @@ import { useItems, useMakeItem, useOrderItems } from '../../client/items';
 import { useSitting } from '../../client/sittings';
 import type { ItemView } from '../../contracts/items';
 import type { SittingView } from '../../contracts/sittings';
-import { Button } from '../../ui/button';
+import { Button, ButtonLink } from '../../ui/button';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
 import { useIsWide } from '../../ui/use-breakpoint';
@@ -90,6 +90,11 @@ function PaperPanes({ sitting, items, lockedAt, itemId }: PanesProps) {
           {trouble.message}
         </Text>
       ) : null}
+      <View style={{ padding: 12, gap: 8 }}>
+        <ButtonLink isSmall isWide icon="guard" href={`/sittings/${sitting.id}/vetting`} testID="to-vetting">
+          {words.vet}
+        </ButtonLink>
+      </View>
     </View>
   );
   if (items.length === 0) return <NoItems canChange={canChange} isAdding={make.isPending} message={trouble?.message ?? null} onAdd={add} />;

@@ -4,6 +4,7 @@ const many = (count: number, one: string, more: string): string => `${count.toLo
 
 /** The words of the item editor. */
 export const words = {
+  vet: 'Vet the paper',
   items: 'Items',
   itemsSummary: (count: number, marks: string) => `${many(count, 'item', 'items')}, ${marks} ${marks === '1' ? 'mark' : 'marks'}`,
   addItem: 'Add an item',
