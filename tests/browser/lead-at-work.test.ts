@@ -21,7 +21,7 @@ describe('a lead at work', () => {
     await page.keyboard.type(castPassword);
     await page.keyboard.press('Enter');
     await page.getByRole('heading', { name: 'Bench' }).waitFor();
-    expect(await page.getByText('CHM 214, Paper 2, spring sitting').count()).toBe(1);
+    await page.getByRole('group', { name: 'CHM 214, Paper 2, spring sitting' }).waitFor();
     await context.close();
   });
 
