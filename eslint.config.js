@@ -66,4 +66,15 @@ export default tseslint.config(
       ],
     },
   },
+  {
+    files: ['shared/client/**/*.{ts,tsx}', 'shared/screens/**/*.{ts,tsx}', 'shared/ui/**/*.{ts,tsx}'],
+    ignores: ['**/*.test.ts'],
+    rules: {
+      // A value of a contract brings the validator into the first load; enumerations have a file without it.
+      '@typescript-eslint/no-restricted-imports': [
+        'error',
+        { patterns: [{ regex: 'contracts/(?!enums$)', allowTypeImports: true, message: 'Import types only; values that screens need live in contracts/enums.' }] },
+      ],
+    },
+  },
 );

@@ -1,6 +1,6 @@
 import { and, asc, count, desc, eq, inArray, isNull, or, sql, type SQL } from 'drizzle-orm';
 import { heldStates } from '../../shared/contracts/enums';
-import type { LedgerChip, LedgerSort } from '../../shared/contracts/ledger';
+import type { LedgerChip, LedgerSort } from '../../shared/contracts/enums';
 import type { Database } from '../client';
 import {
   answer,

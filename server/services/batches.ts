@@ -1,7 +1,8 @@
 import { v7 as uuidv7 } from 'uuid';
 import { inTransaction } from '../../db/client';
 import { batchesOf, cancelSending, fileCounts, filesOfBatch, findBatch, insertBatch, pagesOfUploads, pageStateCounts, partsOf, setBatchState, type BatchRow, type UploadRow } from '../../db/queries/uploads';
-import { filesShown, type BatchSummary, type BatchView, type UploadView } from '../../shared/contracts/scans';
+import { filesShown } from '../../shared/contracts/enums';
+import type { BatchSummary, BatchView, UploadView } from '../../shared/contracts/scans';
 import type { GuardRole } from '../../shared/contracts/route';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';

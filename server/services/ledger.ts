@@ -1,7 +1,8 @@
 import { deskItems } from '../../db/queries/desk';
 import { heldOffsets, ledgerCounts, ledgerRows, readingsOfAnswers, uncoveredBy, type LedgerQuestion } from '../../db/queries/ledger';
 import { answerStates, heldStates } from '../../shared/contracts/enums';
-import type { getLedger, LedgerChip, LedgerRow } from '../../shared/contracts/ledger';
+import type { LedgerChip } from '../../shared/contracts/enums';
+import type { getLedger, LedgerRow } from '../../shared/contracts/ledger';
 import type { QueryOf, ResponseOf } from '../../shared/contracts/route';
 import { reasonInWords } from '../../shared/marking/reasons';
 import { scaleOf } from '../../shared/marking/scale';

@@ -1,5 +1,6 @@
 import { keepPreviousData, queryOptions, useMutation, useQueries, useQuery, useQueryClient, type QueryClient } from '@tanstack/react-query';
-import type { AnswerView, getAnswerHistory, getLedger, getTotals, LedgerChip, LedgerRow, LedgerSort, makeExport, RulingBody } from '../contracts/ledger';
+import type { LedgerChip, LedgerSort } from '../contracts/enums';
+import type { AnswerView, getAnswerHistory, getLedger, getTotals, LedgerRow, makeExport, RulingBody } from '../contracts/ledger';
 import type { ResponseOf } from '../contracts/route';
 import { api, apiUrl } from './api';
 import { progressQueryOptions } from './sittings';

@@ -80,3 +80,12 @@ export const auditActs = [
   'marks-exported',
 ] as const;
 export type AuditAct = (typeof auditActs)[number];
+
+/** The chips of the ledger: all, those that wait for the lead, or one state. */
+export const ledgerChips = ['all', 'to-rule', ...answerStates] as const;
+export type LedgerChip = (typeof ledgerChips)[number];
+export const ledgerSorts = ['candidate', 'item', 'state', 'value', 'mark'] as const;
+export type LedgerSort = (typeof ledgerSorts)[number];
+
+/** Rows of files sent back with a batch; those that need someone come first. */
+export const filesShown = 200;

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { answerStates, attendances, exportKinds, rulingKinds } from './enums';
+import { answerStates, attendances, exportKinds, ledgerChips, ledgerSorts, rulingKinds } from './enums';
 import { code, grains, idParams, instant, rev, uuid } from './parts';
 import { defineRoute } from './route';
 
@@ -32,12 +32,6 @@ export const ledgerRow = z.object({
   rev,
 });
 export type LedgerRow = z.infer<typeof ledgerRow>;
-
-/** The chips of the ledger: all, those that wait for the lead, or one state. */
-export const ledgerChips = ['all', 'to-rule', ...answerStates] as const;
-export type LedgerChip = (typeof ledgerChips)[number];
-export const ledgerSorts = ['candidate', 'item', 'state', 'value', 'mark'] as const;
-export type LedgerSort = (typeof ledgerSorts)[number];
 
 export const getLedger = defineRoute({
   method: 'get',

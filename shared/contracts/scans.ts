@@ -13,8 +13,6 @@ export const mostFileBytes = 64 * 1024 * 1024;
 export const mostFilesOfBatch = 5000;
 /** Pages of one file, as of a multi-page TIFF. */
 export const mostPagesOfFile = 100;
-/** Rows of files sent back with a batch; those that need someone come first. */
-export const filesShown = 200;
 
 const many = z.int().min(0);
 

@@ -1,5 +1,5 @@
 import type { LedgerQuestion } from '../../client/ledger';
-import { ledgerChips, ledgerSorts } from '../../contracts/ledger';
+import { ledgerChips, ledgerSorts } from '../../contracts/enums';
 
 export type Params = Readonly<Record<string, string | string[] | undefined>>;
 

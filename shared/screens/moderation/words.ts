@@ -1,5 +1,5 @@
 import type { AnswerState } from '../../contracts/enums';
-import type { LedgerChip } from '../../contracts/ledger';
+import type { LedgerChip } from '../../contracts/enums';
 import type { PairState } from '../../ui/pair-glyph';
 
 const many = (n: number): string => n.toLocaleString('en-GB');

@@ -1,6 +1,7 @@
 import { Image, View } from 'react-native';
 import { pagePictureUrl } from '../../client/pictures';
-import { filesShown, type BatchView } from '../../contracts/scans';
+import { filesShown } from '../../contracts/enums';
+import type { BatchView } from '../../contracts/scans';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
 import { words } from './words';
