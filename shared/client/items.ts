@@ -1,4 +1,5 @@
 import { keepPreviousData, queryOptions, useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
+import type { getItemBank } from '../contracts/item-bank';
 import type { getItem, ItemDraft, listItems, lockPaper, spotTest, workKey } from '../contracts/items';
 import type { ResponseOf } from '../contracts/route';
 import { api } from './api';
@@ -13,6 +14,9 @@ export const itemsQueryOptions = (sittingId: string) =>
     queryKey: ['items', sittingId],
     queryFn: ({ signal }) => api<ItemList>(`/sittings/${sittingId}/items`, { signal }),
   });
+
+export const useItemBank = (sittingId: string) =>
+  useQuery({ queryKey: ['item-bank', sittingId], staleTime: staleTimes.steady, queryFn: ({ signal }) => api<ResponseOf<typeof getItemBank>>(`/sittings/${sittingId}/item-bank`, { signal }) });
 
 export const useItems = (sittingId: string) => useQuery(itemsQueryOptions(sittingId));
 

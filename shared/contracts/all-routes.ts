@@ -1,5 +1,6 @@
 import { classListRoutes } from './class-list';
 import { deskRoutes } from './desk';
+import { itemBankRoutes } from './item-bank';
 import { itemRoutes } from './items';
 import { layoutRoutes } from './layouts';
 import { ledgerRoutes } from './ledger';
@@ -21,6 +22,7 @@ export const allRoutes: Readonly<Record<string, RouteContract>> = {
   ...sittingRoutes,
   ...progressRoutes,
   ...itemRoutes,
+  ...itemBankRoutes,
   ...classListRoutes,
   ...layoutRoutes,
   ...scanRoutes,

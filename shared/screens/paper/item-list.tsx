@@ -17,6 +17,7 @@ interface ItemListProps {
   readonly onChoose: (id: string) => void;
   readonly onOrder: (ids: readonly string[]) => void;
   readonly onAdd: () => void;
+  readonly onBank: () => void;
 }
 
 interface Drag {
@@ -33,7 +34,7 @@ const movedTo = (ids: readonly string[], from: number, to: number): string[] => 
 };
 
 /** The items of the paper: number, electron, key, marks. A row is moved by its grip, or by Alt with the arrow keys. */
-export function ItemList({ items, chosen, canChange, isAdding, onChoose, onOrder, onAdd }: ItemListProps) {
+export function ItemList({ items, chosen, canChange, isAdding, onChoose, onOrder, onAdd, onBank }: ItemListProps) {
   const colors = useColors();
   const [drag, setDrag] = useState<Drag | null>(null);
   const hasKeyboard = useHasKeyboard();
@@ -113,6 +114,9 @@ export function ItemList({ items, chosen, canChange, isAdding, onChoose, onOrder
         <View style={{ paddingHorizontal: 12, paddingVertical: 10, gap: 6, alignItems: 'flex-start' }}>
           <Button kind="text" icon="plus" isBusy={isAdding} onPress={onAdd} testID="add-item">
             {words.addItem}
+          </Button>
+          <Button kind="text" icon="takeBack" onPress={onBank} testID="item-bank">
+            {words.bank.open}
           </Button>
           {items.length > 1 && hasKeyboard ? (
             <Text variant="micro" tone="ink3" style={{ paddingHorizontal: 8 }}>

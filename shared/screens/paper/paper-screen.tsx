@@ -1,3 +1,4 @@
+import { useState } from 'react';
 import { useRouter } from 'expo-router';
 import { v7 as uuidv7 } from 'uuid';
 import { View } from 'react-native';
@@ -12,6 +13,7 @@ import { useIsWide } from '../../ui/use-breakpoint';
 import { InSitting } from '../in-sitting';
 import { QueryState } from '../query-state';
 import { momentText } from '../times';
+import { BankDialog } from './bank-dialog';
 import { ItemEditor } from './item-editor';
 import { ItemList } from './item-list';
 import { ItemReader } from './item-reader';
@@ -63,6 +65,7 @@ function PaperPanes({ sitting, items, lockedAt, itemId }: PanesProps) {
   const colors = useColors();
   const isWide = useIsWide();
   const router = useRouter();
+  const [isBankOpen, setBankOpen] = useState(false);
   const make = useMakeItem(sitting.id);
   const order = useOrderItems(sitting.id);
   const isLead = sitting.roles.includes('lead');
@@ -84,7 +87,8 @@ function PaperPanes({ sitting, items, lockedAt, itemId }: PanesProps) {
   const trouble = make.error ?? order.error;
   const list = (
     <View style={{ flex: 1 }}>
-      <ItemList items={items} chosen={open?.id ?? null} canChange={canChange} isAdding={make.isPending} onChoose={choose} onOrder={(ids) => order.mutate(ids)} onAdd={add} />
+      <ItemList items={items} chosen={open?.id ?? null} canChange={canChange} isAdding={make.isPending} onChoose={choose} onOrder={(ids) => order.mutate(ids)} onAdd={add} onBank={() => setBankOpen(true)} />
+      {isBankOpen ? <BankDialog sittingId={sitting.id} onClose={() => setBankOpen(false)} /> : null}
       {trouble ? (
         <Text variant="small" tone="methyl" live="polite" style={{ padding: 16 }}>
           {trouble.message}

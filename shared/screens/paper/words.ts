@@ -5,6 +5,19 @@ const many = (count: number, one: string, more: string): string => `${count.toLo
 /** The words of the item editor. */
 export const words = {
   vet: 'Vet the paper',
+  bank: {
+    open: 'From an earlier paper',
+    title: 'Items of earlier papers',
+    find: 'Find',
+    findHelp: 'Element, electron, or words of the question.',
+    none: 'No other sitting of this course has an item yet.',
+    noneFound: 'No item fits.',
+    usedIn: (titles: readonly string[]) => `Used in ${titles.join('; ')}`,
+    add: (label: string) => `Add ${label}`,
+    marks: (marks: string) => `[${marks}]`,
+    done: 'Done',
+    added: (count: number) => (count === 0 ? '' : count === 1 ? 'One item was added at the end.' : `${count} items were added at the end.`),
+  },
   items: 'Items',
   itemsSummary: (count: number, marks: string) => `${many(count, 'item', 'items')}, ${marks} ${marks === '1' ? 'mark' : 'marks'}`,
   addItem: 'Add an item',
