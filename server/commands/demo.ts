@@ -40,6 +40,7 @@ function addItems(context: Context, lead: Actor, sittingId: string, items: reado
       marks: marksText(item.maxGrains),
       roundings: { downToDecimals: 1, truncation: false },
       bands: [],
+      alternatives: [],
       crossedOut: 'ask',
       twoAnswers: 'ask',
     };

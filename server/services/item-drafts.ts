@@ -1,16 +1,17 @@
 import { occupiedElectrons } from '../../shared/chemistry/configurations';
 import { divide, exactDecimals, fromFractionText, multiply, toDecimals, toFractionText, whole, type Exact } from '../../shared/chemistry/exact';
 import type { ProblemCode } from '../../shared/chemistry/result';
+import { valuesByOtherConventions } from '../../shared/chemistry/other-conventions';
 import { proposedStem } from '../../shared/chemistry/stem';
 import { work, type Worked } from '../../shared/chemistry/work';
-import type { BandDraft, ItemDraft, ItemProblem, WorkedDraft } from '../../shared/contracts/items';
+import type { AlternativeDraft, BandDraft, ItemDraft, ItemProblem, WorkedDraft } from '../../shared/contracts/items';
 import { bandRange } from '../../shared/marking/bands';
 import { marksText } from '../../shared/marking/grains';
 import { itemLabel } from '../../shared/marking/item-label';
 import { readAnswer } from '../../shared/marking/read-answer';
 import { roundings } from '../../shared/marking/rounding';
 import { scaleOf } from '../../shared/marking/scale';
-import type { Asked, Band, ItemScheme } from '../../shared/marking/scheme';
+import type { Alternative, Asked, Band, ItemScheme } from '../../shared/marking/scheme';
 import { schemeProblems } from '../../shared/marking/scheme-checks';
 import { readMarks } from '../../shared/marking/typed-marks';
 
@@ -51,6 +52,24 @@ function readBand(band: BandDraft, index: number, refusals: ItemProblem[]): Band
   return { name: band.name, kind: band.kind, width: toFractionText(width), grains: marks.grains };
 }
 
+function readAlternative(draft: AlternativeDraft, index: number, asked: Asked, units: readonly string[], refusals: ItemProblem[]): Alternative | null {
+  const at = (field: string, message: string) => void refusals.push({ path: `alternatives.${index}.${field}`, message });
+  const marks = readMarks(draft.marks);
+  if (!marks.ok) at('marks', marks.message);
+  if (draft.name.trim() === '') at('name', 'Name the alternative.');
+  if (draft.convention === null && draft.reason.trim() === '') at('reason', 'Say why this value is accepted.');
+  if (!marks.ok) return null;
+  const rest = { name: draft.name, grains: marks.grains, reason: draft.reason };
+  if (draft.convention !== null) {
+    const worked = work({ ...asked, convention: draft.convention });
+    if (!worked.ok) at('convention', worked.problem.message);
+    return worked.ok ? { ...rest, convention: draft.convention, value: toFractionText(worked.value.value), text: worked.value.text, decimals: worked.value.decimals } : null;
+  }
+  const read = readAnswer(draft.value.trim(), units);
+  if (!read.ok) at('value', read.unfinished ? 'Write a value.' : read.message);
+  return read.ok ? { ...rest, value: toFractionText(read.value), text: draft.value.trim(), decimals: read.decimals } : null;
+}
+
 /** Marks are typed as marks: a sentence about `bands.1.grains` belongs to the field `bands.1.marks`. */
 const atField = ({ path, message }: ItemProblem): ItemProblem => ({ path: path.replace(/maxGrains$/, 'marks').replace(/grains$/, 'marks').replace(/^key$/, 'decimals'), message });
 
@@ -76,6 +95,7 @@ export function readDraft(draft: ItemDraft): ReadDraft {
   draft.bands.forEach((band, index) => {
     if (band.name.trim() === '') refusals.push({ path: `bands.${index}.name`, message: 'Name the band.' });
   });
+  const alternatives = draft.alternatives.map((alternative, index) => readAlternative(alternative, index, asked, [], refusals));
   const maxGrains = marks.ok ? marks.grains : null;
   if (!worked.ok || maxGrains === null || refusals.length > 0) {
     return { scheme: null, worked: worked.ok ? worked.value : null, maxGrains, refusals, problems: [] };
@@ -88,7 +108,7 @@ export function readDraft(draft: ItemDraft): ReadDraft {
     key: { value: toFractionText(value), text: toDecimals(value, draft.decimals), decimals: draft.decimals },
     units: [],
     roundings: draft.roundings,
-    alternatives: [],
+    alternatives: alternatives.filter((alternative) => alternative !== null),
     bands: bands.filter((band) => band !== null),
     crossedOut: draft.crossedOut,
     twoAnswers: draft.twoAnswers,
@@ -130,6 +150,8 @@ export function workDraft(draft: ItemDraft): WorkedDraft {
     scale: drawable ? scaleOf(scheme) : null,
     roundings: scheme ? roundingTexts(scheme) : [],
     bands: scheme ? scheme.bands.map((band) => rangeTexts(band, scheme.key)) : draft.bands.map(() => null),
+    alternatives: draft.alternatives.map((_alternative, index) => scheme?.alternatives[index]?.text ?? null),
+    others: valuesByOtherConventions(draft.asked).map(({ convention, name, text }) => ({ convention, name, text })),
     electrons: electrons.ok ? [...electrons.value] : [],
     proposedPrompt: proposedStem(draft.asked, draft.decimals),
     maxGrains,
@@ -155,6 +177,7 @@ export function draftOf(scheme: ItemScheme, prompt: string): ItemDraft {
     marks: marksText(scheme.maxGrains),
     roundings: scheme.roundings,
     bands: scheme.bands.map((band) => ({ name: band.name, kind: band.kind, width: widthText(band, decimals), marks: marksText(band.grains) })),
+    alternatives: scheme.alternatives.map(({ name, convention = null, text, grains, reason }) => ({ name, convention: convention === 'typed' ? null : convention, value: convention === null ? text : '', marks: marksText(grains), reason })),
     crossedOut: scheme.crossedOut,
     twoAnswers: scheme.twoAnswers,
   };

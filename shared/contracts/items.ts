@@ -19,6 +19,19 @@ const bandDraft = z.strictObject({
 });
 export type BandDraft = z.infer<typeof bandDraft>;
 
+/** Conventions whose value of the same question can be accepted beside the key. */
+export const otherConventions = ['slater', 'slater-035-in-1s', 'slater-d-at-1', 'core-count', 'scf', 'ionisation-energy'] as const;
+
+const alternativeDraft = z.strictObject({
+  name: z.string().trim().min(1, 'Name the alternative.').max(60),
+  /** The convention that gives the value; null for a value the lead adds, as typed. */
+  convention: z.enum(otherConventions).nullable(),
+  value: z.string().max(32),
+  marks: z.string().max(16),
+  reason: z.string().trim().max(300),
+});
+export type AlternativeDraft = z.infer<typeof alternativeDraft>;
+
 /** What the lead decides about an item, as typed. The key is never among it: the server computes it. */
 export const itemDraft = z.strictObject({
   asked: z.strictObject({
@@ -35,6 +48,7 @@ export const itemDraft = z.strictObject({
   marks: z.string().max(16),
   roundings: z.strictObject({ downToDecimals: z.int().min(0).max(4).nullable(), truncation: z.boolean() }),
   bands: z.array(bandDraft).max(8),
+  alternatives: z.array(alternativeDraft).max(8).default([]),
   crossedOut: z.enum(answerPolicies),
   twoAnswers: z.enum(answerPolicies),
 });
@@ -52,6 +66,10 @@ export const workedDraft = z.object({
   /** Accepted roundings as they would be written. */
   roundings: z.array(z.string()),
   bands: z.array(z.object({ from: z.string(), to: z.string() }).nullable()),
+  /** The value of each alternative as printed; null while it has none. */
+  alternatives: z.array(z.string().nullable()),
+  /** What other conventions make of the same question, where they differ. */
+  others: z.array(z.object({ convention: z.enum(otherConventions), name: z.string(), text: z.string() })),
   /** Subshells that hold an electron of this species. */
   electrons: z.array(z.string()),
   proposedPrompt: z.string(),
@@ -137,7 +155,7 @@ export const workKey = defineRoute({
   path: '/keys',
   summary: 'Work a draft: key, derivation, proposed wording, scale, and what is wrong, field by field. Stores nothing.',
   access: leads,
-  body: z.strictObject({ sittingId: uuid, draft: itemDraft.extend({ prompt: z.string().max(600).nullable(), bands: z.array(bandDraft.extend({ name: z.string().max(60) })).max(8) }) }),
+  body: z.strictObject({ sittingId: uuid, draft: itemDraft.extend({ prompt: z.string().max(600).nullable(), bands: z.array(bandDraft.extend({ name: z.string().max(60) })).max(8), alternatives: z.array(alternativeDraft.extend({ name: z.string().max(60) })).max(8).default([]) }) }),
   response: workedDraft,
 });
 

@@ -1,5 +1,6 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import type { Agent } from 'supertest';
+import type { ItemDraft } from '../../shared/contracts/items';
 import { auditEntry, itemScheme } from '../../db/schema';
 import { buildPaper, itemDraft, layoutFor, type BuiltPaper } from '../support/paper';
 import { startTestServer, type TestServer } from '../support/test-server';
@@ -200,5 +201,19 @@ describe('building a paper', () => {
       expect(other.body.id).toBe(one.body.id);
       expect(await items()).toHaveLength(3);
     });
+  });
+
+  it('accepts what another convention gives, computed by the server, and a value added by hand with a reason', async () => {
+    const made = await lead.post(`/api/sittings/${paper.sittingId}/items`).send(itemDraft('Cl', '3p', { alternatives: [{ name: 'screening constants', convention: 'scf', value: '99', marks: '2', reason: '' }] })).expect(201);
+    const { id, worked, draft } = made.body as { id: string; worked: { alternatives: string[]; others: { convention: string; text: string }[] }; draft: ItemDraft };
+    // E. Clementi and D. L. Raimondi, J. Chem. Phys. 38, 2686 (1963): 3p of Cl 6.1161.
+    expect(worked.alternatives).toEqual(['6.1161']);
+    // Core count, general chemistry textbooks (from memory): 17 - 10 = 7.
+    expect(worked.others.find(({ convention }) => convention === 'core-count')?.text).toBe('7.00');
+    expect(draft.alternatives[0]).toMatchObject({ convention: 'scf', value: '' });
+    const spot = await lead.post(`/api/items/${id}/spot-test`).send({ text: '6.1161' }).expect(200);
+    expect(spot.body).toMatchObject({ rule: 'alternative', grains: 2400 });
+    const refused = await lead.post(`/api/sittings/${paper.sittingId}/items`).send(itemDraft('Cl', '3p', { alternatives: [{ name: 'mine', convention: null, value: '6.4.0', marks: '1', reason: '' }] })).expect(400);
+    expect(Object.keys((refused.body as { error: { fields: object } }).error.fields)).toEqual(['alternatives.0.reason', 'alternatives.0.value']);
   });
 });

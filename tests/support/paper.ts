@@ -17,6 +17,7 @@ export const itemDraft = (symbol = 'Cl', electron = '3p', changes: Partial<ItemD
   marks: '3',
   roundings: { downToDecimals: 1, truncation: false },
   bands: [],
+  alternatives: [],
   crossedOut: 'ask',
   twoAnswers: 'ask',
   ...changes,

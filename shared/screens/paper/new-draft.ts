@@ -22,6 +22,7 @@ export function newDraft(last: ItemDraft | undefined): ItemDraft {
     marks: last?.marks ?? '3',
     roundings: { downToDecimals: 1, truncation: false },
     bands: [],
+    alternatives: [],
     crossedOut: last?.crossedOut ?? 'ask',
     twoAnswers: last?.twoAnswers ?? 'ask',
   };

@@ -9,6 +9,7 @@ import { Select } from '../../ui/select';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
 import { MarkStand } from '../../ui/mark-stand';
+import { Alternatives } from './alternatives';
 import { nested } from './band-order';
 import { BandRow } from './band-row';
 import { words } from './words';
@@ -143,6 +144,7 @@ export function WhatCounts({ draft, worked, problemAt, onChange }: WhatCountsPro
           </View>
         ) : null}
       </View>
+      <Alternatives draft={draft} worked={worked} problemAt={problemAt} onChange={onChange} />
       <CodePolicies draft={draft} onChange={onChange} />
     </View>
   );

@@ -87,6 +87,18 @@ export const words = {
     missingFigures: 'The wording does not say how many decimals are wanted.',
   },
   key: { title: 'Key, worked', aside: 'computed, not typed', none: 'No key can be computed yet.' },
+  alternatives: {
+    title: 'Accepted alternatives',
+    aside: 'with the same roundings as the key',
+    accept: (name: string, text: string) => `Accept ${text}, ${name}`,
+    add: 'A value by hand',
+    other: 'another value',
+    name: 'Name',
+    value: 'Value',
+    reason: 'Reason',
+    reasonHelp: 'Asked for a value added by hand.',
+    remove: (name: string) => `Remove ${name}`,
+  },
   counts: {
     title: 'What counts',
     aside: 'all are tried, the highest mark wins',

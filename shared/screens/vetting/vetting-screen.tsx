@@ -64,7 +64,7 @@ function Vetting({ sittingId, items }: { sittingId: string; items: readonly Vett
   return (
     <View style={{ flex: 1, minHeight: 0, flexDirection: isWide ? 'row' : 'column' }}>
       {list}
-      <ScrollView style={{ flex: 1 }} contentContainerStyle={{ flexGrow: 1 }}>
+      <ScrollView {...({ tabIndex: 0, role: 'group', 'aria-label': words.item(item.number, item.label) } as object)} style={{ flex: 1 }} contentContainerStyle={{ flexGrow: 1 }}>
         <VettingItemPane key={item.itemId} sittingId={sittingId} item={item} next={nextUnsigned(items, item.itemId)} onNext={setChosen} />
       </ScrollView>
     </View>
