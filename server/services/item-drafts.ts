@@ -4,7 +4,7 @@ import type { ProblemCode } from '../../shared/chemistry/result';
 import { valuesByOtherConventions } from '../../shared/chemistry/other-conventions';
 import { proposedStem } from '../../shared/chemistry/stem';
 import { work, type Worked } from '../../shared/chemistry/work';
-import type { AlternativeDraft, BandDraft, ItemDraft, ItemProblem, WorkedDraft } from '../../shared/contracts/items';
+import { askedConventions, type AlternativeDraft, type BandDraft, type ItemDraft, type ItemProblem, type WorkedDraft } from '../../shared/contracts/items';
 import { bandRange } from '../../shared/marking/bands';
 import { marksText } from '../../shared/marking/grains';
 import { itemLabel } from '../../shared/marking/item-label';
@@ -168,10 +168,11 @@ function widthText({ kind, width }: Band, decimals: number): string {
 /** A stored scheme as the editor's draft; the wording is null where it is the proposed one. */
 export function draftOf(scheme: ItemScheme, prompt: string): ItemDraft {
   const { symbol, charge, electron, quantity, convention } = scheme.asked;
-  if ((quantity !== 'zeff' && quantity !== 'sigma') || convention !== 'slater') throw new Error(`The editor has no fields for ${quantity} under ${convention}.`);
+  const known = askedConventions.find((name) => name === convention);
+  if ((quantity !== 'zeff' && quantity !== 'sigma') || known === undefined) throw new Error(`The editor has no fields for ${quantity} under ${convention}.`);
   const decimals = scheme.key.decimals;
   return {
-    asked: { symbol, charge, electron, quantity, convention },
+    asked: { symbol, charge, electron, quantity, convention: known },
     decimals,
     prompt: prompt === proposedStem(scheme.asked, decimals) ? null : prompt,
     marks: marksText(scheme.maxGrains),

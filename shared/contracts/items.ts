@@ -8,7 +8,8 @@ const overseers = { who: 'course', roles: ['lead', 'external'] } as const;
 export const bandKinds = ['absolute', 'relative', 'decimal-places', 'significant-figures'] as const;
 export const answerPolicies = ['ask', 'none'] as const;
 export const askedQuantities = ['zeff', 'sigma'] as const;
-export const askedConventions = ['slater'] as const;
+/** Conventions whose keys are short decimals, so that a question can ask for all of them. */
+export const askedConventions = ['slater', 'slater-035-in-1s', 'slater-d-at-1', 'core-count', 'scf'] as const;
 
 const bandDraft = z.strictObject({
   name: z.string().trim().min(1, 'Name the band.').max(60),

@@ -40,10 +40,10 @@ export function Derivation({ groups, nuclearCharge, sigma, zeff, asked, isSlip =
           <Column key={group.subshells.map(({ label }) => label).join(' ')} group={group} hasStruck={hasStruck} />
         ))}
       </View>
-      <View style={{ height: 1.5, backgroundColor: colors.ink2, marginVertical: 6 }} />
+      {groups.length > 0 ? <View style={{ height: 1.5, backgroundColor: colors.ink2, marginVertical: 6 }} /> : null}
       <Line isKey={asked === 'sigma'} isSlip={isSlip} value={sigma}>
         <Symbol>σ</Symbol>
-        <Text tone="ink2"> = sum of the columns</Text>
+        <Text tone="ink2">{groups.length > 0 ? ' = sum of the columns' : ' from the table'}</Text>
       </Line>
       <Line isKey={asked === 'zeff'} isSlip={isSlip} value={zeff}>
         <Zeff />

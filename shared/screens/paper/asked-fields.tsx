@@ -22,6 +22,8 @@ interface AskedFieldsProps {
 const charges = [-4, -3, -2, -1, 0, 1, 2, 3, 4, 5, 6, 7, 8] as const;
 const decimals = ['0', '1', '2', '3', '4'] as const;
 
+const conventionOrder = ['slater', 'slater-035-in-1s', 'slater-d-at-1', 'core-count', 'scf'] as const satisfies readonly ItemDraft['asked']['convention'][];
+
 const chargeText = (charge: number): string => (charge > 0 ? `+${charge}` : charge < 0 ? `−${-charge}` : '0');
 
 /** The charges that the rules for ions reach, and the one asked for whether they reach it or not. */
@@ -53,12 +55,13 @@ export function AskedFields({ draft, problemAt, onChange }: AskedFieldsProps) {
           />
         </View>
         <View style={{ flexGrow: 2, flexBasis: 116 }}>
-          <Text variant="label" style={{ marginBottom: 2 }}>
-            {words.asked.convention}
-          </Text>
-          <View style={{ minHeight: size.field, justifyContent: 'center' }}>
-            <Text>{words.asked.slater}</Text>
-          </View>
+          <Select
+            label={words.asked.convention}
+            value={asked.convention}
+            options={conventionOrder.map((value) => ({ value, label: words.asked.conventions[value] }))}
+            onChange={(convention) => onChange({ ...draft, asked: { ...asked, convention }, decimals: convention === 'scf' ? 4 : asked.convention === 'scf' ? 2 : draft.decimals }, 'convention')}
+            testID="convention"
+          />
         </View>
         <View style={{ flexGrow: 1, flexBasis: 76 }}>
           <Vessel

@@ -83,7 +83,7 @@ export function ItemList({ items, chosen, canChange, isAdding, onChoose, onOrder
   });
 
   return (
-    <View style={{ flex: 1 }}>
+    <View>
       <View style={{ paddingHorizontal: 16, paddingVertical: 18, borderBottomWidth: 1, borderColor: colors.hair }}>
         <Text variant="head" level={2}>
           {words.items}
@@ -115,7 +115,7 @@ export function ItemList({ items, chosen, canChange, isAdding, onChoose, onOrder
           <Button kind="text" icon="plus" isBusy={isAdding} onPress={onAdd} testID="add-item">
             {words.addItem}
           </Button>
-          <Button kind="text" icon="takeBack" onPress={onBank} testID="item-bank">
+          <Button kind="text" isSmall icon="tray" onPress={onBank} testID="item-bank">
             {words.bank.open}
           </Button>
           {items.length > 1 && hasKeyboard ? (

@@ -31,7 +31,7 @@ export function ItemReader({ item, line, explanation, canTry, back }: ItemReader
   const spot = useSpot(item.id, null);
   const facts: readonly (readonly [string, string])[] = [
     [words.asked.quantity, words.asked.quantityNames[draft.asked.quantity]],
-    [words.asked.convention, words.asked.slater],
+    [words.asked.convention, words.asked.conventions[draft.asked.convention]],
     [words.asked.element, worked.label],
     [words.asked.decimals, words.counts.decimalsOf(draft.decimals)],
   ];

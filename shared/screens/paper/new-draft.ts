@@ -16,8 +16,8 @@ export function newDraft(last: ItemDraft | undefined): ItemDraft {
   const next = elementByNumber(before?.ok ? before.value.number + 1 : lithium);
   const symbol = next.ok ? next.value.symbol : 'C';
   return {
-    asked: { symbol, charge: 0, electron: outermostElectron(symbol), quantity: last?.asked.quantity ?? 'zeff', convention: 'slater' },
-    decimals: 2,
+    asked: { symbol, charge: 0, electron: outermostElectron(symbol), quantity: last?.asked.quantity ?? 'zeff', convention: last?.asked.convention ?? 'slater' },
+    decimals: last?.decimals ?? 2,
     prompt: null,
     marks: last?.marks ?? '3',
     roundings: { downToDecimals: 1, truncation: false },

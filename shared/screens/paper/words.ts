@@ -6,7 +6,7 @@ const many = (count: number, one: string, more: string): string => `${count.toLo
 export const words = {
   vet: 'Vet the paper',
   bank: {
-    open: 'From an earlier paper',
+    open: 'Earlier items',
     title: 'Items of earlier papers',
     find: 'Find',
     findHelp: 'Element, electron, or words of the question.',
@@ -62,7 +62,13 @@ export const words = {
     quantities: { zeff: 'Zeff', sigma: 'σ' },
     quantityNames: { zeff: 'Z_eff, the effective charge', sigma: 'σ, the screening constant' },
     convention: 'Convention',
-    slater: 'Slater’s rules',
+    conventions: {
+      slater: 'Slater’s rules',
+      'slater-035-in-1s': 'Slater’s rules, 0.35 in 1s as well',
+      'slater-d-at-1': 'Slater’s rules, d and f below at 1.00',
+      'core-count': 'Core count',
+      scf: 'SCF screening constants',
+    },
     element: 'Element',
     elementValue: (symbol: string, number: number) => `${symbol}, Z = ${number}`,
     charge: 'Charge',
