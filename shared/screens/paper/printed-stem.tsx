@@ -7,6 +7,7 @@ import { useColors } from '../../ui/theme';
 import { radius } from '../../ui/tokens';
 import { Vessel } from '../../ui/vessel';
 import { ChemText } from '../chem-text';
+import { stemWarnings } from './stem-warnings';
 import { words } from './words';
 
 interface PrintedStemProps {
@@ -17,8 +18,6 @@ interface PrintedStemProps {
   readonly canChange: boolean;
   readonly onChange: (draft: ItemDraft, field: string) => void;
 }
-
-const saysDecimals = (prompt: string): boolean => /decimal|whole number|significant/i.test(prompt);
 
 /** The question as it will be printed: proposed from the item until the lead words it. */
 export function PrintedStem({ number, draft, worked, error, canChange, onChange }: PrintedStemProps) {
@@ -70,10 +69,16 @@ export function PrintedStem({ number, draft, worked, error, canChange, onChange 
           maxLength={600}
           onChange={(text) => onChange({ ...draft, prompt: text === worked.proposedPrompt ? null : text }, 'prompt')}
           error={error}
-          help={isOwn && !saysDecimals(prompt) ? words.printed.missingFigures : undefined}
           testID="prompt"
         />
       ) : null}
+      {isOwn
+        ? stemWarnings(prompt, draft).map((warning) => (
+            <Text key={warning} variant="small" weight={500} tone="iodine" live="polite">
+              {words.printed.missing[warning]}
+            </Text>
+          ))
+        : null}
     </View>
   );
 }

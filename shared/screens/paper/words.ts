@@ -90,7 +90,11 @@ export const words = {
     reset: 'Back to the proposed wording',
     label: 'The question',
     change: 'Word it yourself',
-    missingFigures: 'The wording does not say how many decimals are wanted.',
+    missing: {
+      figures: 'The wording does not say how many decimals are wanted.',
+      convention: 'The wording does not name the convention: other courses teach others.',
+      element: 'The wording does not name the element and the electron that are asked for.',
+    },
   },
   key: { title: 'Key, worked', aside: 'computed, not typed', none: 'No key can be computed yet.' },
   alternatives: {

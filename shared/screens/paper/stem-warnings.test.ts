@@ -1,0 +1,18 @@
+import { expect, it } from 'vitest';
+import { proposedStem } from '../../chemistry/stem';
+import type { ItemDraft } from '../../contracts/items';
+import { stemWarnings } from './stem-warnings';
+
+const asked = (convention: ItemDraft['asked']['convention']): ItemDraft['asked'] => ({ symbol: 'Cl', charge: 0, electron: '3p', quantity: 'zeff', convention });
+
+it('finds nothing missing in what the server proposes, under any convention', () => {
+  for (const convention of ['slater', 'slater-035-in-1s', 'slater-d-at-1', 'core-count', 'scf'] as const) {
+    expect(stemWarnings(proposedStem(asked(convention), 2), { asked: asked(convention) }), convention).toEqual([]);
+  }
+});
+
+it('names what a wording leaves out', () => {
+  expect(stemWarnings('Find Z_eff for a 3p electron of Cl.', { asked: asked('slater') })).toEqual(['figures', 'convention']);
+  expect(stemWarnings('By Slater’s rules, how strongly is it held? Two decimals.', { asked: asked('slater') })).toEqual(['element']);
+  expect(stemWarnings('By Slater’s rules, Cl 3p, to two decimals.', { asked: asked('scf') })).toEqual(['convention']);
+});

@@ -1,0 +1,24 @@
+import type { ItemDraft } from '../../contracts/items';
+
+export type StemWarning = 'figures' | 'convention' | 'element';
+
+const saysFigures = /decimal|whole number|significant|figure/i;
+const namesConvention: Readonly<Record<ItemDraft['asked']['convention'], RegExp>> = {
+  slater: /slater/i,
+  'slater-035-in-1s': /slater[^]*0\.35/i,
+  'slater-d-at-1': /slater[^]*(1\.00|by 1\b)/i,
+  'core-count': /core|shells? below/i,
+  scf: /scf|clementi|self-consistent/i,
+};
+
+/**
+ * What a wording of one's own leaves out that decides the mark: the figures wanted, the convention, the electron asked for.
+ * "Find Z_eff for a 3p electron of Cl" lacks figures and convention.
+ */
+export function stemWarnings(prompt: string, { asked }: Pick<ItemDraft, 'asked'>): StemWarning[] {
+  const warnings: StemWarning[] = [];
+  if (!saysFigures.test(prompt)) warnings.push('figures');
+  if (!namesConvention[asked.convention].test(prompt)) warnings.push('convention');
+  if (!prompt.includes(asked.electron) || !prompt.includes(asked.symbol)) warnings.push('element');
+  return warnings;
+}
