@@ -128,6 +128,7 @@ export function answerView(context: Context, actor: Actor, answerId: string): An
     score: scoreView(context, head),
     scheme: {
       key: scheme.body.key.text,
+      quantity: scheme.body.asked.quantity,
       convention: scheme.body.asked.convention,
       scale: scaleOf(scheme.body),
       derivation: worked.ok ? worked.value.derivation : null,

@@ -29,6 +29,7 @@ function viewOf({ db }: Context, actor: Actor, { item, scheme }: DraftedItem): V
     itemId: item.id,
     number: item.number,
     label: itemLabel(scheme.asked),
+    quantity: scheme.asked.quantity,
     prompt: item.prompt,
     maxGrains: item.maxGrains,
     cannotVet: made ? 'You made or changed this item. Somebody else has to vet it.' : null,

@@ -106,6 +106,7 @@ export const answerView = z.object({
   score: z.object({ grains, why: reason, schemeOrdinal: z.int() }).nullable(),
   scheme: z.object({
     key: z.string(),
+    quantity: z.string(),
     convention: z.string(),
     /** Data for the scale and the worked key, as the item editor draws them. */
     scale: z.unknown(),

@@ -9,6 +9,7 @@ export const vettingItem = z.object({
   itemId: uuid,
   number: z.int(),
   label: z.string(),
+  quantity: z.string(),
   prompt: z.string(),
   maxGrains: grains,
   /** Why this person cannot vet it, or null. */

@@ -48,7 +48,7 @@ interface StateProps {
 }
 
 /** Nothing here: a broken vessel, a head, one sentence, one way on. */
-export function Empty({ head, children, action }: StateProps) {
+export function Empty(said: StateProps) {
   const colors = useColors();
   return (
     <View style={{ flexDirection: 'row', gap: 20, padding: 24, maxWidth: 620 }}>
@@ -56,33 +56,31 @@ export function Empty({ head, children, action }: StateProps) {
         <Path d="M8,3 V52 a11,11 0 0 0 11,11 H37 a11,11 0 0 0 11,-11 V3" stroke={colors.ink3} strokeWidth={1.5} strokeDasharray="3 3.5" />
         <Path d="M8,40 Q28,50 48,40" stroke={colors.ink3} strokeWidth={1.5} strokeDasharray="3 3.5" />
       </Svg>
-      <View style={{ flex: 1, gap: 6, alignItems: 'flex-start' }}>
-        <Text variant="head" level={2}>
-          {head}
-        </Text>
-        <Text variant="small" tone="ink2">
-          {children}
-        </Text>
-        {action ? <View style={{ marginTop: 8 }}>{action}</View> : null}
-      </View>
+      <Said {...said} />
     </View>
   );
 }
 
 /** Something did not come or did not go: what happened, what is safe, one button. */
-export function Failed({ head, children, action }: StateProps) {
+export function Failed(said: StateProps) {
   return (
     <View role="alert" style={{ flexDirection: 'row', gap: 16, padding: 24, maxWidth: 620 }}>
       <BrokenSign size={28} />
-      <View style={{ flex: 1, gap: 6, alignItems: 'flex-start' }}>
-        <Text variant="head" level={2}>
-          {head}
-        </Text>
-        <Text variant="small" tone="ink2">
-          {children}
-        </Text>
-        {action ? <View style={{ marginTop: 8 }}>{action}</View> : null}
-      </View>
+      <Said {...said} />
+    </View>
+  );
+}
+
+function Said({ head, children, action }: StateProps) {
+  return (
+    <View style={{ flex: 1, gap: 6, alignItems: 'flex-start' }}>
+      <Text variant="head" level={2}>
+        {head}
+      </Text>
+      <Text variant="small" tone="ink2">
+        {children}
+      </Text>
+      {action ? <View style={{ marginTop: 8 }}>{action}</View> : null}
     </View>
   );
 }

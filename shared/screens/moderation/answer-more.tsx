@@ -4,7 +4,6 @@ import { useAnswerHistory } from '../../client/ledger';
 import type { AnswerView, HistoryAct } from '../../contracts/ledger';
 import { marksText } from '../../marking/grains';
 import { Cover } from '../../ui/cover';
-import { Derivation } from '../../ui/derivation';
 import { TabPanel, Tabs } from '../../ui/tabs';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
@@ -12,6 +11,7 @@ import { codeWords } from '../desk/words';
 import { PageOnMat } from '../page-on-mat';
 import { QueryState } from '../query-state';
 import { momentText } from '../times';
+import { WorkedDerivation } from '../worked-derivation';
 import { words } from './words';
 
 export const moreTabs = ['history', 'derivation', 'page'] as const;
@@ -30,32 +30,13 @@ export function AnswerMore({ answer, tab, onTab }: AnswerMoreProps) {
       <Tabs id="answer-more" label={words.sheet.tabsLabel} tabs={moreTabs.map((key) => ({ key, label: words.sheet.tabs[key] }))} chosen={tab} onChoose={onTab} isSmall />
       <TabPanel id="answer-more" chosen={tab}>
         {tab === 'history' ? <History answerId={answer.answerId} /> : null}
-        {tab === 'derivation' ? <Worked answer={answer} /> : null}
+        {tab === 'derivation' && answer.scheme.derivation ? <WorkedDerivation derivation={answer.scheme.derivation as DerivationData} quantity={answer.scheme.quantity} /> : null}
         {tab === 'page' && answer.pageImageId ? (
           <View style={{ height: 560 }}>
             <PageOnMat id={answer.pageImageId} rev={answer.pageImageRev} label={`Page ${answer.pageNo ?? ''} of ${answer.candidateNumber}`} isWhole />
           </View>
         ) : null}
       </TabPanel>
-    </View>
-  );
-}
-
-function Worked({ answer }: { answer: AnswerView }) {
-  const derivation = answer.scheme.derivation as DerivationData | null;
-  if (!derivation) return null;
-  return (
-    <View style={{ gap: 8 }}>
-      <Derivation
-        groups={derivation.groups.map(({ subshells, counted, coefficient, contribution, isAsked, place }) => ({ subshells, counted, coefficient: coefficient.text, contribution: contribution.text, isAsked, isOuter: place === 'outer' }))}
-        nuclearCharge={derivation.nuclearCharge}
-        sigma={derivation.sigma.text}
-        zeff={derivation.zeff.text}
-        asked={answer.scheme.key === derivation.sigma.text ? 'sigma' : 'zeff'}
-      />
-      <Text variant="small" tone="ink2">
-        {[derivation.selfScreening, derivation.source].filter((sentence) => sentence !== null).join(' ')}
-      </Text>
     </View>
   );
 }

@@ -1,9 +1,9 @@
-import { GRAINS_PER_MARK } from '../../marking/grains';
 import type { AnswerView } from '../../contracts/ledger';
 import { readAnswer } from '../../marking/read-answer';
 import type { ScaleData } from '../../marking/scale';
 import { toApproximate } from '../../chemistry/exact';
 import { Scale } from '../../ui/scale';
+import { drawnScale } from '../drawn-scale';
 import { words } from './words';
 
 /** Where a text stands on the scale; null for a code or what is kept back. Only drawn, never decided by. */
@@ -16,25 +16,14 @@ function placeOf(text: string | null | undefined, units: readonly string[]): num
 /** The scale of the item with the readings under it and the distance between them; the own reading as the drop. */
 export function AnswerScale({ answer }: { answer: AnswerView }) {
   const data = answer.scheme.scale as ScaleData;
-  const marks = (grains: number) => grains / GRAINS_PER_MARK;
   const [first = null, second = null] = answer.readings.map(({ given }) => placeOf(given?.text, answer.units));
   const mine = placeOf(answer.mine?.text, answer.units);
   const pair = first !== null && second !== null && answer.gap !== null && first !== second ? { first, second, gap: words.sheet.apart(answer.gap) } : undefined;
   const columns = pair === undefined ? [first, second].filter((at): at is number => at !== null).slice(0, 1).map((at) => ({ at, count: 1 })) : undefined;
   return (
     <Scale
+      {...drawnScale(data, words.sheet.key(answer.scheme.key))}
       fit="phone"
-      lo={data.lo}
-      hi={data.hi}
-      major={data.major}
-      minor={data.minor}
-      decimals={data.decimals}
-      of={marks(data.maxGrains)}
-      keyAt={data.key.at}
-      keyText={words.sheet.key(answer.scheme.key)}
-      roundings={data.roundings}
-      alternatives={data.alternatives.map(({ at, label, grains }) => ({ at, label, marks: marks(grains) }))}
-      bands={data.bands.map(({ name, from, to, grains }) => ({ name, from, to, marks: marks(grains) }))}
       pair={pair}
       columns={columns}
       drop={mine}

@@ -1,10 +1,10 @@
 import { View } from 'react-native';
 import type { WorkedDraft } from '../../contracts/items';
-import { GRAINS_PER_MARK } from '../../marking/grains';
 import type { ScaleData } from '../../marking/scale';
 import { Scale } from '../../ui/scale';
 import { Text } from '../../ui/text';
 import { useIsPhone } from '../../ui/use-breakpoint';
+import { drawnScale } from '../drawn-scale';
 import { words } from './words';
 
 interface ItemScaleProps {
@@ -28,21 +28,10 @@ export function ItemScale({ worked, value }: ItemScaleProps) {
   }
   const apart = new Set(data.roundings.map(({ label }) => label));
   const written = [...new Set(worked.roundings)].filter((text) => !apart.has(text));
-  const marks = (grains: number) => grains / GRAINS_PER_MARK;
   return (
     <Scale
+      {...drawnScale(data, words.scale.key(worked.key?.text ?? data.key.label, written))}
       fit={isPhone ? 'phone' : 'editor'}
-      lo={data.lo}
-      hi={data.hi}
-      major={data.major}
-      minor={data.minor}
-      decimals={data.decimals}
-      of={marks(data.maxGrains)}
-      keyAt={data.key.at}
-      keyText={words.scale.key(worked.key?.text ?? data.key.label, written)}
-      roundings={data.roundings}
-      alternatives={data.alternatives.map(({ at, label, grains }) => ({ at, label, marks: marks(grains) }))}
-      bands={data.bands.map(({ name, from, to, grains }) => ({ name, from, to, marks: marks(grains) }))}
       drop={value?.at ?? null}
       dropText={value?.text ?? ''}
     />

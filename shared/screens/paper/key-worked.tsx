@@ -1,8 +1,8 @@
 import { View } from 'react-native';
 import type { Derivation as DerivationData } from '../../chemistry/derivation';
 import type { WorkedDraft } from '../../contracts/items';
-import { Derivation } from '../../ui/derivation';
 import { Text } from '../../ui/text';
+import { WorkedDerivation } from '../worked-derivation';
 import { words } from './words';
 
 /** How the key comes about, group by group, with its source. */
@@ -19,25 +19,7 @@ export function KeyWorked({ worked, quantity }: { worked: WorkedDraft; quantity:
         </Text>
       </View>
       {derivation ? (
-        <>
-          <Derivation
-            groups={derivation.groups.map(({ subshells, counted, coefficient, contribution, isAsked, place }) => ({
-              subshells,
-              counted,
-              coefficient: coefficient.text,
-              contribution: contribution.text,
-              isAsked,
-              isOuter: place === 'outer',
-            }))}
-            nuclearCharge={derivation.nuclearCharge}
-            sigma={derivation.sigma.text}
-            zeff={derivation.zeff.text}
-            asked={quantity}
-          />
-          <Text variant="small" tone="ink2">
-            {[derivation.selfScreening, derivation.source].filter((sentence) => sentence !== null).join(' ')}
-          </Text>
-        </>
+        <WorkedDerivation derivation={derivation} quantity={quantity} />
       ) : (
         <Text variant="small" tone="ink2">
           {worked.problems[0]?.message ?? words.key.none}

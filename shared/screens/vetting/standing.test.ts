@@ -6,6 +6,7 @@ const item = (itemId: string, outcomes: ('signed' | 'sent-back')[], isWorked = f
   itemId,
   number: 1,
   label: 'Cl 3p',
+  quantity: 'zeff',
   prompt: '',
   maxGrains: 3600,
   cannotVet: null,

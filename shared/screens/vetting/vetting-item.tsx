@@ -6,7 +6,6 @@ import type { VettingItem } from '../../contracts/vetting';
 import { marksText } from '../../marking/grains';
 import { understood } from '../../marking/understood';
 import { Button } from '../../ui/button';
-import { Derivation } from '../../ui/derivation';
 import { SameGlyph } from '../../ui/pair-glyph';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
@@ -14,6 +13,7 @@ import { useIsWide } from '../../ui/use-breakpoint';
 import { Vessel } from '../../ui/vessel';
 import { ChemText } from '../chem-text';
 import { momentText } from '../times';
+import { WorkedDerivation } from '../worked-derivation';
 import { words } from './words';
 
 interface VettingItemProps {
@@ -113,18 +113,7 @@ function Uncovered({ item }: { item: VettingItem }) {
         </Text>
       </View>
       {derivation ? (
-        <>
-          <Derivation
-            groups={derivation.groups.map(({ subshells, counted, coefficient, contribution, isAsked, place }) => ({ subshells, counted, coefficient: coefficient.text, contribution: contribution.text, isAsked, isOuter: place === 'outer' }))}
-            nuclearCharge={derivation.nuclearCharge}
-            sigma={derivation.sigma.text}
-            zeff={derivation.zeff.text}
-            asked={item.key === derivation.sigma.text ? 'sigma' : 'zeff'}
-          />
-          <Text variant="small" tone="ink2">
-            {[derivation.selfScreening, derivation.source].filter((sentence) => sentence !== null).join(' ')}
-          </Text>
-        </>
+        <WorkedDerivation derivation={derivation} quantity={item.quantity} />
       ) : null}
     </View>
   );
