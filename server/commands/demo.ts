@@ -41,6 +41,7 @@ function addItems(context: Context, lead: Actor, sittingId: string, items: reado
       roundings: { downToDecimals: 1, truncation: false },
       bands: [],
       alternatives: [],
+      slips: [],
       crossedOut: 'ask',
       twoAnswers: 'ask',
     };

@@ -3,6 +3,8 @@ import { divide, exactDecimals, fromFractionText, multiply, toDecimals, toFracti
 import type { ProblemCode } from '../../shared/chemistry/result';
 import { valuesByOtherConventions } from '../../shared/chemistry/other-conventions';
 import { proposedStem } from '../../shared/chemistry/stem';
+import { slipLetter } from '../../shared/chemistry/slips/letters';
+import { slipsOf } from '../../shared/chemistry/slips/slips-of';
 import { work, type Worked } from '../../shared/chemistry/work';
 import { askedConventions, type AlternativeDraft, type BandDraft, type ItemDraft, type ItemProblem, type WorkedDraft } from '../../shared/contracts/items';
 import { bandRange } from '../../shared/marking/bands';
@@ -11,7 +13,7 @@ import { itemLabel } from '../../shared/marking/item-label';
 import { readAnswer } from '../../shared/marking/read-answer';
 import { roundings } from '../../shared/marking/rounding';
 import { scaleOf } from '../../shared/marking/scale';
-import type { Alternative, Asked, Band, ItemScheme } from '../../shared/marking/scheme';
+import type { Alternative, Asked, Band, ItemScheme, NamedSlip } from '../../shared/marking/scheme';
 import { schemeProblems } from '../../shared/marking/scheme-checks';
 import { readMarks } from '../../shared/marking/typed-marks';
 
@@ -70,6 +72,17 @@ function readAlternative(draft: AlternativeDraft, index: number, asked: Asked, u
   return read.ok ? { ...rest, value: toFractionText(read.value), text: draft.value.trim(), decimals: read.decimals } : null;
 }
 
+function readSlip(draft: ItemDraft['slips'][number], index: number, asked: Asked, refusals: ItemProblem[]): NamedSlip | null {
+  const slip = slipsOf(asked).find(({ id }) => id === draft.id);
+  const marks = readMarks(draft.marks, true);
+  if (!slip) refusals.push({ path: `slips.${index}.id`, message: 'This slip cannot be made on this item.' });
+  else if (slip.isSilent) refusals.push({ path: `slips.${index}.id`, message: `The slip “${slip.name}” gives the right number here: this item cannot see it.` });
+  if (!marks.ok) refusals.push({ path: `slips.${index}.marks`, message: marks.message });
+  if (!slip || slip.isSilent || !marks.ok) return null;
+  const { id, name, value, text, feedback } = slip;
+  return { id, letter: slipLetter(id), name, value: toFractionText(value), text, grains: marks.grains, feedback };
+}
+
 /** Marks are typed as marks: a sentence about `bands.1.grains` belongs to the field `bands.1.marks`. */
 const atField = ({ path, message }: ItemProblem): ItemProblem => ({ path: path.replace(/maxGrains$/, 'marks').replace(/grains$/, 'marks').replace(/^key$/, 'decimals'), message });
 
@@ -96,6 +109,7 @@ export function readDraft(draft: ItemDraft): ReadDraft {
     if (band.name.trim() === '') refusals.push({ path: `bands.${index}.name`, message: 'Name the band.' });
   });
   const alternatives = draft.alternatives.map((alternative, index) => readAlternative(alternative, index, asked, [], refusals));
+  const slips = draft.slips.map((slip, index) => readSlip(slip, index, asked, refusals));
   const maxGrains = marks.ok ? marks.grains : null;
   if (!worked.ok || maxGrains === null || refusals.length > 0) {
     return { scheme: null, worked: worked.ok ? worked.value : null, maxGrains, refusals, problems: [] };
@@ -110,6 +124,7 @@ export function readDraft(draft: ItemDraft): ReadDraft {
     roundings: draft.roundings,
     alternatives: alternatives.filter((alternative) => alternative !== null),
     bands: bands.filter((band) => band !== null),
+    ...(slips.length === 0 ? {} : { slips: slips.filter((slip) => slip !== null) }),
     crossedOut: draft.crossedOut,
     twoAnswers: draft.twoAnswers,
   };
@@ -151,6 +166,7 @@ export function workDraft(draft: ItemDraft): WorkedDraft {
     roundings: scheme ? roundingTexts(scheme) : [],
     bands: scheme ? scheme.bands.map((band) => rangeTexts(band, scheme.key)) : draft.bands.map(() => null),
     alternatives: draft.alternatives.map((_alternative, index) => scheme?.alternatives[index]?.text ?? null),
+    slips: slipsOf(draft.asked).map(({ id, name, text, oneLine, feedback, isSilent }) => ({ id, letter: slipLetter(id), name, text, differs: oneLine, feedback, isSilent })),
     others: valuesByOtherConventions(draft.asked).map(({ convention, name, text }) => ({ convention, name, text })),
     electrons: electrons.ok ? [...electrons.value] : [],
     proposedPrompt: proposedStem(draft.asked, draft.decimals),
@@ -179,6 +195,7 @@ export function draftOf(scheme: ItemScheme, prompt: string): ItemDraft {
     roundings: scheme.roundings,
     bands: scheme.bands.map((band) => ({ name: band.name, kind: band.kind, width: widthText(band, decimals), marks: marksText(band.grains) })),
     alternatives: scheme.alternatives.map(({ name, convention = null, text, grains, reason }) => ({ name, convention: convention === 'typed' ? null : convention, value: convention === null ? text : '', marks: marksText(grains), reason })),
+    slips: (scheme.slips ?? []).map(({ id, grains }) => ({ id, marks: marksText(grains) })),
     crossedOut: scheme.crossedOut,
     twoAnswers: scheme.twoAnswers,
   };

@@ -34,6 +34,7 @@ export function schemeInWords(scheme: ItemScheme): Decided[] {
     { name: 'Roundings', words: texts.length === 0 ? 'only the key itself' : `${texts.join(' and ')}, in full${scheme.roundings.truncation ? ', cut off or rounded' : ''}` },
     { name: 'Alternatives', words: scheme.alternatives.length === 0 ? 'none' : scheme.alternatives.map(({ name, text, grains }) => `${name} ${text}, ${marksText(grains)} marks`).join('; ') },
     { name: 'Bands', words: bandsInWords(scheme) },
+    { name: 'Named slips', words: (scheme.slips ?? []).length === 0 ? 'none' : (scheme.slips ?? []).map(({ letter, name, text, grains }) => `${letter}, ${name}, ${text}: ${marksText(grains)} marks`).join('; ') },
     { name: 'Crossed out', words: policyWords[scheme.crossedOut] ?? scheme.crossedOut },
     { name: 'Two answers', words: policyWords[scheme.twoAnswers] ?? scheme.twoAnswers },
   ];

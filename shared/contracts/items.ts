@@ -33,6 +33,9 @@ const alternativeDraft = z.strictObject({
 });
 export type AlternativeDraft = z.infer<typeof alternativeDraft>;
 
+/** A slip the scheme names, with its share as typed; 0 names it only. */
+const slipDraft = z.strictObject({ id: z.string().max(60), marks: z.string().max(16) });
+
 /** What the lead decides about an item, as typed. The key is never among it: the server computes it. */
 export const itemDraft = z.strictObject({
   asked: z.strictObject({
@@ -50,6 +53,7 @@ export const itemDraft = z.strictObject({
   roundings: z.strictObject({ downToDecimals: z.int().min(0).max(4).nullable(), truncation: z.boolean() }),
   bands: z.array(bandDraft).max(8),
   alternatives: z.array(alternativeDraft).max(8).default([]),
+  slips: z.array(slipDraft).max(60).default([]),
   crossedOut: z.enum(answerPolicies),
   twoAnswers: z.enum(answerPolicies),
 });
@@ -69,6 +73,8 @@ export const workedDraft = z.object({
   bands: z.array(z.object({ from: z.string(), to: z.string() }).nullable()),
   /** The value of each alternative as printed; null while it has none. */
   alternatives: z.array(z.string().nullable()),
+  /** Every slip that can be made on this item, the commonest first; a silent one gives the right number. */
+  slips: z.array(z.object({ id: z.string(), letter: z.string(), name: z.string(), text: z.string(), differs: z.string(), feedback: z.string(), isSilent: z.boolean() })),
   /** What other conventions make of the same question, where they differ. */
   others: z.array(z.object({ convention: z.enum(otherConventions), name: z.string(), text: z.string() })),
   /** Subshells that hold an electron of this species. */

@@ -46,6 +46,8 @@ export function reasonInWords({ grains, rule, numbers }: StoredVerdict): Reason 
       return { head: `accepted, ${numbers.name ?? ''}`, detail: `It is ${numbers.alternative ?? ''}, accepted as ${numbers.name ?? ''}.` };
     case 'band':
       return { head: `in the band ${numbers.band ?? ''}`, detail: `It lies in ${numbers.from ?? ''} to ${numbers.to ?? ''}, ${apart(distance)}.` };
+    case 'slip':
+      return { head: `fits ${numbers.letters ?? ''}, ${numbers.slips ?? ''}`, detail: `It is ${numbers.slip ?? ''}, what ${numbers.slips ?? ''} comes to. A slip is an explanation, not proof.` };
     case 'nothing':
       return { head: /^-?0(\.0+)?$/.test(distance) ? 'too few decimals' : `nothing fits, ${apart(distance)}`, detail: nothingDetail(key, distance) };
   }

@@ -17,6 +17,8 @@ export interface ScaleData {
   readonly roundings: readonly { readonly at: number; readonly label: string }[];
   readonly alternatives: readonly { readonly at: number; readonly label: string; readonly grains: number }[];
   readonly bands: readonly { readonly name: string; readonly from: number; readonly to: number; readonly grains: number }[];
+  /** Named slips; those that share a value share a diamond. */
+  readonly slips: readonly { readonly at: number; readonly letter: string; readonly name: string; readonly text: string; readonly grains: number }[];
 }
 
 const graduations = [
@@ -58,11 +60,12 @@ export function scaleOf(scheme: ItemScheme, also: readonly number[] = []): Scale
   });
   const alternatives = scheme.alternatives.map((one) => ({ at: toApproximate(fromFractionText(one.value)), label: one.text, grains: one.grains }));
   const apart = roundingsApart(scheme);
+  const slips = (scheme.slips ?? []).map(({ letter, name, value, text, grains }) => ({ at: toApproximate(fromFractionText(value)), letter, name, text, grains }));
   const reach = [...bands.flatMap(({ from, to }) => [from, to]), ...alternatives.map((one) => one.at), ...apart.map((one) => one.at), ...also];
   const farthest = Math.max(1.2, ...reach.map((value) => Math.abs(value - at) * 1.15));
   const { major, minor, decimals } = graduationFor(2 * farthest);
   const lo = Math.floor((at - farthest) / minor) * minor;
   const hi = Math.ceil((at + farthest) / minor) * minor;
   const places = Math.max(scheme.key.decimals, Math.min(6, exactDecimals(key) ?? 0));
-  return { lo, hi, major, minor, decimals, maxGrains: scheme.maxGrains, key: { at, label: toDecimals(key, places) }, roundings: apart, alternatives, bands };
+  return { lo, hi, major, minor, decimals, maxGrains: scheme.maxGrains, key: { at, label: toDecimals(key, places) }, roundings: apart, alternatives, bands, slips };
 }

@@ -84,6 +84,18 @@ export interface Alternative {
   readonly convention?: ConventionName;
 }
 
+/** A slip that the scheme names: its value on this item, and its share of the marks, 0 where it is named only. */
+export interface NamedSlip {
+  readonly id: string;
+  /** The same on every paper. */
+  readonly letter: string;
+  readonly name: string;
+  readonly value: string;
+  readonly text: string;
+  readonly grains: number;
+  readonly feedback: string;
+}
+
 /** What becomes of an answer that was crossed out, or of two left standing. */
 export type AnswerPolicy = 'ask' | 'none';
 
@@ -97,6 +109,7 @@ export interface ItemScheme {
   readonly roundings: RoundingPolicy;
   readonly alternatives: readonly Alternative[];
   readonly bands: readonly Band[];
+  readonly slips?: readonly NamedSlip[];
   readonly crossedOut: AnswerPolicy;
   readonly twoAnswers: AnswerPolicy;
 }
@@ -114,7 +127,7 @@ export interface MarkingContext {
 export const emptyContext: MarkingContext = {};
 
 /** The rule that gave the mark, in the order in which a tie is settled. */
-export const rules = ['code', 'key', 'rounding', 'alternative', 'band', 'nothing'] as const;
+export const rules = ['code', 'key', 'rounding', 'alternative', 'band', 'slip', 'nothing'] as const;
 export type RuleName = (typeof rules)[number];
 
 /** The stored result of marking one distinct reading: grains null when a person has to decide. */

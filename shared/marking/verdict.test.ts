@@ -80,3 +80,18 @@ describe('a verdict', () => {
     expect({ edges, refusedByFloats }).toEqual({ edges: 1160, refusedByFloats: 736 });
   });
 });
+
+it('a named slip pays its share with the roundings of the key, and explains a 0 where it has none', () => {
+  const slip = (id: string, letter: string, name: string, value: string, text: string, grains: number) => ({ id, letter, name, value, text, grains, feedback: '' });
+  const scheme = {
+    ...defaultScheme({ symbol: 'Cl', charge: 0, electron: '3p', quantity: 'zeff', convention: 'slater' }, { value: '61/10', text: '6.10', decimals: 2 }, 3600),
+    slips: [slip('counts-itself', 'a', 'counts the electron itself', '23/4', '5.75', 1200), slip('all-inner-085', 'f', 'all inner electrons at 0.85', '32/5', '6.40', 0)],
+  };
+  const mark = (text: string) => markAnswer(scheme, { text }, {});
+  // Counting the electron itself: 17 - (7 x 0.35 + 8 x 0.85 + 2 x 1.00) = 5.75, by Slater's coefficients (Phys. Rev. 36, 57, 1930).
+  expect(mark('5.75')).toMatchObject({ grains: 1200, rule: 'slip', numbers: { letters: 'a', slips: 'counts the electron itself' } });
+  expect(mark('5.8')).toMatchObject({ grains: 1200, rule: 'slip' });
+  expect(mark('6.4')).toMatchObject({ grains: 0, rule: 'slip', numbers: { letters: 'f' } });
+  expect(mark('6.10')).toMatchObject({ grains: 3600, rule: 'key' });
+  expect(mark('9.99')).toMatchObject({ grains: 0, rule: 'nothing' });
+});

@@ -64,6 +64,15 @@ function bandClaim(scheme: ItemScheme, read: ReadValue, key: Exact, shared: Reco
   return { grains: band.grains, rule: 'band', numbers: { ...shared, band: band.name, from: toDecimals(from, places), to: toDecimals(to, places) } };
 }
 
+/** Every named slip that fits, with the same roundings as the key; one without a share explains a 0. The strongest share counts. */
+function slipClaim(scheme: ItemScheme, read: ReadValue, shared: Record<string, string>): Claim | null {
+  const fits = (scheme.slips ?? []).filter((slip) => meets(read, { value: fromFractionText(slip.value), decimals: scheme.key.decimals }, scheme.roundings) !== null);
+  const [first] = fits;
+  if (!first) return null;
+  const grains = Math.max(...fits.map((slip) => slip.grains));
+  return { grains, rule: 'slip', numbers: { ...shared, letters: fits.map(({ letter }) => letter).join(', '), slips: fits.map(({ name }) => name).join('; '), slip: first.text } };
+}
+
 const order = (rule: RuleName): number => rules.indexOf(rule);
 
 /**
@@ -78,7 +87,7 @@ export function markAnswer(scheme: ItemScheme, given: Given, _context: MarkingCo
   const key = fromFractionText(scheme.key.value);
   const shared = { key: scheme.key.text, distance: distanceText(read.value, key) };
   const nothing: Claim = { grains: 0, rule: 'nothing', numbers: shared };
-  const claims = [keyClaim(scheme, read, key, shared), ...alternativeClaims(scheme, read, shared), bandClaim(scheme, read, key, shared), nothing];
+  const claims = [keyClaim(scheme, read, key, shared), ...alternativeClaims(scheme, read, shared), bandClaim(scheme, read, key, shared), slipClaim(scheme, read, shared), nothing];
   return claims
     .filter((claim) => claim !== null)
     .reduce((best, claim) => (claim.grains > best.grains || (claim.grains === best.grains && order(claim.rule) < order(best.rule)) ? claim : best));

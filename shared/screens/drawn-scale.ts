@@ -17,6 +17,7 @@ export function drawnScale(data: ScaleData, keyText: string): Omit<ScaleProps, '
     keyText,
     roundings: data.roundings,
     alternatives: data.alternatives.map(({ at, label, grains }) => ({ at, label, marks: marks(grains) })),
+    slips: data.slips.map(({ at, letter, name, text, grains }) => ({ at, letter, name, text, marks: marks(grains) })),
     bands: data.bands.map(({ name, from, to, grains }) => ({ name, from, to, marks: marks(grains) })),
   };
 }

@@ -216,4 +216,16 @@ describe('building a paper', () => {
     const refused = await lead.post(`/api/sittings/${paper.sittingId}/items`).send(itemDraft('Cl', '3p', { alternatives: [{ name: 'mine', convention: null, value: '6.4.0', marks: '1', reason: '' }] })).expect(400);
     expect(Object.keys((refused.body as { error: { fields: object } }).error.fields)).toEqual(['alternatives.0.reason', 'alternatives.0.value']);
   });
+
+  it('names slips with shares that pay, and refuses one that cannot be made or seen here', async () => {
+    const made = await lead.post(`/api/sittings/${paper.sittingId}/items`).send(itemDraft('Cl', '3p', { slips: [{ id: 'counts-itself', marks: '1' }] })).expect(201);
+    const { id, worked, draft } = made.body as { id: string; worked: { slips: { id: string; letter: string; text: string }[] }; draft: ItemDraft };
+    expect(draft.slips).toEqual([{ id: 'counts-itself', marks: '1' }]);
+    expect(worked.slips[0]).toMatchObject({ id: 'counts-itself', letter: 'a', text: '5.75' });
+    const spot = await lead.post(`/api/items/${id}/spot-test`).send({ text: '5.75' }).expect(200);
+    expect(spot.body).toMatchObject({ rule: 'slip', grains: 1200, head: 'fits a, counts the electron itself' });
+    const fieldsOf = (response: { body: unknown }) => Object.keys((response.body as { error: { fields: object } }).error.fields);
+    expect(fieldsOf(await lead.post(`/api/sittings/${paper.sittingId}/items`).send(itemDraft('Cl', '3p', { slips: [{ id: 'filling-order', marks: '1' }] })).expect(400))).toEqual(['slips.0.id']);
+    expect(fieldsOf(await lead.post(`/api/sittings/${paper.sittingId}/items`).send(itemDraft('Cl', '3p', { slips: [{ id: 'counts-itself', marks: 'some' }] })).expect(400))).toEqual(['slips.0.marks']);
+  });
 });

@@ -18,6 +18,7 @@ export const itemDraft = (symbol = 'Cl', electron = '3p', changes: Partial<ItemD
   roundings: { downToDecimals: 1, truncation: false },
   bands: [],
   alternatives: [],
+  slips: [],
   crossedOut: 'ask',
   twoAnswers: 'ask',
   ...changes,

@@ -23,6 +23,7 @@ export function newDraft(last: ItemDraft | undefined): ItemDraft {
     roundings: { downToDecimals: 1, truncation: false },
     bands: [],
     alternatives: [],
+    slips: [],
     crossedOut: last?.crossedOut ?? 'ask',
     twoAnswers: last?.twoAnswers ?? 'ask',
   };

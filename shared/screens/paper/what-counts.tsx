@@ -12,6 +12,7 @@ import { MarkStand } from '../../ui/mark-stand';
 import { Alternatives } from './alternatives';
 import { nested } from './band-order';
 import { BandRow } from './band-row';
+import { NamedSlips } from './named-slips';
 import { words } from './words';
 
 interface WhatCountsProps {
@@ -145,6 +146,7 @@ export function WhatCounts({ draft, worked, problemAt, onChange }: WhatCountsPro
         ) : null}
       </View>
       <Alternatives draft={draft} worked={worked} problemAt={problemAt} onChange={onChange} />
+      <NamedSlips draft={draft} worked={worked} problemAt={problemAt} onChange={onChange} />
       <CodePolicies draft={draft} onChange={onChange} />
     </View>
   );

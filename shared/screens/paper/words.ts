@@ -97,6 +97,18 @@ export const words = {
     },
   },
   key: { title: 'Key, worked', aside: 'computed, not typed', none: 'No key can be computed yet.' },
+  slips: {
+    title: 'Named slips',
+    aside: 'an explanation, not proof',
+    all: (count: number) => `All ${count} slips of this item`,
+    fewer: 'Only the commonest',
+    orphans: (count: number) => `${count === 1 ? 'One named slip' : `${count} named slips`} of before cannot be made on what is asked now, or cannot be seen. Nothing is stored until ${count === 1 ? 'it is' : 'they are'} taken out.`,
+    clear: 'Take them out',
+    share: 'Marks for this slip',
+    twins: (names: readonly string[]) => `${names.join('; ')}: the same value`,
+    silent: 'Silent here:',
+    silentText: (names: readonly string[], key: string) => `${names.join('; ')} ${names.length === 1 ? 'gives' : 'give'} ${key} too; this item cannot see ${names.length === 1 ? 'it' : 'them'}.`,
+  },
   alternatives: {
     title: 'Accepted alternatives',
     aside: 'with the same roundings as the key',
