@@ -49,6 +49,7 @@ export function reasonInWords({ grains, rule, numbers }: StoredVerdict): Reason 
     case 'slip':
       return { head: `fits ${numbers.letters ?? ''}, ${numbers.slips ?? ''}`, detail: `It is ${numbers.slip ?? ''}, what ${numbers.slips ?? ''} comes to. A slip is an explanation, not proof.` };
     case 'nothing':
+      if (numbers.slips) return { head: `fits ${numbers.letters ?? ''}, ${numbers.slips}`, detail: `No rule is met: ${apart(distance)} beside the key, ${key}. It fits ${numbers.slips}, which has no share here.` };
       return { head: /^-?0(\.0+)?$/.test(distance) ? 'too few decimals' : `nothing fits, ${apart(distance)}`, detail: nothingDetail(key, distance) };
   }
 }

@@ -1,32 +1,13 @@
-import { equals, exactDecimals, fromFractionText, subtract, toDecimals, type Exact } from '../chemistry/exact';
+import { exactDecimals, fromFractionText, subtract, toDecimals, type Exact } from '../chemistry/exact';
 import { bandOf, bandRange } from './bands';
+import { slipsThatFit } from './diagnosis';
+import { meets } from './meeting';
 import { readAnswer, type ReadValue } from './read-answer';
-import { isRounding } from './rounding';
-import { isCode, rules, type Code, type Given, type ItemScheme, type MarkingContext, type RoundingPolicy, type RuleName, type Verdict } from './scheme';
+import { isCode, rules, type Code, type Given, type ItemScheme, type MarkingContext, type RuleName, type Verdict } from './scheme';
 
 /** The context of a verdict as one text; two contexts with the same entries have the same. */
 export const contextKey = (context: MarkingContext): string =>
   Object.keys(context).length === 0 ? '' : JSON.stringify(Object.entries(context).sort(([one], [other]) => (one < other ? -1 : 1)));
-
-interface Target {
-  readonly value: Exact;
-  readonly decimals: number;
-}
-
-type Met = 'exactly' | 'rounded' | null;
-
-/**
- * Whether a value meets a target: exactly, with at least the decimals the target states, or as an accepted rounding to the
- * fewer decimals given. 6.100 meets 6.10 exactly, 6.1 rounded, 15/4 meets 3.75 exactly; 3.8 meets 3.75 rounded, 3.80 not at all.
- */
-function meets(read: ReadValue, target: Target, policy: RoundingPolicy): Met {
-  const isFraction = read.figures === null;
-  if (equals(read.value, target.value) && (isFraction || read.decimals >= target.decimals)) return 'exactly';
-  if (isFraction || policy.downToDecimals === null || read.decimals < policy.downToDecimals) return null;
-  const isShort = exactDecimals(target.value) !== null;
-  if (isShort && read.decimals >= target.decimals) return null;
-  return isRounding(read.value, target.value, read.decimals, policy.truncation) ? 'rounded' : null;
-}
 
 /** A difference as people read it: signed, exact where a decimal of up to six places says it. */
 function distanceText(value: Exact, key: Exact): string {
@@ -73,6 +54,13 @@ function slipClaim(scheme: ItemScheme, read: ReadValue, shared: Record<string, s
   return { grains, rule: 'slip', numbers: { ...shared, letters: fits.map(({ letter }) => letter).join(', '), slips: fits.map(({ name }) => name).join('; '), slip: first.text } };
 }
 
+/** No rule pays: 0, with the slips that would explain it though the scheme names none of them. */
+function nothingClaim(scheme: ItemScheme, read: ReadValue, shared: Record<string, string>): Claim {
+  const fits = slipsThatFit(scheme, read);
+  const explained = fits.length === 0 ? {} : { letters: fits.map(({ letter }) => letter).join(', '), slips: fits.map(({ name }) => name).join('; ') };
+  return { grains: 0, rule: 'nothing', numbers: { ...shared, ...explained } };
+}
+
 const order = (rule: RuleName): number => rules.indexOf(rule);
 
 /**
@@ -86,8 +74,7 @@ export function markAnswer(scheme: ItemScheme, given: Given, _context: MarkingCo
   if (!read.ok) throw new RangeError(`Only what the grammar understands can be marked: ${given.text}`);
   const key = fromFractionText(scheme.key.value);
   const shared = { key: scheme.key.text, distance: distanceText(read.value, key) };
-  const nothing: Claim = { grains: 0, rule: 'nothing', numbers: shared };
-  const claims = [keyClaim(scheme, read, key, shared), ...alternativeClaims(scheme, read, shared), bandClaim(scheme, read, key, shared), slipClaim(scheme, read, shared), nothing];
+  const claims = [keyClaim(scheme, read, key, shared), ...alternativeClaims(scheme, read, shared), bandClaim(scheme, read, key, shared), slipClaim(scheme, read, shared), nothingClaim(scheme, read, shared)];
   return claims
     .filter((claim) => claim !== null)
     .reduce((best, claim) => (claim.grains > best.grains || (claim.grains === best.grains && order(claim.rule) < order(best.rule)) ? claim : best));

@@ -1,0 +1,35 @@
+import { slipLetter } from '../chemistry/slips/letters';
+import { slipsOf, type SlipValue } from '../chemistry/slips/slips-of';
+import { meets } from './meeting';
+import type { ReadValue } from './read-answer';
+import type { Asked, ItemScheme } from './scheme';
+
+export interface FittingSlip {
+  readonly id: string;
+  readonly letter: string;
+  readonly name: string;
+  readonly text: string;
+  readonly feedback: string;
+}
+
+const worked = new Map<string, readonly SlipValue[]>();
+
+/** The slips of a question, worked once: they rest on nothing else. */
+function slipsKnown(asked: Asked): readonly SlipValue[] {
+  const key = JSON.stringify(asked);
+  const known = worked.get(key);
+  if (known) return known;
+  const fresh = slipsOf(asked);
+  worked.set(key, fresh);
+  return fresh;
+}
+
+/**
+ * Every slip that a value fits, with the roundings of the key, the commonest first, whether the scheme names it or not: a likely
+ * explanation, never proof. 5.75 for Cl 3p fits "counts the electron itself"; 5.8 too, where one decimal is accepted.
+ */
+export function slipsThatFit(scheme: ItemScheme, read: ReadValue): FittingSlip[] {
+  return slipsKnown(scheme.asked)
+    .filter(({ value, isSilent }) => !isSilent && meets(read, { value, decimals: scheme.key.decimals }, scheme.roundings) !== null)
+    .map(({ id, name, text, feedback }) => ({ id, letter: slipLetter(id), name, text, feedback }));
+}
