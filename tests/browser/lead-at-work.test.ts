@@ -43,6 +43,8 @@ describe('a lead at work', () => {
     // 6.1 is the key 6.10 to one decimal: Slater's rules for Cl 3p, 17 - (6 x 0.35 + 8 x 0.85 + 2 x 1.00).
     await page.getByText(/the key, rounded/i).first().waitFor();
     await spot.fill('5.75');
+    await page.getByText(/fits a, b, counts the electron itself/i).first().waitFor();
+    await spot.fill('5.76');
     await page.getByText(/nothing fits/i).first().waitFor();
     expect(complaints).toEqual([]);
     await context.close();
