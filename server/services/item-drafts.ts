@@ -9,6 +9,7 @@ import { work, type Worked } from '../../shared/chemistry/work';
 import { askedConventions, type AlternativeDraft, type BandDraft, type ItemDraft, type ItemProblem, type WorkedDraft } from '../../shared/contracts/items';
 import { bandRange } from '../../shared/marking/bands';
 import { marksText } from '../../shared/marking/grains';
+import { guardOf, untoldSlips } from '../../shared/marking/guard';
 import { itemLabel } from '../../shared/marking/item-label';
 import { readAnswer } from '../../shared/marking/read-answer';
 import { roundings } from '../../shared/marking/rounding';
@@ -167,6 +168,8 @@ export function workDraft(draft: ItemDraft): WorkedDraft {
     bands: scheme ? scheme.bands.map((band) => rangeTexts(band, scheme.key)) : draft.bands.map(() => null),
     alternatives: draft.alternatives.map((_alternative, index) => scheme?.alternatives[index]?.text ?? null),
     slips: slipsOf(draft.asked).map(({ id, name, text, oneLine, feedback, isSilent }) => ({ id, letter: slipLetter(id), name, text, differs: oneLine, feedback, isSilent })),
+    guard: drawable ? guardOf(scheme).map(({ grains, ...finding }) => ({ ...finding, marks: marksText(grains) })) : [],
+    untold: scheme ? untoldSlips(scheme) : [],
     others: valuesByOtherConventions(draft.asked).map(({ convention, name, text }) => ({ convention, name, text })),
     electrons: electrons.ok ? [...electrons.value] : [],
     proposedPrompt: proposedStem(draft.asked, draft.decimals),

@@ -228,4 +228,12 @@ describe('building a paper', () => {
     expect(fieldsOf(await lead.post(`/api/sittings/${paper.sittingId}/items`).send(itemDraft('Cl', '3p', { slips: [{ id: 'filling-order', marks: '1' }] })).expect(400))).toEqual(['slips.0.id']);
     expect(fieldsOf(await lead.post(`/api/sittings/${paper.sittingId}/items`).send(itemDraft('Cl', '3p', { slips: [{ id: 'counts-itself', marks: 'some' }] })).expect(400))).toEqual(['slips.0.marks']);
   });
+
+  it('says at once what a band would pay, and what one decimal cannot tell apart', async () => {
+    const band = { name: 'near', kind: 'relative' as const, width: '5', marks: '2' };
+    const { body } = await lead.post('/api/keys').send({ sittingId: paper.sittingId, draft: itemDraft('Cl', '3p', { bands: [band] }) }).expect(200);
+    expect(body.guard.map(({ text, marks }: { text: string; marks: string }) => [text, marks])).toContainEqual(['6.40', '2']);
+    const iron = await lead.post('/api/keys').send({ sittingId: paper.sittingId, draft: itemDraft('Fe', '4s') }).expect(200);
+    expect(iron.body).toMatchObject({ guard: [], untold: [{ text: '3.80', rounded: '3.8', decimals: 1 }] });
+  });
 });

@@ -10,7 +10,7 @@ const itemWith = (draft: ItemDraft, rev = 1): ItemView => ({
   number: 1,
   draft,
   prompt: '',
-  worked: { label: 'Li 2s', key: null, derivation: null, scale: null, roundings: [], bands: [], alternatives: [], slips: [], others: [], electrons: [], proposedPrompt: '', maxGrains: null, problems: [] },
+  worked: { label: 'Li 2s', key: null, derivation: null, scale: null, roundings: [], bands: [], alternatives: [], slips: [], guard: [], untold: [], others: [], electrons: [], proposedPrompt: '', maxGrains: null, problems: [] },
   maxGrains: 3600,
   hasAnswerBox: false,
   rev,

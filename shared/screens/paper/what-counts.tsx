@@ -12,6 +12,7 @@ import { MarkStand } from '../../ui/mark-stand';
 import { Alternatives } from './alternatives';
 import { nested } from './band-order';
 import { BandRow } from './band-row';
+import { ToleranceGuard, Untold } from './guard-notes';
 import { NamedSlips } from './named-slips';
 import { words } from './words';
 
@@ -94,6 +95,7 @@ export function WhatCounts({ draft, worked, problemAt, onChange }: WhatCountsPro
           </Chip>
         )}
       </CountRow>
+      <Untold untold={worked.untold} />
       {draft.bands.length === 0 ? (
         <View style={{ minHeight: 44, justifyContent: 'center' }}>
           <Text tone="ink2">{words.counts.noBand}</Text>
@@ -145,6 +147,7 @@ export function WhatCounts({ draft, worked, problemAt, onChange }: WhatCountsPro
           </View>
         ) : null}
       </View>
+      <ToleranceGuard guard={worked.guard} />
       <Alternatives draft={draft} worked={worked} problemAt={problemAt} onChange={onChange} />
       <NamedSlips draft={draft} worked={worked} problemAt={problemAt} onChange={onChange} />
       <CodePolicies draft={draft} onChange={onChange} />

@@ -97,6 +97,14 @@ export const words = {
     },
   },
   key: { title: 'Key, worked', aside: 'computed, not typed', none: 'No key can be computed yet.' },
+  guard: {
+    title: 'Tolerance guard:',
+    finding: ({ kind, name, text, distance, marks }: { kind: 'slip' | 'convention'; name: string; text: string; distance: string; marks: string }) =>
+      `${kind === 'slip' ? `the slip “${name}”, ${text}` : `${text}, ${name}`}, ${distance} the key, would get ${marks} ${marks === '1' ? 'mark' : 'marks'}`,
+    what: 'Narrow the band, or give that value a share of its own.',
+    more: (count: number) => `and ${count} more`,
+    untold: (names: readonly string[], rounded: string, decimals: number) => `At ${decimals === 1 ? 'one decimal' : decimals === 0 ? 'no decimal' : `${decimals} decimals`}, ${rounded} cannot be told from ${names.join('; ')}.`,
+  },
   slips: {
     title: 'Named slips',
     aside: 'an explanation, not proof',
