@@ -6,6 +6,7 @@ import { deskRoutes } from './desk';
 import { itemRoutes } from './items';
 import { layoutRoutes } from './layouts';
 import { ledgerRoutes } from './ledger';
+import { paperFileRoutes } from './paper-file';
 import { scanRoutes } from './scans';
 import { serviceRoutes } from './service';
 import { sessionRoutes } from './session';
@@ -24,4 +25,5 @@ export function registerRoutes(router: Router, context: Context, passport: AppPa
   classListRoutes(router, context);
   scanRoutes(router, context);
   vettingRoutes(router, context);
+  paperFileRoutes(router, context);
 }

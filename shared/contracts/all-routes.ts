@@ -4,6 +4,7 @@ import { itemBankRoutes } from './item-bank';
 import { itemRoutes } from './items';
 import { layoutRoutes } from './layouts';
 import { ledgerRoutes } from './ledger';
+import { paperFileRoutes } from './paper-file';
 import { progressRoutes } from './progress';
 import type { RouteContract } from './route';
 import { scanRoutes } from './scans';
@@ -28,4 +29,5 @@ export const allRoutes: Readonly<Record<string, RouteContract>> = {
   ...scanRoutes,
   ...waitingRoutes,
   ...vettingRoutes,
+  ...paperFileRoutes,
 };

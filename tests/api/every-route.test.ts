@@ -53,6 +53,7 @@ function buildWorld(server: TestServer): World {
       recordThirdReading: { text: '6.10', openedAt: now },
       ruleAnswer: { kind: 'value', text: '6.10' },
       makeExport: { kind: 'marks-csv' },
+      putPaperFile: { format: 'meniscus-paper', version: 1, title: 'Paper', items: [], pages: [], boxes: [] },
       checkKey: { text: '6.10' },
       vetItem: { outcome: 'signed', comment: null },
       makeBatch: { bundle: 'B' },

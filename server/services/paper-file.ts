@@ -1,0 +1,67 @@
+import { inTransaction, type Database } from '../../db/client';
+import { boxesOfLayout, findLayout, layoutPages } from '../../db/queries/layouts';
+import { draftedItems } from '../../db/queries/papers';
+import { paperSchemaPath, type PaperFile } from '../../shared/contracts/paper-file';
+import type { Actor } from '../auth/access';
+import type { Context } from '../context';
+import { AppError, conflict, invalidRequest } from '../errors';
+import { draftOf } from './item-drafts';
+import { createItem, removeItem } from './items';
+import { saveLayout } from './layouts';
+import { requireOpenPaper, requireSitting } from './sitting-access';
+
+const drawnOrdinal = 1;
+
+function fileOf(db: Database, sittingId: string, title: string): PaperFile {
+  const items = draftedItems(db, sittingId);
+  const numbers = new Map(items.map(({ item }, index) => [item.id, index + 1]));
+  const layout = findLayout(db, sittingId, drawnOrdinal);
+  return {
+    $schema: `/api${paperSchemaPath}`,
+    format: 'meniscus-paper',
+    version: 1,
+    title,
+    items: items.map(({ item, scheme }) => draftOf(scheme, item.prompt)),
+    pages: layout ? layoutPages(db, layout.id).map(({ widthMm, heightMm }) => ({ widthMm, heightMm })) : [],
+    boxes: layout ? boxesOfLayout(db, layout.id).map(({ item, pageNo, use, x, y, w, h }) => ({ item: item === null ? null : (numbers.get(item) ?? null), pageNo, use, x, y, w, h })) : [],
+  };
+}
+
+export function paperFileFor(context: Context, actor: Actor, sittingId: string): PaperFile {
+  const { sitting } = requireSitting(context, actor, sittingId, ['lead', 'external']);
+  return fileOf(context.db, sittingId, sitting.title);
+}
+
+/** Names the item of a file that a refusal belongs to: `items.3.asked.electron`. */
+function atItem(error: unknown, index: number): unknown {
+  if (!(error instanceof AppError) || error.code !== 'invalid_request') return error;
+  const fields = Object.fromEntries(Object.entries(error.details.fields ?? {}).map(([path, message]) => [`items.${index}.${path}`, message]));
+  return invalidRequest(`Item ${index + 1}: ${error.message}`, fields);
+}
+
+/** Replaces items and regions of an open paper by those of a file, all or nothing; keys are worked here. */
+export function takePaperFile(context: Context, actor: Actor, sittingId: string, rev: number, file: PaperFile): PaperFile {
+  const { db } = context;
+  requireSitting(context, actor, sittingId, ['lead']);
+  inTransaction(db, () => {
+    const { sitting } = requireSitting(context, actor, sittingId, ['lead']);
+    requireOpenPaper(context, sitting);
+    if (sitting.rev !== rev) throw conflict('Someone changed this sitting meanwhile. The file was not taken.');
+    for (const { item } of draftedItems(db, sittingId).reverse()) removeItem(context, actor, item.id, item.rev);
+    const ids = file.items.map((draft, index) => {
+      try {
+        return createItem(context, actor, sittingId, draft).id;
+      } catch (error) {
+        throw atItem(error, index);
+      }
+    });
+    if (file.pages.length === 0) return;
+    const boxes = file.boxes.map(({ item, ...box }, index) => {
+      const id = item === null ? null : ids[item - 1];
+      if (id === undefined) throw invalidRequest(`Box ${index + 1}: the paper has no item ${item}.`, { [`boxes.${index}.item`]: 'There is no such item.' });
+      return { ...box, item: id };
+    });
+    saveLayout(context, actor, sittingId, findLayout(db, sittingId, drawnOrdinal)?.rev ?? 0, { pages: file.pages, boxes });
+  });
+  return paperFileFor(context, actor, sittingId);
+}

@@ -1,0 +1,62 @@
+import type { Agent } from 'supertest';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import type { PaperFile } from '../../shared/contracts/paper-file';
+import { buildPaper, itemDraft } from '../support/paper';
+import { startTestServer, type TestServer } from '../support/test-server';
+
+describe('a paper as a file', () => {
+  let server: TestServer;
+  let lead: Agent;
+  beforeAll(async () => {
+    server = await startTestServer();
+    lead = await server.signInAs('lead');
+  });
+  afterAll(() => server.close());
+
+  const drafts = [
+    itemDraft('Cl', '3p', { bands: [{ name: 'near', kind: 'absolute', width: '0.05', marks: '2' }], slips: [{ id: 'counts-itself', marks: '1' }], alternatives: [{ name: 'core count', convention: 'core-count', value: '', marks: '1', reason: 'taught last year' }] }),
+    itemDraft('Mg', '2p', { asked: { symbol: 'Mg', charge: 2, electron: '2p', quantity: 'sigma', convention: 'slater' }, prompt: 'Find σ by Slater’s rules, to two decimals.' }),
+  ];
+  const fileOf = async (sittingId: string) => (await lead.get(`/api/sittings/${sittingId}/paper.json`).expect(200)).body as PaperFile;
+  const revOf = async (sittingId: string) => String(((await lead.get(`/api/sittings/${sittingId}`)).body as { rev: number }).rev);
+  const put = async (sittingId: string, file: unknown) => lead.put(`/api/sittings/${sittingId}/paper.json`).set('If-Match', await revOf(sittingId)).send(file as object);
+
+  it('goes out and comes in as it was, keys worked anew', async () => {
+    const from = buildPaper(server, { drafts, locked: false });
+    const to = buildPaper(server, { locked: false });
+    const file = await fileOf(from.sittingId);
+    expect(file.items).toEqual(drafts);
+    expect(JSON.stringify(file)).not.toContain('6.10');
+    const taken = await put(to.sittingId, file);
+    expect([taken.status, { ...(taken.body as PaperFile), title: '' }]).toEqual([200, { ...file, title: '' }]);
+    const items = await lead.get(`/api/sittings/${to.sittingId}/items`).expect(200);
+    // Slater's coefficients (Phys. Rev. 36, 57, 1930): Cl 3p 6.10; sigma of Mg2+ 2p is 7 x 0.35 + 2 x 0.85 = 4.15.
+    expect((items.body as { items: { worked: { key: { text: string } } }[] }).items.map(({ worked }) => worked.key.text)).toEqual(['6.10', '4.15']);
+  });
+
+  it('names item and field of what is wrong, and changes nothing', async () => {
+    const { sittingId } = buildPaper(server, { locked: false });
+    const before = await fileOf(sittingId);
+    const bad = await put(sittingId, { ...before, items: [itemDraft(), itemDraft('Fe', '4p')] });
+    expect(bad.status).toBe(400);
+    expect(bad.body).toMatchObject({ error: { message: 'Item 2: Iron has no 4p electron in its ground state.', fields: { 'items.1.asked.electron': 'Iron has no 4p electron in its ground state.' } } });
+    expect((await put(sittingId, { ...before, boxes: [{ ...before.boxes[0], item: 9 }] })).body).toMatchObject({ error: { fields: { 'boxes.0.item': 'There is no such item.' } } });
+    expect((await put(sittingId, { ...before, version: 2 })).status).toBe(400);
+    expect(await fileOf(sittingId)).toEqual(before);
+  });
+
+  it('is not taken by a locked paper', async () => {
+    const { sittingId } = buildPaper(server);
+    expect((await put(sittingId, await fileOf(sittingId))).status).toBe(409);
+  });
+
+  it('has its schema in the open', async () => {
+    const { body } = await server.nobody().get('/api/schemas/paper-1.json').expect(200);
+    expect(body).toMatchObject({ $id: 'paper-1.json', type: 'object', properties: { format: { const: 'meniscus-paper' }, version: { const: 1 } } });
+  });
+
+  it('is kept from readers', async () => {
+    const { sittingId } = buildPaper(server, { locked: false });
+    await (await server.signInAs('readerOne')).get(`/api/sittings/${sittingId}/paper.json`).expect(403);
+  });
+});
