@@ -1,14 +1,19 @@
 import type { Router } from 'express';
 import { z } from 'zod';
-import { getPaperFile, getPaperSchema, paperFile, putPaperFile } from '../../shared/contracts/paper-file';
+import { getPaperFile, getPaperPdf, getPaperSchema, paperFile, putPaperFile } from '../../shared/contracts/paper-file';
 import type { Context } from '../context';
-import { openRoute, route } from '../http/route';
+import { asyncRoute, openRoute, route } from '../http/route';
 import { seenRev } from '../http/seen-rev';
 import * as papers from '../services/paper-file';
+import { paperPdf } from '../services/paper-pdf';
 
 export function paperFileRoutes(router: Router, context: Context): void {
   const schema = { $id: 'paper-1.json', title: 'A paper of numeric items', ...z.toJSONSchema(paperFile, { io: 'input' }) };
   openRoute(router, context, getPaperSchema, () => schema);
   route(router, context, getPaperFile, ({ actor, params }) => papers.paperFileFor(context, actor, params.id));
   route(router, context, putPaperFile, ({ actor, params, body, req }) => papers.takePaperFile(context, actor, params.id, seenRev(req), body));
+  asyncRoute(router, context, getPaperPdf, async ({ actor, params, res }) => {
+    const { fileName, bytes } = await paperPdf(context, actor, params.id);
+    res.set({ 'Content-Type': 'application/pdf', 'Content-Disposition': `inline; filename="${fileName}"`, 'Cache-Control': 'private, no-store' }).send(bytes);
+  });
 }

@@ -49,4 +49,13 @@ export const getPaperSchema = defineRoute({
   response: z.record(z.string(), z.unknown()),
 });
 
-export const paperFileRoutes = { getPaperFile, putPaperFile, getPaperSchema };
+export const getPaperPdf = defineRoute({
+  method: 'get',
+  path: '/sittings/:id/paper.pdf',
+  summary: 'The paper and its mark scheme as a PDF, for printing.',
+  access: { who: 'course', roles: ['lead', 'external'] },
+  params: idParams,
+  bytes: 'application/pdf',
+});
+
+export const paperFileRoutes = { getPaperFile, putPaperFile, getPaperSchema, getPaperPdf };

@@ -1,3 +1,4 @@
+import { PDFDocument } from 'pdf-lib';
 import type { Agent } from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { PaperFile } from '../../shared/contracts/paper-file';
@@ -53,6 +54,21 @@ describe('a paper as a file', () => {
   it('has its schema in the open', async () => {
     const { body } = await server.nobody().get('/api/schemas/paper-1.json').expect(200);
     expect(body).toMatchObject({ $id: 'paper-1.json', type: 'object', properties: { format: { const: 'meniscus-paper' }, version: { const: 1 } } });
+  });
+
+  it('prints as a PDF with its own fonts, questions first, then the scheme', async () => {
+    const { sittingId } = buildPaper(server, { drafts, locked: false });
+    const { body, headers } = await lead.get(`/api/sittings/${sittingId}/paper.pdf`).buffer(true).parse((response, done) => {
+      const chunks: Buffer[] = [];
+      response.on('data', (chunk: Buffer) => chunks.push(chunk));
+      response.on('end', () => done(null, Buffer.concat(chunks)));
+    }).expect(200);
+    expect(headers['content-type']).toBe('application/pdf');
+    const document = await PDFDocument.load(body as Buffer);
+    expect(document.getPageCount()).toBe(2);
+    expect(document.getTitle()).toBe('CHM 214, Paper 2, spring sitting: paper and mark scheme');
+    const fontFiles = document.context.enumerateIndirectObjects().filter(([, object]) => object.toString().includes('/FontFile2'));
+    expect(fontFiles.length).toBeGreaterThanOrEqual(3);
   });
 
   it('is kept from readers', async () => {
