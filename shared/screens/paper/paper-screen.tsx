@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useState, type ReactNode } from 'react';
 import { useRouter } from 'expo-router';
 import { v7 as uuidv7 } from 'uuid';
 import { View } from 'react-native';
@@ -6,7 +6,7 @@ import { useItems, useMakeItem, useOrderItems } from '../../client/items';
 import { useSitting } from '../../client/sittings';
 import type { ItemView } from '../../contracts/items';
 import type { SittingView } from '../../contracts/sittings';
-import { Button, ButtonLink } from '../../ui/button';
+import { Button } from '../../ui/button';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
 import { useIsWide } from '../../ui/use-breakpoint';
@@ -19,6 +19,7 @@ import { ItemList } from './item-list';
 import { ItemReader } from './item-reader';
 import { LockButton } from './lock-button';
 import { newDraft } from './new-draft';
+import { PaperFiles, TakeButton } from './paper-files';
 import { words } from './words';
 
 interface PaperScreenProps {
@@ -94,14 +95,10 @@ function PaperPanes({ sitting, items, lockedAt, itemId }: PanesProps) {
           {trouble.message}
         </Text>
       ) : null}
-      <View style={{ padding: 12, gap: 8 }}>
-        <ButtonLink isSmall isWide icon="guard" href={`/sittings/${sitting.id}/vetting`} testID="to-vetting">
-          {words.vet}
-        </ButtonLink>
-      </View>
+      <PaperFiles sitting={sitting} items={items.length} canChange={canChange} />
     </View>
   );
-  if (items.length === 0) return <NoItems canChange={canChange} isAdding={make.isPending} message={trouble?.message ?? null} onAdd={add} />;
+  if (items.length === 0) return <NoItems canChange={canChange} isAdding={make.isPending} message={trouble?.message ?? null} onAdd={add} others={<EarlierWays sitting={sitting} onBank={() => setBankOpen(true)} isBankOpen={isBankOpen} onCloseBank={() => setBankOpen(false)} />} />;
   const back = isWide ? null : (
     <Button kind="text" icon="back" onPress={() => choose(null)}>
       {words.backToItems}
@@ -147,7 +144,35 @@ function PaperPanes({ sitting, items, lockedAt, itemId }: PanesProps) {
   );
 }
 
-function NoItems({ canChange, isAdding, message, onAdd }: { canChange: boolean; isAdding: boolean; message: string | null; onAdd: () => void }) {
+interface EarlierWaysProps {
+  readonly sitting: SittingView;
+  readonly isBankOpen: boolean;
+  readonly onBank: () => void;
+  readonly onCloseBank: () => void;
+}
+
+/** Other ways to a paper than item by item. */
+function EarlierWays({ sitting, isBankOpen, onBank, onCloseBank }: EarlierWaysProps) {
+  return (
+    <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 8 }}>
+      <Button kind="text" isSmall icon="tray" onPress={onBank} testID="item-bank">
+        {words.bank.open}
+      </Button>
+      <TakeButton sitting={sitting} items={0} />
+      {isBankOpen ? <BankDialog sittingId={sitting.id} onClose={onCloseBank} /> : null}
+    </View>
+  );
+}
+
+interface NoItemsProps {
+  readonly canChange: boolean;
+  readonly isAdding: boolean;
+  readonly message: string | null;
+  readonly onAdd: () => void;
+  readonly others: ReactNode;
+}
+
+function NoItems({ canChange, isAdding, message, onAdd, others }: NoItemsProps) {
   return (
     <View style={{ padding: 32, gap: 14, alignItems: 'flex-start', maxWidth: 560 }}>
       <Text variant="display" level={1}>
@@ -159,6 +184,7 @@ function NoItems({ canChange, isAdding, message, onAdd }: { canChange: boolean; 
           {words.addItem}
         </Button>
       ) : null}
+      {canChange ? others : null}
       {message === null ? null : (
         <Text variant="small" tone="methyl" live="polite">
           {message}

@@ -5,6 +5,15 @@ const many = (count: number, one: string, more: string): string => `${count.toLo
 /** The words of the item editor. */
 export const words = {
   vet: 'Vet the paper',
+  files: {
+    print: 'Print view',
+    save: 'Save as a file',
+    take: 'Take from a file',
+    takeTitle: (name: string) => `Take the paper from ${name}?`,
+    takeText: (items: number) => (items === 0 ? 'Its items and regions come into this paper; their keys are worked anew.' : `The ${items === 1 ? 'item' : `${items} items`} of this paper and its regions give way to those of the file. Their keys are worked anew. When anything in the file is wrong, nothing changes.`),
+    confirm: 'Take it',
+    keep: 'Keep the paper',
+  },
   bank: {
     open: 'Earlier items',
     title: 'Items of earlier papers',
