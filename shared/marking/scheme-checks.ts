@@ -1,4 +1,4 @@
-import { equals, fromFractionText, type Exact } from '../chemistry/exact';
+import { equals, fromFractionText, toFigures, type Exact } from '../chemistry/exact';
 import { bandProblems, type SchemeProblem } from './bands';
 import { readAnswer } from './read-answer';
 import type { Asked, ItemScheme, Key } from './scheme';
@@ -17,7 +17,8 @@ export const defaultScheme = (asked: Asked, key: Key, maxGrains: number): ItemSc
   twoAnswers: 'ask',
 });
 
-function keyProblems({ text, decimals }: Key, value: Exact): SchemeProblem[] {
+function keyProblems({ text, decimals, figures }: Key, value: Exact): SchemeProblem[] {
+  if (figures !== undefined) return text === toFigures(value, figures) ? [] : [{ path: 'key', message: `The printed key ${text} is not the computed value to ${figures} figures.` }];
   const read = readAnswer(text, []);
   if (!read.ok || !equals(read.value, value) || read.decimals !== decimals) {
     return [{ path: 'key', message: `The printed key ${text} is not the computed value to ${decimals} decimals.` }];
@@ -30,8 +31,11 @@ export function schemeProblems(scheme: ItemScheme): SchemeProblem[] {
   const value = fromFractionText(scheme.key.value);
   const problems = [...keyProblems(scheme.key, value), ...bandProblems(scheme.bands, value, scheme.maxGrains)];
   if (!Number.isInteger(scheme.maxGrains) || scheme.maxGrains <= 0) problems.push({ path: 'maxGrains', message: 'An item is worth more than 0 marks.' });
-  const { downToDecimals } = scheme.roundings;
-  if (downToDecimals !== null && (downToDecimals < 0 || downToDecimals >= scheme.key.decimals)) {
+  const { downToDecimals, downToFigures = null } = scheme.roundings;
+  if (downToFigures !== null && (scheme.key.figures === undefined || downToFigures < 1 || downToFigures > scheme.key.figures)) {
+    problems.push({ path: 'roundings.downToFigures', message: 'Roundings have at most the figures of the key.' });
+  }
+  if (scheme.key.figures === undefined && downToDecimals !== null && (downToDecimals < 0 || downToDecimals >= scheme.key.decimals)) {
     problems.push({ path: 'roundings.downToDecimals', message: 'Roundings have fewer decimals than the key.' });
   }
   return problems;

@@ -42,6 +42,9 @@ export interface Asked {
   readonly electron: string;
   readonly quantity: QuantityName;
   readonly convention: ConventionName;
+  /** For an electronegativity: the covalent radius in ångström as the question states it, and whether the electron counts itself. */
+  readonly radiusAngstrom?: string;
+  readonly countsItself?: boolean;
   /** A typed configuration, such as `1s2 2s2 2p5 3s1`, where the ground state is not meant. */
   readonly configuration?: string;
 }
@@ -53,11 +56,15 @@ export interface Key {
   readonly text: string;
   /** The decimals an answer must show to meet the key itself; its trailing zeros are information. */
   readonly decimals: number;
+  /** The significant figures of a key that is no short decimal, which roundings alone meet; absent for the others. */
+  readonly figures?: number;
 }
 
 export interface RoundingPolicy {
   /** The fewest decimals still accepted; null when only the key's own decimals are. */
   readonly downToDecimals: number | null;
+  /** The fewest significant figures still accepted, for a key that states its figures. */
+  readonly downToFigures?: number | null;
   /** Whether cutting off the places counts like rounding them. */
   readonly truncation: boolean;
 }

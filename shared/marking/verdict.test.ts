@@ -95,3 +95,11 @@ it('a named slip pays its share with the roundings of the key, and explains a 0 
   expect(mark('6.10')).toMatchObject({ grains: 3600, rule: 'key' });
   expect(mark('9.99')).toMatchObject({ grains: 0, rule: 'nothing' });
 });
+
+it('a key that is no short decimal is met by roundings to the figures given, from the fewest that count', () => {
+  // E = -13.605693 eV x (6.10 / 3)^2 = -56.2522... eV for 3p of Cl (Slater 1930, n* = 3).
+  const energy = { ...defaultScheme({ ...chlorine, quantity: 'energy-ev' }, { value: '-5625219/100000', text: '-56.25', decimals: 2, figures: 4 }, 3600), units: ['eV'], roundings: { downToDecimals: null, downToFigures: 3, truncation: false } };
+  const got = (text: string) => markAnswer(energy, { text }, emptyContext);
+  expect(['-56.25', '-56.3', '-56.252', '-56.25 eV', '−56.3eV'].map((text) => [got(text).grains, got(text).rule])).toEqual(Array.from({ length: 5 }, () => [3600, 'rounding']));
+  expect(['-56', '-56.26', '56.25', '-56.250'].map((text) => got(text).grains)).toEqual([0, 0, 0, 0]);
+});

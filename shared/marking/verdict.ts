@@ -26,7 +26,7 @@ const codeVerdict = (scheme: ItemScheme, code: Code): Verdict => {
 type Claim = Verdict & { readonly grains: number };
 
 function keyClaim(scheme: ItemScheme, read: ReadValue, key: Exact, shared: Record<string, string>): Claim | null {
-  const met = meets(read, { value: key, decimals: scheme.key.decimals }, scheme.roundings);
+  const met = meets(read, { value: key, decimals: scheme.key.decimals, figures: scheme.key.figures }, scheme.roundings);
   if (met === null) return null;
   return { grains: scheme.maxGrains, rule: met === 'exactly' ? 'key' : 'rounding', numbers: { ...shared, decimals: String(read.decimals) } };
 }
