@@ -36,6 +36,7 @@ function addItems(context: Context, lead: Actor, sittingId: string, items: reado
     const draft: ItemDraft = {
       asked: { symbol, charge, electron, quantity, convention: 'slater' },
       decimals: workedKey(item).decimals,
+      figures: 4,
       prompt: null,
       marks: marksText(item.maxGrains),
       roundings: { downToDecimals: 1, truncation: false },

@@ -1,12 +1,12 @@
 import { occupiedElectrons } from '../../shared/chemistry/configurations';
-import { divide, exactDecimals, fromFractionText, multiply, toDecimals, toFractionText, whole, type Exact } from '../../shared/chemistry/exact';
+import { divide, exactDecimals, fromFractionText, multiply, toDecimals, toFigures, toFractionText, whole, type Exact } from '../../shared/chemistry/exact';
 import type { ProblemCode } from '../../shared/chemistry/result';
 import { valuesByOtherConventions } from '../../shared/chemistry/other-conventions';
 import { proposedStem } from '../../shared/chemistry/stem';
 import { slipLetter } from '../../shared/chemistry/slips/letters';
 import { slipsOf } from '../../shared/chemistry/slips/slips-of';
 import { work, type Worked } from '../../shared/chemistry/work';
-import { askedConventions, type AlternativeDraft, type BandDraft, type ItemDraft, type ItemProblem, type WorkedDraft } from '../../shared/contracts/items';
+import { askedConventions, askedQuantities, type AlternativeDraft, type BandDraft, type ItemDraft, type ItemProblem, type WorkedDraft } from '../../shared/contracts/items';
 import { bandRange } from '../../shared/marking/bands';
 import { marksText } from '../../shared/marking/grains';
 import { guardOf, untoldSlips } from '../../shared/marking/guard';
@@ -96,10 +96,29 @@ function problemsOf(scheme: ItemScheme): ItemProblem[] {
   return found.map((problem) => (problem.path === 'decimals' ? { ...problem, message: sentence } : problem));
 }
 
+/** What is asked, without fields that this quantity has no use for. */
+function askedOf({ asked: { radiusAngstrom, countsItself, ...asked } }: ItemDraft): Asked {
+  if (asked.quantity !== 'electronegativity') return asked;
+  return { ...asked, ...(radiusAngstrom === undefined ? {} : { radiusAngstrom }), ...(countsItself === undefined ? {} : { countsItself }) };
+}
+
+/** The key as the question states it: to decimals where it is a short decimal, else to figures. */
+function keyOf({ value, figures }: Worked, draft: ItemDraft): ItemScheme['key'] {
+  if (figures === null) return { value: toFractionText(value), text: toDecimals(value, draft.decimals), decimals: draft.decimals };
+  const text = toFigures(value, draft.figures);
+  return { value: toFractionText(value), text, decimals: text.split('.')[1]?.length ?? 0, figures: draft.figures };
+}
+
+/** Of the two ways to round, the one that the key has. */
+function roundingsOf({ figures }: Worked, { roundings: { downToDecimals, downToFigures = null, truncation }, figures: asked }: ItemDraft): ItemScheme['roundings'] {
+  if (figures === null) return { downToDecimals, truncation };
+  return { downToDecimals: null, downToFigures: downToFigures === null ? null : Math.min(downToFigures, asked), truncation };
+}
+
 /** Reads every field of a draft and computes its key; the key is never taken from what was sent. */
 export function readDraft(draft: ItemDraft): ReadDraft {
   const refusals: ItemProblem[] = [];
-  const asked: Asked = draft.asked;
+  const asked = askedOf(draft);
   const worked = work(asked);
   if (!worked.ok) refusals.push({ path: fieldOf[worked.problem.code] ?? 'asked.electron', message: worked.problem.message });
   const marks = readMarks(draft.marks);
@@ -115,14 +134,13 @@ export function readDraft(draft: ItemDraft): ReadDraft {
   if (!worked.ok || maxGrains === null || refusals.length > 0) {
     return { scheme: null, worked: worked.ok ? worked.value : null, maxGrains, refusals, problems: [] };
   }
-  const { value } = worked.value;
   const scheme: ItemScheme = {
     kind: 'numeric',
     asked,
     maxGrains,
-    key: { value: toFractionText(value), text: toDecimals(value, draft.decimals), decimals: draft.decimals },
-    units: [],
-    roundings: draft.roundings,
+    key: keyOf(worked.value, draft),
+    units: worked.value.unit === '' ? [] : [worked.value.unit],
+    roundings: roundingsOf(worked.value, draft),
     alternatives: alternatives.filter((alternative) => alternative !== null),
     bands: bands.filter((band) => band !== null),
     ...(slips.length === 0 ? {} : { slips: slips.filter((slip) => slip !== null) }),
@@ -134,6 +152,10 @@ export function readDraft(draft: ItemDraft): ReadDraft {
 
 /** The accepted roundings of a key, fewest decimals last: of 61/10 "6.1", of 91/20 "4.5" and "4.6". */
 export function roundingTexts({ key, roundings: policy }: ItemScheme): string[] {
+  if (key.figures !== undefined) {
+    const fewest = policy.downToFigures ?? key.figures;
+    return Array.from({ length: key.figures - fewest }, (_, index) => toFigures(fromFractionText(key.value), (key.figures ?? 0) - 1 - index));
+  }
   if (policy.downToDecimals === null) return [];
   const value = fromFractionText(key.value);
   const texts: string[] = [];
@@ -161,7 +183,8 @@ export function workDraft(draft: ItemDraft): WorkedDraft {
   const drawable = scheme && scheme.bands.every((band) => rangeTexts(band, scheme.key) !== null);
   return {
     label: itemLabel(draft.asked),
-    key: worked && { value: toFractionText(worked.value), text: toDecimals(worked.value, draft.decimals), decimals: draft.decimals },
+    key: worked && { ...keyOf(worked, draft), figures: worked.figures === null ? null : draft.figures },
+    unit: worked?.unit ?? '',
     derivation: worked?.derivation ?? null,
     scale: drawable ? scaleOf(scheme) : null,
     roundings: scheme ? roundingTexts(scheme) : [],
@@ -172,7 +195,7 @@ export function workDraft(draft: ItemDraft): WorkedDraft {
     untold: scheme ? untoldSlips(scheme) : [],
     others: valuesByOtherConventions(draft.asked).map(({ convention, name, text }) => ({ convention, name, text })),
     electrons: electrons.ok ? [...electrons.value] : [],
-    proposedPrompt: proposedStem(draft.asked, draft.decimals),
+    proposedPrompt: proposedStem(draft.asked, draft.decimals, worked?.figures === null || !worked ? null : draft.figures),
     maxGrains,
     problems: [...refusals, ...problems],
   };
@@ -186,16 +209,19 @@ function widthText({ kind, width }: Band, decimals: number): string {
 
 /** A stored scheme as the editor's draft; the wording is null where it is the proposed one. */
 export function draftOf(scheme: ItemScheme, prompt: string): ItemDraft {
-  const { symbol, charge, electron, quantity, convention } = scheme.asked;
-  const known = askedConventions.find((name) => name === convention);
-  if ((quantity !== 'zeff' && quantity !== 'sigma') || known === undefined) throw new Error(`The editor has no fields for ${quantity} under ${convention}.`);
-  const decimals = scheme.key.decimals;
+  const { symbol, charge, electron, radiusAngstrom, countsItself } = scheme.asked;
+  const convention = askedConventions.find((name) => name === scheme.asked.convention);
+  const quantity = askedQuantities.find((name) => name === scheme.asked.quantity);
+  if (quantity === undefined || convention === undefined) throw new Error(`The editor has no fields for ${scheme.asked.quantity} under ${scheme.asked.convention}.`);
+  const { decimals, figures } = scheme.key;
+  const { downToDecimals, downToFigures, truncation } = scheme.roundings;
   return {
-    asked: { symbol, charge, electron, quantity, convention: known },
-    decimals,
-    prompt: prompt === proposedStem(scheme.asked, decimals) ? null : prompt,
+    asked: { symbol, charge, electron, quantity, convention, ...(radiusAngstrom === undefined ? {} : { radiusAngstrom }), ...(countsItself === undefined ? {} : { countsItself }) },
+    decimals: Math.min(4, decimals),
+    figures: figures ?? 4,
+    prompt: prompt === proposedStem(scheme.asked, decimals, figures ?? null) ? null : prompt,
     marks: marksText(scheme.maxGrains),
-    roundings: scheme.roundings,
+    roundings: { downToDecimals, truncation, ...(downToFigures === undefined ? {} : { downToFigures }) },
     bands: scheme.bands.map((band) => ({ name: band.name, kind: band.kind, width: widthText(band, decimals), marks: marksText(band.grains) })),
     alternatives: scheme.alternatives.map(({ name, convention = null, text, grains, reason }) => ({ name, convention: convention === 'typed' ? null : convention, value: convention === null ? text : '', marks: marksText(grains), reason })),
     slips: (scheme.slips ?? []).map(({ id, grains }) => ({ id, marks: marksText(grains) })),

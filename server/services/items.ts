@@ -55,7 +55,7 @@ function storable(draft: ItemDraft): { scheme: ItemScheme; prompt: string } {
   const { scheme, refusals } = readDraft(draft);
   const [first] = refusals;
   if (!scheme || first) throw invalidRequest(first?.message ?? 'The item cannot be worked.', Object.fromEntries(refusals.map(({ path, message }) => [path, message])));
-  return { scheme, prompt: draft.prompt ?? proposedStem(draft.asked, draft.decimals) };
+  return { scheme, prompt: draft.prompt ?? proposedStem(scheme.asked, scheme.key.decimals, scheme.key.figures ?? null) };
 }
 
 /** Adds an item at the end of an open paper; its key is computed here. */

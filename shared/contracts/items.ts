@@ -7,9 +7,8 @@ const overseers = { who: 'course', roles: ['lead', 'external'] } as const;
 
 export const bandKinds = ['absolute', 'relative', 'decimal-places', 'significant-figures'] as const;
 export const answerPolicies = ['ask', 'none'] as const;
-export const askedQuantities = ['zeff', 'sigma'] as const;
-/** Conventions whose keys are short decimals, so that a question can ask for all of them. */
-export const askedConventions = ['slater', 'slater-035-in-1s', 'slater-d-at-1', 'core-count', 'scf'] as const;
+export const askedQuantities = ['zeff', 'sigma', 'energy-ev', 'energy-kj-mol', 'radius-pm', 'electronegativity'] as const;
+export const askedConventions = ['slater', 'slater-035-in-1s', 'slater-d-at-1', 'core-count', 'scf', 'ionisation-energy'] as const;
 
 const bandDraft = z.strictObject({
   name: z.string().trim().min(1, 'Name the band.').max(60),
@@ -44,13 +43,18 @@ export const itemDraft = z.strictObject({
     electron: z.string().max(3),
     quantity: z.enum(askedQuantities),
     convention: z.enum(askedConventions),
+    /** Of an electronegativity: the radius as the question states it, in ångström, and whether the electron counts itself. */
+    radiusAngstrom: z.string().trim().max(12).optional(),
+    countsItself: z.boolean().optional(),
   }),
-  /** The decimals that the question asks for. */
+  /** The decimals that the question asks for, where the key is a short decimal. */
   decimals: z.int().min(0).max(4),
+  /** The significant figures that it asks for, where the key is none. */
+  figures: z.int().min(2).max(6).default(4),
   /** Null: as the server proposes it from the rest. */
   prompt: z.string().trim().min(1, 'Write the question, or take the proposed one.').max(600).nullable(),
   marks: z.string().max(16),
-  roundings: z.strictObject({ downToDecimals: z.int().min(0).max(4).nullable(), truncation: z.boolean() }),
+  roundings: z.strictObject({ downToDecimals: z.int().min(0).max(4).nullable(), downToFigures: z.int().min(1).max(6).nullable().optional(), truncation: z.boolean() }),
   bands: z.array(bandDraft).max(8),
   alternatives: z.array(alternativeDraft).max(8).default([]),
   slips: z.array(slipDraft).max(60).default([]),
@@ -65,7 +69,9 @@ export type ItemProblem = z.infer<typeof itemProblem>;
 /** What follows from a draft. Key, derivation and scale are null while no key can be computed. */
 export const workedDraft = z.object({
   label: z.string(),
-  key: z.object({ value: z.string(), text: z.string(), decimals: z.int() }).nullable(),
+  key: z.object({ value: z.string(), text: z.string(), decimals: z.int(), figures: z.int().nullable() }).nullable(),
+  /** Of the key, where it has one. */
+  unit: z.string(),
   derivation: z.unknown(),
   scale: z.unknown(),
   /** Accepted roundings as they would be written. */

@@ -236,4 +236,21 @@ describe('building a paper', () => {
     const iron = await lead.post('/api/keys').send({ sittingId: paper.sittingId, draft: itemDraft('Fe', '4s') }).expect(200);
     expect(iron.body).toMatchObject({ guard: [], untold: [{ text: '3.80', rounded: '3.8', decimals: 1 }] });
   });
+
+  it('asks for what follows from Z_eff to figures, with its unit, and marks it so', async () => {
+    const asked = { symbol: 'Cl', charge: 0, electron: '3p', quantity: 'energy-ev' as const, convention: 'slater' as const };
+    const made = await lead.post(`/api/sittings/${paper.sittingId}/items`).send(itemDraft('Cl', '3p', { asked, roundings: { downToDecimals: null, downToFigures: 3, truncation: false } })).expect(201);
+    const { id, worked, draft, prompt } = made.body as { id: string; worked: { key: { text: string; figures: number }; unit: string; roundings: string[]; problems: unknown[] }; draft: ItemDraft; prompt: string };
+    // E = -13.605693 eV x (6.10 / 3)^2 = -56.2529 eV (Slater 1930, n* = 3; worked by hand).
+    expect(worked).toMatchObject({ key: { text: '-56.25', figures: 4 }, unit: 'eV', roundings: ['-56.3'], problems: [] });
+    expect(prompt).toContain('to four significant figures');
+    expect(draft).toMatchObject({ asked, figures: 4, roundings: { downToFigures: 3 } });
+    const spot = async (text: string) => ((await lead.post(`/api/items/${id}/spot-test`).send({ text }).expect(200)).body as { grains: number }).grains;
+    expect(await Promise.all(['-56.25', '-56.3 eV', '-56', '56.25'].map(spot))).toEqual([3600, 3600, 0, 0]);
+    const chi = await lead.post('/api/keys').send({ sittingId: paper.sittingId, draft: itemDraft('Cl', '3p', { asked: { ...asked, quantity: 'electronegativity', radiusAngstrom: '0.99', countsItself: false } }) }).expect(200);
+    // 0.359 x 6.10 / 0.99^2 + 0.744 = 2.978 (A. L. Allred and E. G. Rochow, J. Inorg. Nucl. Chem. 5, 264, 1958; worked by hand).
+    expect(chi.body).toMatchObject({ key: { text: '2.978' } });
+    const lacking = await lead.post('/api/keys').send({ sittingId: paper.sittingId, draft: itemDraft('Cl', '3p', { asked: { ...asked, quantity: 'electronegativity' } }) }).expect(200);
+    expect(lacking.body.problems).toHaveLength(1);
+  });
 });

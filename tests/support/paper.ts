@@ -13,6 +13,7 @@ import type { TestServer } from './test-server';
 export const itemDraft = (symbol = 'Cl', electron = '3p', changes: Partial<ItemDraft> = {}): ItemDraft => ({
   asked: { symbol, charge: 0, electron, quantity: 'zeff', convention: 'slater' },
   decimals: 2,
+  figures: 4,
   prompt: null,
   marks: '3',
   roundings: { downToDecimals: 1, truncation: false },

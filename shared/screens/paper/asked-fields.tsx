@@ -3,6 +3,7 @@ import { View } from 'react-native';
 import { occupiedElectrons } from '../../chemistry/configurations';
 import { elementBySymbol } from '../../chemistry/elements';
 import type { ItemDraft } from '../../contracts/items';
+import { Checkbox } from '../../ui/checkbox';
 import { Icon } from '../../ui/icon';
 import { Pressable } from '../../ui/pressable';
 import { Select } from '../../ui/select';
@@ -15,6 +16,8 @@ import { words } from './words';
 
 interface AskedFieldsProps {
   readonly draft: ItemDraft;
+  /** The key is no short decimal, so that the question states its figures. */
+  readonly hasFigures: boolean;
   readonly problemAt: (path: string) => string | undefined;
   readonly onChange: (draft: ItemDraft, field: string) => void;
 }
@@ -22,7 +25,13 @@ interface AskedFieldsProps {
 const charges = [-4, -3, -2, -1, 0, 1, 2, 3, 4, 5, 6, 7, 8] as const;
 const decimals = ['0', '1', '2', '3', '4'] as const;
 
-const conventionOrder = ['slater', 'slater-035-in-1s', 'slater-d-at-1', 'core-count', 'scf'] as const satisfies readonly ItemDraft['asked']['convention'][];
+const quantityOrder = ['zeff', 'sigma', 'energy-ev', 'energy-kj-mol', 'radius-pm', 'electronegativity'] as const satisfies readonly ItemDraft['asked']['quantity'][];
+
+/** What follows from Z_eff is worked out from Slater’s rules only. */
+const isFollowed = (quantity: ItemDraft['asked']['quantity']): boolean => quantity !== 'zeff' && quantity !== 'sigma';
+const figuresOffered = [2, 3, 4, 5, 6] as const;
+
+const conventionOrder = ['slater', 'slater-035-in-1s', 'slater-d-at-1', 'core-count', 'scf', 'ionisation-energy'] as const satisfies readonly ItemDraft['asked']['convention'][];
 
 const chargeText = (charge: number): string => (charge > 0 ? `+${charge}` : charge < 0 ? `−${-charge}` : '0');
 
@@ -30,7 +39,7 @@ const chargeText = (charge: number): string => (charge > 0 ? `+${charge}` : char
 const chargesOf = (symbol: string, asked: number): number[] => charges.filter((charge) => charge === asked || occupiedElectrons(symbol, charge).ok);
 
 /** What the item asks for: quantity, element, charge, electron, decimals, marks. */
-export function AskedFields({ draft, problemAt, onChange }: AskedFieldsProps) {
+export function AskedFields({ draft, hasFigures, problemAt, onChange }: AskedFieldsProps) {
   const { asked } = draft;
   const put = (changes: Partial<ItemDraft['asked']>, field: string) => onChange({ ...draft, asked: { ...asked, ...changes } }, field);
   const electrons = occupiedElectrons(asked.symbol, asked.charge);
@@ -46,11 +55,8 @@ export function AskedFields({ draft, problemAt, onChange }: AskedFieldsProps) {
           <Select
             label={words.asked.quantity}
             value={asked.quantity}
-            options={[
-              { value: 'zeff', label: words.asked.quantities.zeff },
-              { value: 'sigma', label: words.asked.quantities.sigma },
-            ]}
-            onChange={(quantity) => put({ quantity }, 'quantity')}
+            options={quantityOrder.map((value) => ({ value, label: words.asked.quantities[value] }))}
+            onChange={(quantity) => put({ quantity, ...(quantity === 'electronegativity' ? { radiusAngstrom: asked.radiusAngstrom ?? '1.00', countsItself: asked.countsItself ?? false } : {}), ...(isFollowed(quantity) ? { convention: 'slater' } : {}) }, 'quantity')}
             testID="quantity"
           />
         </View>
@@ -100,16 +106,36 @@ export function AskedFields({ draft, problemAt, onChange }: AskedFieldsProps) {
           />
         </View>
         <View style={{ flexGrow: 1, flexBasis: 66 }}>
-          <Select
-            label={words.asked.decimals}
-            value={String(draft.decimals)}
-            options={decimals.map((value) => ({ value, label: value }))}
-            onChange={(value) => onChange({ ...draft, decimals: Number(value) }, 'decimals')}
-            refusedBy={problemAt('decimals') && below}
-            testID="decimals"
-          />
+          {hasFigures ? (
+            <Select
+              label={words.asked.figures}
+              value={String(draft.figures)}
+              options={figuresOffered.map((value) => ({ value: String(value), label: String(value) }))}
+              onChange={(value) => onChange({ ...draft, figures: Number(value) }, 'figures')}
+              testID="figures"
+            />
+          ) : (
+            <Select
+              label={words.asked.decimals}
+              value={String(draft.decimals)}
+              options={decimals.map((value) => ({ value, label: value }))}
+              onChange={(value) => onChange({ ...draft, decimals: Number(value) }, 'decimals')}
+              refusedBy={problemAt('decimals') && below}
+              testID="decimals"
+            />
+          )}
         </View>
       </View>
+      {asked.quantity === 'electronegativity' ? (
+        <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'flex-end', gap: 10 }}>
+          <View style={{ width: 110 }}>
+            <Vessel label={words.asked.radius} value={asked.radiusAngstrom ?? ''} onChange={(radiusAngstrom) => put({ radiusAngstrom }, 'radius')} variant="reading" maxLength={12} testID="radius" />
+          </View>
+          <Checkbox isChecked={asked.countsItself ?? false} onChange={(countsItself) => put({ countsItself }, 'counts-itself')}>
+            {words.asked.countsItself}
+          </Checkbox>
+        </View>
+      ) : null}
       {sentences.length > 0 ? (
         <Text id={below} variant="small" tone="methyl" live="polite">
           {sentences.join(' ')}

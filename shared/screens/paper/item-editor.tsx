@@ -46,7 +46,7 @@ export function ItemEditor({ item, count, lockButton, back, onMove, onRemoved }:
     <SpotTestPane text={spot.text} onChange={spot.setText} result={spot.result} isWorked={worked.scale !== null} />
   );
   const scale = <ItemScale worked={worked} value={spot.drop} />;
-  const asked = <AskedFields draft={draft} problemAt={problemAt} onChange={keeper.change} />;
+  const asked = <AskedFields draft={draft} hasFigures={(worked.key?.figures ?? null) !== null} problemAt={problemAt} onChange={keeper.change} />;
   const printed = <PrintedStem number={item.number} draft={draft} worked={worked} error={problemAt('prompt')} canChange onChange={keeper.change} />;
   const key = <KeyWorked worked={worked} quantity={draft.asked.quantity} />;
   const counts = <WhatCounts draft={draft} worked={worked} problemAt={problemAt} onChange={keeper.change} />;

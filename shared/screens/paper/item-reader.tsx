@@ -33,7 +33,7 @@ export function ItemReader({ item, line, explanation, canTry, back }: ItemReader
     [words.asked.quantity, words.asked.quantityNames[draft.asked.quantity]],
     [words.asked.convention, words.asked.conventions[draft.asked.convention]],
     [words.asked.element, worked.label],
-    [words.asked.decimals, words.counts.decimalsOf(draft.decimals)],
+    worked.key?.figures ? [words.asked.figures, words.counts.figuresOf(draft.figures)] : [words.asked.decimals, words.counts.decimalsOf(draft.decimals)],
   ];
   return (
     <View style={{ flex: 1 }}>
@@ -99,7 +99,7 @@ function CountsAsText({ item: { draft, worked, maxGrains } }: { item: ItemView }
       <CountRow value={worked.key?.text ?? ''} grains={maxGrains} maxGrains={maxGrains}>
         <Text>
           <Text weight={600}>{words.counts.key}</Text>
-          {words.counts.keyWith(draft.decimals)}
+          {words.counts.keyWith(draft.decimals, worked.key?.figures ?? null)}
         </Text>
       </CountRow>
       <CountRow value={[...new Set(worked.roundings)].join('  ')} grains={downToDecimals === null ? null : maxGrains} maxGrains={maxGrains}>

@@ -6,7 +6,7 @@ import { WorkedDerivation } from '../worked-derivation';
 import { words } from './words';
 
 /** How the key comes about, group by group, with its source. */
-export function KeyWorked({ worked, quantity }: { worked: WorkedDraft; quantity: 'zeff' | 'sigma' }) {
+export function KeyWorked({ worked, quantity }: { worked: WorkedDraft; quantity: string }) {
   const derivation = worked.derivation as DerivationData | null;
   return (
     <View style={{ gap: 10 }} testID="key-worked">

@@ -18,6 +18,7 @@ export function newDraft(last: ItemDraft | undefined): ItemDraft {
   return {
     asked: { symbol, charge: 0, electron: outermostElectron(symbol), quantity: last?.asked.quantity ?? 'zeff', convention: last?.asked.convention ?? 'slater' },
     decimals: last?.decimals ?? 2,
+    figures: last?.figures ?? 4,
     prompt: null,
     marks: last?.marks ?? '3',
     roundings: { downToDecimals: 1, truncation: false },

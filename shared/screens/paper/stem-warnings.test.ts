@@ -6,7 +6,7 @@ import { stemWarnings } from './stem-warnings';
 const asked = (convention: ItemDraft['asked']['convention']): ItemDraft['asked'] => ({ symbol: 'Cl', charge: 0, electron: '3p', quantity: 'zeff', convention });
 
 it('finds nothing missing in what the server proposes, under any convention', () => {
-  for (const convention of ['slater', 'slater-035-in-1s', 'slater-d-at-1', 'core-count', 'scf'] as const) {
+  for (const convention of ['slater', 'slater-035-in-1s', 'slater-d-at-1', 'core-count', 'scf', 'ionisation-energy'] as const) {
     expect(stemWarnings(proposedStem(asked(convention), 2), { asked: asked(convention) }), convention).toEqual([]);
   }
 });

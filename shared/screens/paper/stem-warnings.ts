@@ -9,6 +9,7 @@ const namesConvention: Readonly<Record<ItemDraft['asked']['convention'], RegExp>
   'slater-d-at-1': /slater[^]*(1\.00|by 1\b)/i,
   'core-count': /core|shells? below/i,
   scf: /scf|clementi|self-consistent/i,
+  'ionisation-energy': /ioni[sz]ation/i,
 };
 
 /**

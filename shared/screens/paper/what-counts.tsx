@@ -72,22 +72,35 @@ export function WhatCounts({ draft, worked, problemAt, onChange }: WhatCountsPro
       <CountRow value={worked.key?.text ?? ''} grains={maxGrains} maxGrains={maxGrains}>
         <Text>
           <Text weight={600}>{words.counts.key}</Text>
-          {words.counts.keyWith(draft.decimals)}
+          {words.counts.keyWith(draft.decimals, worked.key?.figures ?? null)}
         </Text>
       </CountRow>
       <CountRow value={[...new Set(worked.roundings)].join('  ')} grains={worked.roundings.length > 0 ? maxGrains : null} maxGrains={maxGrains}>
         <Text weight={600}>{words.counts.rounding}</Text>
         <View style={{ width: 160 }}>
-          <Select
-            label={words.counts.rounding}
-            isLabelHidden
-            height={40}
-            value={roundings.downToDecimals === null ? 'none' : String(roundings.downToDecimals)}
-            options={[{ value: 'none', label: words.counts.roundingNone }, ...places.map((value) => ({ value, label: words.counts.decimalsOf(Number(value)) }))]}
-            onChange={(value) => putRounding({ downToDecimals: value === 'none' ? null : Number(value) }, 'rounding')}
-            error={problemAt('roundings.downToDecimals')}
-            testID="rounding"
-          />
+          {worked.key?.figures ? (
+            <Select
+              label={words.counts.rounding}
+              isLabelHidden
+              height={40}
+              value={String(roundings.downToFigures ?? 'none')}
+              options={[{ value: 'none', label: words.counts.roundingNone }, ...Array.from({ length: draft.figures - 1 }, (_, index) => String(index + 1)).map((value) => ({ value, label: words.counts.figuresOf(Number(value)) }))]}
+              onChange={(value) => putRounding({ downToFigures: value === 'none' ? null : Number(value) }, 'rounding')}
+              error={problemAt('roundings.downToFigures')}
+              testID="rounding"
+            />
+          ) : (
+            <Select
+              label={words.counts.rounding}
+              isLabelHidden
+              height={40}
+              value={roundings.downToDecimals === null ? 'none' : String(roundings.downToDecimals)}
+              options={[{ value: 'none', label: words.counts.roundingNone }, ...places.map((value) => ({ value, label: words.counts.decimalsOf(Number(value)) }))]}
+              onChange={(value) => putRounding({ downToDecimals: value === 'none' ? null : Number(value) }, 'rounding')}
+              error={problemAt('roundings.downToDecimals')}
+              testID="rounding"
+            />
+          )}
         </View>
         {roundings.downToDecimals === null ? null : (
           <Chip isChosen={roundings.truncation} onPress={() => putRounding({ truncation: !roundings.truncation }, 'truncation')}>
