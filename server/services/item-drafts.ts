@@ -66,7 +66,9 @@ function readAlternative(draft: AlternativeDraft, index: number, asked: Asked, u
   if (draft.convention !== null) {
     const worked = work({ ...asked, convention: draft.convention });
     if (!worked.ok) at('convention', worked.problem.message);
-    return worked.ok ? { ...rest, convention: draft.convention, value: toFractionText(worked.value.value), text: worked.value.text, decimals: worked.value.decimals } : null;
+    if (!worked.ok) return null;
+    const { value, text, decimals, figures } = worked.value;
+    return { ...rest, convention: draft.convention, value: toFractionText(value), text, decimals, ...(figures === null ? {} : { figures }) };
   }
   const read = readAnswer(draft.value.trim(), units);
   if (!read.ok) at('value', read.unfinished ? 'Write a value.' : read.message);

@@ -86,6 +86,8 @@ export interface Alternative {
   readonly value: string;
   readonly text: string;
   readonly decimals: number;
+  /** The significant figures of a value that is no short decimal; absent for the others. */
+  readonly figures?: number;
   readonly grains: number;
   readonly reason: string;
   readonly convention?: ConventionName;

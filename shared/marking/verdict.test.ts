@@ -102,4 +102,6 @@ it('a key that is no short decimal is met by roundings to the figures given, fro
   const got = (text: string) => markAnswer(energy, { text }, emptyContext);
   expect(['-56.25', '-56.3', '-56.252', '-56.25 eV', '−56.3eV'].map((text) => [got(text).grains, got(text).rule])).toEqual(Array.from({ length: 5 }, () => [3600, 'rounding']));
   expect(['-56', '-56.26', '56.25', '-56.250'].map((text) => got(text).grains)).toEqual([0, 0, 0, 0]);
+  const other = { ...energy, alternatives: [{ name: 'core count', value: '-741/10', text: '-74.10', decimals: 2, figures: 4, grains: 1200, reason: '' }] };
+  expect(['-74.10', '-74.1', '-74'].map((text) => markAnswer(other, { text }, emptyContext).grains)).toEqual([1200, 1200, 0]);
 });

@@ -33,7 +33,7 @@ function keyClaim(scheme: ItemScheme, read: ReadValue, key: Exact, shared: Recor
 
 const alternativeClaims = (scheme: ItemScheme, read: ReadValue, shared: Record<string, string>): Claim[] =>
   scheme.alternatives.flatMap((alternative): Claim[] => {
-    const met = meets(read, { value: fromFractionText(alternative.value), decimals: alternative.decimals }, scheme.roundings);
+    const met = meets(read, { value: fromFractionText(alternative.value), decimals: alternative.decimals, figures: alternative.figures }, scheme.roundings);
     return met === null ? [] : [{ grains: alternative.grains, rule: 'alternative', numbers: { ...shared, name: alternative.name, alternative: alternative.text } }];
   });
 

@@ -27,6 +27,11 @@ export function WorkedDerivation({ derivation, quantity }: WorkedDerivationProps
         zeff={derivation.zeff.text}
         asked={quantity === 'sigma' ? 'sigma' : 'zeff'}
       />
+      {derivation.steps.map((step) => (
+        <Text key={step} variant="readingS">
+          {step}
+        </Text>
+      ))}
       <Text variant="small" tone="ink2">
         {[derivation.selfScreening, derivation.source].filter((sentence) => sentence !== null).join(' ')}
       </Text>
