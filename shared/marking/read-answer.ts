@@ -35,6 +35,9 @@ export interface Refused {
 
 export type ReadAnswer = ReadValue | Unfinished | Refused;
 
+/** The number as written, without its unit: "56.25" of "56.25 eV". */
+export const writtenNumber = ({ canonical, unit }: ReadValue): string => (unit === null ? canonical : canonical.slice(0, -unit.length).trimEnd());
+
 const unfinished: Unfinished = { ok: false, unfinished: true };
 const refuse = (at: number, length: number, message: string): Refused => ({ ok: false, unfinished: false, at, length, message });
 

@@ -1,3 +1,4 @@
+import type { KeyingStep } from './keying';
 import type { Code, RuleName } from './scheme';
 
 export interface Reason {
@@ -30,6 +31,16 @@ function apart(distance: string): string {
   return distance.startsWith('-') ? `${distance.slice(1)} low` : `${distance} high`;
 }
 
+const stepWords: Record<KeyingStep, string> = {
+  'point-missing': 'point missing',
+  'point-moved': 'point moved',
+  'digits-exchanged': 'two digits exchanged',
+  'digit-doubled': 'a digit doubled',
+  'digit-dropped': 'a digit dropped',
+  'look-alike': 'a look-alike digit',
+  'sign-lost': 'sign lost',
+};
+
 /** Puts a stored verdict into words for staff: the rule that was met first, with its numbers. */
 export function reasonInWords({ grains, rule, numbers }: StoredVerdict): Reason {
   const { key = '', distance = '0', decimals = '0' } = numbers;
@@ -50,6 +61,7 @@ export function reasonInWords({ grains, rule, numbers }: StoredVerdict): Reason 
       return { head: `fits ${numbers.letters ?? ''}, ${numbers.slips ?? ''}`, detail: `It is ${numbers.slip ?? ''}, what ${numbers.slips ?? ''} comes to. A slip is an explanation, not proof.` };
     case 'nothing':
       if (numbers.slips) return { head: `fits ${numbers.letters ?? ''}, ${numbers.slips}`, detail: `No rule is met: ${apart(distance)} beside the key, ${key}. It fits ${numbers.slips}, which has no share here.` };
+      if (numbers.step) return { head: `one step from the key, ${stepWords[numbers.step as KeyingStep]}`, detail: `No rule is met: ${apart(distance)} beside the key, ${key}. It may be a typing error: ${stepWords[numbers.step as KeyingStep]}. Look at the crop.` };
       return { head: /^-?0(\.0+)?$/.test(distance) ? 'too few decimals' : `nothing fits, ${apart(distance)}`, detail: nothingDetail(key, distance) };
   }
 }

@@ -1,4 +1,4 @@
-import { readAnswer } from './read-answer';
+import { readAnswer, writtenNumber } from './read-answer';
 
 export type Understood =
   | { readonly kind: 'nothing' }
@@ -19,7 +19,7 @@ export function understood(text: string, units: readonly string[]): Understood {
   if (text.trim() === '') return { kind: 'nothing' };
   const read = readAnswer(text, units);
   if (!read.ok) return read.unfinished ? { kind: 'waiting' } : { kind: 'refused', message: read.message };
-  const value = read.unit === null ? read.canonical : read.canonical.slice(0, -read.unit.length).trim();
+  const value = writtenNumber(read);
   const written = read.figures === null ? 'A fraction' : /e/.test(value) ? 'A power of ten' : decimalsWords(read.decimals);
   return { kind: 'value', value, form: `${written}, ${unitWords(read.unit)}.` };
 }

@@ -105,3 +105,11 @@ it('a key that is no short decimal is met by roundings to the figures given, fro
   const other = { ...energy, alternatives: [{ name: 'core count', value: '-741/10', text: '-74.10', decimals: 2, figures: 4, grains: 1200, reason: '' }] };
   expect(['-74.10', '-74.1', '-74'].map((text) => markAnswer(other, { text }, emptyContext).grains)).toEqual([1200, 1200, 0]);
 });
+
+it('tells a value one wrong step of the fingers from the key, where no slip explains it', () => {
+  const step = (text: string, scheme: ItemScheme = three) => markAnswer(scheme, { text }, emptyContext).numbers.step;
+  expect(['610', '6.01', '6.70', '6.110'].map((text) => step(text))).toEqual(['point-missing', 'digits-exchanged', 'look-alike', 'digit-doubled']);
+  // 6.40 is a slip, all inner electrons at 0.85; 9.99 is far from everything.
+  expect([step('6.40'), step('9.99')]).toEqual([undefined, undefined]);
+  expect(step('6.1', { ...three, roundings: { downToDecimals: null, truncation: false } })).toBeUndefined();
+});

@@ -1,8 +1,9 @@
-import { exactDecimals, fromFractionText, subtract, toDecimals, type Exact } from '../chemistry/exact';
+import { equals, exactDecimals, fromFractionText, subtract, toDecimals, type Exact } from '../chemistry/exact';
 import { bandOf, bandRange } from './bands';
 import { slipsThatFit } from './diagnosis';
 import { meets } from './meeting';
-import { readAnswer, type ReadValue } from './read-answer';
+import { keyingStep } from './keying';
+import { readAnswer, writtenNumber, type ReadValue } from './read-answer';
 import { isCode, rules, type Code, type Given, type ItemScheme, type MarkingContext, type RuleName, type Verdict } from './scheme';
 
 /** The context of a verdict as one text; two contexts with the same entries have the same. */
@@ -54,11 +55,12 @@ function slipClaim(scheme: ItemScheme, read: ReadValue, shared: Record<string, s
   return { grains, rule: 'slip', numbers: { ...shared, letters: fits.map(({ letter }) => letter).join(', '), slips: fits.map(({ name }) => name).join('; '), slip: first.text } };
 }
 
-/** No rule pays: 0, with the slips that would explain it though the scheme names none of them. */
-function nothingClaim(scheme: ItemScheme, read: ReadValue, shared: Record<string, string>): Claim {
+/** What would explain a value that no rule pays: the slips it fits though the scheme names none; failing them, one wrong step of a reader's fingers. */
+function explanation(scheme: ItemScheme, read: ReadValue, key: Exact): Record<string, string> {
   const fits = slipsThatFit(scheme, read);
-  const explained = fits.length === 0 ? {} : { letters: fits.map(({ letter }) => letter).join(', '), slips: fits.map(({ name }) => name).join('; ') };
-  return { grains: 0, rule: 'nothing', numbers: { ...shared, ...explained } };
+  if (fits.length > 0) return { letters: fits.map(({ letter }) => letter).join(', '), slips: fits.map(({ name }) => name).join('; ') };
+  const step = equals(read.value, key) ? null : keyingStep(writtenNumber(read), scheme.key.text);
+  return step === null ? {} : { step };
 }
 
 const order = (rule: RuleName): number => rules.indexOf(rule);
@@ -74,8 +76,7 @@ export function markAnswer(scheme: ItemScheme, given: Given, _context: MarkingCo
   if (!read.ok) throw new RangeError(`Only what the grammar understands can be marked: ${given.text}`);
   const key = fromFractionText(scheme.key.value);
   const shared = { key: scheme.key.text, distance: distanceText(read.value, key) };
-  const claims = [keyClaim(scheme, read, key, shared), ...alternativeClaims(scheme, read, shared), bandClaim(scheme, read, key, shared), slipClaim(scheme, read, shared), nothingClaim(scheme, read, shared)];
-  return claims
-    .filter((claim) => claim !== null)
-    .reduce((best, claim) => (claim.grains > best.grains || (claim.grains === best.grains && order(claim.rule) < order(best.rule)) ? claim : best));
+  const claims = [keyClaim(scheme, read, key, shared), ...alternativeClaims(scheme, read, shared), bandClaim(scheme, read, key, shared), slipClaim(scheme, read, shared)].filter((claim) => claim !== null);
+  if (claims.length === 0) return { grains: 0, rule: 'nothing', numbers: { ...shared, ...explanation(scheme, read, key) } };
+  return claims.reduce((best, claim) => (claim.grains > best.grains || (claim.grains === best.grains && order(claim.rule) < order(best.rule)) ? claim : best));
 }
