@@ -36,6 +36,8 @@ const fieldOf: Partial<Record<ProblemCode, string>> = {
   'no-electron-left': 'asked.charge',
   'anion-beyond-shell': 'asked.charge',
   'configuration-needed': 'asked.charge',
+  'configuration-not-understood': 'asked.configuration',
+  'electron-count': 'asked.configuration',
 };
 
 const percent = whole(100);
@@ -99,7 +101,8 @@ function problemsOf(scheme: ItemScheme): ItemProblem[] {
 }
 
 /** What is asked, without fields that this quantity has no use for. */
-function askedOf({ asked: { radiusAngstrom, countsItself, ...asked } }: ItemDraft): Asked {
+function askedOf({ asked: { radiusAngstrom, countsItself, configuration, ...plain } }: ItemDraft): Asked {
+  const asked = { ...plain, ...(configuration === undefined ? {} : { configuration }) };
   if (asked.quantity !== 'electronegativity') return asked;
   return { ...asked, ...(radiusAngstrom === undefined ? {} : { radiusAngstrom }), ...(countsItself === undefined ? {} : { countsItself }) };
 }
@@ -121,6 +124,7 @@ function roundingsOf({ figures }: Worked, { roundings: { downToDecimals, downToF
 export function readDraft(draft: ItemDraft): ReadDraft {
   const refusals: ItemProblem[] = [];
   const asked = askedOf(draft);
+  if (asked.configuration === '') refusals.push({ path: 'asked.configuration', message: 'Write the configuration, or ask for the ground state.' });
   const worked = work(asked);
   if (!worked.ok) refusals.push({ path: fieldOf[worked.problem.code] ?? 'asked.electron', message: worked.problem.message });
   const marks = readMarks(draft.marks);
@@ -181,7 +185,7 @@ function rangeTexts(band: Band, { value, decimals }: ItemScheme['key']): { from:
 /** Key, derivation, wording, scale and what is wrong, as the editor shows them. */
 export function workDraft(draft: ItemDraft): WorkedDraft {
   const { scheme, worked, maxGrains, refusals, problems } = readDraft(draft);
-  const electrons = occupiedElectrons(draft.asked.symbol, draft.asked.charge);
+  const electrons = occupiedElectrons(draft.asked.symbol, draft.asked.charge, draft.asked.configuration);
   const drawable = scheme && scheme.bands.every((band) => rangeTexts(band, scheme.key) !== null);
   return {
     label: itemLabel(draft.asked),
@@ -211,14 +215,13 @@ function widthText({ kind, width }: Band, decimals: number): string {
 
 /** A stored scheme as the editor's draft; the wording is null where it is the proposed one. */
 export function draftOf(scheme: ItemScheme, prompt: string): ItemDraft {
-  const { symbol, charge, electron, radiusAngstrom, countsItself } = scheme.asked;
   const convention = askedConventions.find((name) => name === scheme.asked.convention);
   const quantity = askedQuantities.find((name) => name === scheme.asked.quantity);
   if (quantity === undefined || convention === undefined) throw new Error(`The editor has no fields for ${scheme.asked.quantity} under ${scheme.asked.convention}.`);
   const { decimals, figures } = scheme.key;
   const { downToDecimals, downToFigures, truncation } = scheme.roundings;
   return {
-    asked: { symbol, charge, electron, quantity, convention, ...(radiusAngstrom === undefined ? {} : { radiusAngstrom }), ...(countsItself === undefined ? {} : { countsItself }) },
+    asked: { ...scheme.asked, quantity, convention },
     decimals: Math.min(4, decimals),
     figures: figures ?? 4,
     prompt: prompt === proposedStem(scheme.asked, decimals, figures ?? null) ? null : prompt,

@@ -58,7 +58,7 @@ function occupationAt(text: string, at: number): Result<{ occupation: Occupation
   }
   const [whole, label = '', plain, raised] = match;
   const subshell = parseSubshell(label);
-  if (!subshell.ok) return refused(subshell.problem.code, subshell.problem.message, at);
+  if (!subshell.ok) return refused('configuration-not-understood', subshell.problem.message, at);
   const count = lowered(plain ?? raised ?? '');
   const most = capacity(subshell.value.l);
   if (count > most) return refused('configuration-not-understood', `A ${label} subshell holds ${most} electrons at most, not ${count}.`, at);

@@ -46,6 +46,8 @@ export const itemDraft = z.strictObject({
     /** Of an electronegativity: the radius as the question states it, in ångström, and whether the electron counts itself. */
     radiusAngstrom: z.string().trim().max(12).optional(),
     countsItself: z.boolean().optional(),
+    /** A configuration other than the ground state, as typed. */
+    configuration: z.string().trim().max(160).optional(),
   }),
   /** The decimals that the question asks for, where the key is a short decimal. */
   decimals: z.int().min(0).max(4),

@@ -60,6 +60,21 @@ describe('building a paper', () => {
     expect(refused.body.error.message).toMatch(/^Item 1: The narrower band/);
   });
 
+  it('asks for an electron of a typed configuration, and says what is wrong with one', async () => {
+    const excited = (configuration: string) => itemDraft('Ne', '3s', { asked: { symbol: 'Ne', charge: 0, electron: '3s', quantity: 'zeff', convention: 'slater', configuration } });
+    const { body } = await lead.post(`/api/sittings/${paper.sittingId}/items`).send(excited('1s2 2s2 2p5 3s1')).expect(201);
+    // By hand from Slater's coefficients (Phys. Rev. 36, 57, 1930): 10 - (7 x 0.85 + 2 x 1.00) = 2.05.
+    expect(body).toMatchObject({
+      prompt: 'By Slater’s rules, find Z_eff for a 3s electron of an Ne atom with the configuration 1s2 2s2 2p5 3s1, to two decimals.',
+      draft: { asked: { configuration: '1s2 2s2 2p5 3s1' } },
+      worked: { key: { text: '2.05' }, electrons: ['1s', '2s', '2p', '3s'] },
+    });
+    const wrong = async (configuration: string) => (await lead.post(`/api/sittings/${paper.sittingId}/items`).send(excited(configuration)).expect(400)).body.error.fields['asked.configuration'];
+    expect(await wrong('1s2 2s2 2p6 3s1')).toBe('This configuration has 11 electrons; Ne has 10.');
+    expect(await wrong('1s2 2s2 2q5')).toContain('2q');
+    expect(await wrong('')).toBe('Write the configuration, or ask for the ground state.');
+  });
+
   it('works a draft without storing it', async () => {
     const { body } = await lead.post('/api/keys').send({ sittingId: paper.sittingId, draft: itemDraft('Fe', '4p') }).expect(200);
     expect(body).toMatchObject({ key: null, scale: null, electrons: ['1s', '2s', '2p', '3s', '3p', '3d', '4s'], problems: [{ path: 'asked.electron', message: 'Iron has no 4p electron in its ground state.' }] });

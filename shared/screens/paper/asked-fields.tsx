@@ -1,7 +1,8 @@
 import { useId, useState } from 'react';
 import { View } from 'react-native';
-import { occupiedElectrons } from '../../chemistry/configurations';
+import { occupiedElectrons, speciesOf } from '../../chemistry/configurations';
 import { elementBySymbol } from '../../chemistry/elements';
+import { formatConfiguration } from '../../chemistry/typed-configuration';
 import type { ItemDraft } from '../../contracts/items';
 import { Checkbox } from '../../ui/checkbox';
 import { Icon } from '../../ui/icon';
@@ -35,14 +36,24 @@ const conventionOrder = ['slater', 'slater-035-in-1s', 'slater-d-at-1', 'core-co
 
 const chargeText = (charge: number): string => (charge > 0 ? `+${charge}` : charge < 0 ? `−${-charge}` : '0');
 
-/** The charges that the rules for ions reach, and the one asked for whether they reach it or not. */
-const chargesOf = (symbol: string, asked: number): number[] => charges.filter((charge) => charge === asked || occupiedElectrons(symbol, charge).ok);
+/** The charges that the rules for ions reach, or that leave an electron where the configuration is typed; and the one asked for in any case. */
+function chargesOf({ symbol, charge: asked, configuration }: ItemDraft['asked']): number[] {
+  const element = elementBySymbol(symbol);
+  const leavesOne = (charge: number): boolean => element.ok && charge < element.value.number;
+  return charges.filter((charge) => charge === asked || (configuration === undefined ? occupiedElectrons(symbol, charge).ok : leavesOne(charge)));
+}
+
+/** What a typed configuration begins with: the ground state, or nothing where no rule gives it. */
+function groundText({ symbol, charge }: ItemDraft['asked']): string {
+  const species = speciesOf({ symbol, charge });
+  return species.ok ? formatConfiguration(species.value.configuration) : '';
+}
 
 /** What the item asks for: quantity, element, charge, electron, decimals, marks. */
 export function AskedFields({ draft, hasFigures, problemAt, onChange }: AskedFieldsProps) {
   const { asked } = draft;
   const put = (changes: Partial<ItemDraft['asked']>, field: string) => onChange({ ...draft, asked: { ...asked, ...changes } }, field);
-  const electrons = occupiedElectrons(asked.symbol, asked.charge);
+  const electrons = occupiedElectrons(asked.symbol, asked.charge, asked.configuration);
   const below = useId();
   const sentences = ['asked.charge', 'asked.electron', 'decimals'].map(problemAt).filter((sentence) => sentence !== undefined);
   return (
@@ -83,13 +94,13 @@ export function AskedFields({ draft, hasFigures, problemAt, onChange }: AskedFie
       </View>
       <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 10 }}>
         <View style={{ flexGrow: 2, flexBasis: 126 }}>
-          <ElementField symbol={asked.symbol} error={problemAt('asked.symbol')} onChange={(symbol) => put({ symbol }, 'symbol')} />
+          <ElementField symbol={asked.symbol} error={problemAt('asked.symbol')} onChange={(symbol) => put({ symbol, configuration: undefined }, 'symbol')} />
         </View>
         <View style={{ flexGrow: 1, flexBasis: 66 }}>
           <Select
             label={words.asked.charge}
             value={String(asked.charge)}
-            options={chargesOf(asked.symbol, asked.charge).map((charge) => ({ value: String(charge), label: chargeText(charge) }))}
+            options={chargesOf(asked).map((charge) => ({ value: String(charge), label: chargeText(charge) }))}
             onChange={(charge) => put({ charge: Number(charge) }, 'charge')}
             refusedBy={problemAt('asked.charge') && below}
             testID="charge"
@@ -99,7 +110,7 @@ export function AskedFields({ draft, hasFigures, problemAt, onChange }: AskedFie
           <Select
             label={words.asked.electron}
             value={asked.electron}
-            options={(electrons.ok ? electrons.value : []).map((electron) => ({ value: electron, label: electron }))}
+            options={(electrons.ok ? electrons.value : [asked.electron]).map((electron) => ({ value: electron, label: electron }))}
             onChange={(electron) => put({ electron }, 'electron')}
             refusedBy={problemAt('asked.electron') && below}
             testID="electron"
@@ -126,6 +137,21 @@ export function AskedFields({ draft, hasFigures, problemAt, onChange }: AskedFie
           )}
         </View>
       </View>
+      <Checkbox isChecked={asked.configuration !== undefined} onChange={(isOther) => put({ configuration: isOther ? groundText(asked) : undefined }, 'configuration')} testID="other-configuration">
+        {words.asked.isOther}
+      </Checkbox>
+      {asked.configuration === undefined ? null : (
+        <Vessel
+          label={words.asked.configuration}
+          help={words.asked.configurationHelp}
+          value={asked.configuration}
+          onChange={(configuration) => put({ configuration }, 'configuration')}
+          error={problemAt('asked.configuration')}
+          variant="reading"
+          maxLength={160}
+          testID="configuration"
+        />
+      )}
       {asked.quantity === 'electronegativity' ? (
         <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'flex-end', gap: 10 }}>
           <View style={{ width: 110 }}>

@@ -11,6 +11,12 @@ it('finds nothing missing in what the server proposes, under any convention', ()
   }
 });
 
+it('asks for the configuration where it is not the ground state', () => {
+  const excited = { ...asked('slater'), symbol: 'Ne', electron: '3s', configuration: '1s2 2s2 2p5 3s1' };
+  expect(stemWarnings(proposedStem(excited, 2), { asked: excited })).toEqual([]);
+  expect(stemWarnings('By Slater’s rules, find Z_eff for a 3s electron of an Ne atom, to two decimals.', { asked: excited })).toEqual(['configuration']);
+});
+
 it('names what a wording leaves out', () => {
   expect(stemWarnings('Find Z_eff for a 3p electron of Cl.', { asked: asked('slater') })).toEqual(['figures', 'convention']);
   expect(stemWarnings('By Slater’s rules, how strongly is it held? Two decimals.', { asked: asked('slater') })).toEqual(['element']);

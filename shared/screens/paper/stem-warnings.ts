@@ -1,6 +1,6 @@
 import type { ItemDraft } from '../../contracts/items';
 
-export type StemWarning = 'figures' | 'convention' | 'element';
+export type StemWarning = 'figures' | 'convention' | 'element' | 'configuration';
 
 const saysFigures = /decimal|whole number|significant|figure/i;
 const namesConvention: Readonly<Record<ItemDraft['asked']['convention'], RegExp>> = {
@@ -12,8 +12,10 @@ const namesConvention: Readonly<Record<ItemDraft['asked']['convention'], RegExp>
   'ionisation-energy': /ioni[sz]ation/i,
 };
 
+const bare = (text: string): string => text.replace(/\s+/g, '');
+
 /**
- * What a wording of one's own leaves out that decides the mark: the figures wanted, the convention, the electron asked for.
+ * What a wording of one's own leaves out that decides the mark: the figures wanted, the convention, the electron asked for, the configuration where it is not the ground state.
  * "Find Z_eff for a 3p electron of Cl" lacks figures and convention.
  */
 export function stemWarnings(prompt: string, { asked }: Pick<ItemDraft, 'asked'>): StemWarning[] {
@@ -21,5 +23,6 @@ export function stemWarnings(prompt: string, { asked }: Pick<ItemDraft, 'asked'>
   if (!saysFigures.test(prompt)) warnings.push('figures');
   if (!namesConvention[asked.convention].test(prompt)) warnings.push('convention');
   if (!prompt.includes(asked.electron) || !prompt.includes(asked.symbol)) warnings.push('element');
+  if (asked.configuration !== undefined && !bare(prompt).includes(bare(asked.configuration))) warnings.push('configuration');
   return warnings;
 }

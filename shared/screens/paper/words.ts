@@ -73,6 +73,9 @@ export const words = {
     figures: 'Figures',
     radius: 'Radius, Å',
     countsItself: 'The electron counts itself',
+    configuration: 'Configuration',
+    configurationHelp: 'Excited or hypothetical: 1s2 2s2 2p5 3s1, or [Ne] 3p1.',
+    isOther: 'Another configuration than the ground state',
     convention: 'Convention',
     conventions: {
       slater: 'Slater’s rules',
@@ -106,6 +109,7 @@ export const words = {
     missing: {
       figures: 'The wording does not say how many decimals are wanted.',
       convention: 'The wording does not name the convention: other courses teach others.',
+      configuration: 'The wording does not give the configuration: it is not the ground state.',
       element: 'The wording does not name the element and the electron that are asked for.',
     },
   },
