@@ -58,4 +58,13 @@ export const getPaperPdf = defineRoute({
   bytes: 'application/pdf',
 });
 
-export const paperFileRoutes = { getPaperFile, putPaperFile, getPaperSchema, getPaperPdf };
+export const getPaperQti = defineRoute({
+  method: 'get',
+  path: '/sittings/:id/paper.qti.zip',
+  summary: 'The numeric items as a QTI 3.0 package: a manifest and one text entry item a file, with keys and tolerances.',
+  access: { who: 'course', roles: ['lead'] },
+  params: idParams,
+  bytes: 'application/zip',
+});
+
+export const paperFileRoutes = { getPaperFile, putPaperFile, getPaperSchema, getPaperPdf, getPaperQti };

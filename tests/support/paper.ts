@@ -27,10 +27,10 @@ export const itemDraft = (symbol = 'Cl', electron = '3p', changes: Partial<ItemD
 
 export const actorOf = (server: TestServer, name: CastName): Actor => ({ personId: server.people[name], isOfficer: name === 'officer' });
 
-/** One page with an answer box an item, one under the other. */
+/** One page with an answer box an item, one under the other; twelve at most. */
 export const layoutFor = (items: readonly string[]): SentLayout => ({
   pages: [{ widthMm: 210, heightMm: 297 }],
-  boxes: items.map((item, index) => ({ pageNo: 1, item, use: 'answer', x: 120, y: 20 + index * 25, w: 60, h: 18 })),
+  boxes: items.map((item, index) => ({ pageNo: 1, item, use: 'answer', x: 120, y: 20 + index * (items.length > 10 ? 22 : 25), w: 60, h: 18 })),
 });
 
 export interface BuiltPaper {
