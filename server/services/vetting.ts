@@ -32,6 +32,7 @@ function viewOf({ db }: Context, actor: Actor, { item, scheme }: DraftedItem): V
     quantity: scheme.asked.quantity,
     prompt: item.prompt,
     maxGrains: item.maxGrains,
+    units: [...scheme.units],
     cannotVet: made ? 'You made or changed this item. Somebody else has to vet it.' : null,
     mine,
     key: isUncovered ? scheme.key.text : null,

@@ -12,6 +12,8 @@ export const vettingItem = z.object({
   quantity: z.string(),
   prompt: z.string(),
   maxGrains: grains,
+  /** What an answer may carry; empty for a pure number. */
+  units: z.array(z.string()),
   /** Why this person cannot vet it, or null. */
   cannotVet: z.string().nullable(),
   /** What this person worked out; the key is uncovered from then on. */
