@@ -82,7 +82,8 @@ export const reading = sqliteTable(
     /** The version of the grammar that understood the text. */
     grammar: integer().notNull(),
   },
-  (table) => [index('reading_by_answer').on(table.answer), index('reading_by_reader').on(table.reader, table.recordedAt)],
+  // NOTE with the answer alone, "has this reader read it" would walk all readings of the reader.
+  (table) => [index('reading_by_answer').on(table.answer, table.reader), index('reading_by_reader').on(table.reader, table.recordedAt)],
 );
 
 /** Append-only: a reading ends by a later row. */
