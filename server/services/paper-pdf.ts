@@ -7,23 +7,40 @@ import { marksText } from '../../shared/marking/grains';
 import type { ItemScheme } from '../../shared/marking/scheme';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
-import { printableText } from './printable-text';
+import { printRuns, type RunStyle } from './print-runs';
 import { schemeInWords } from './scheme-words';
 import { requireSitting } from './sitting-access';
 
 const font = (name: string): string => fileURLToPath(new URL(`../../assets/fonts/${name}.ttf`, import.meta.url));
-const fonts = { text: font('AtkinsonHyperlegibleNext_400Regular'), strong: font('AtkinsonHyperlegibleNext_600SemiBold'), value: font('AtkinsonHyperlegibleMono_500Medium') } as const;
+const fonts = { text: font('AtkinsonHyperlegibleNext_400Regular'), strong: font('AtkinsonHyperlegibleNext_600SemiBold'), value: font('AtkinsonHyperlegibleMono_500Medium'), symbol: font('STIXTwoText_400Regular_Italic') } as const;
 
 /** A4 in points, 18 mm of margin. */
 const margin = 51;
 
 type Document = InstanceType<typeof PDFDocument>;
 
-const write = (document: Document, name: keyof typeof fonts, size: number, text: string, options: PDFKit.Mixins.TextOptions = {}): Document => document.font(fonts[name]).fontSize(size).text(printableText(text), options);
+/** Where the baseline lies below the top of a line, and how far a subscript is dropped, in sizes of the text. */
+const ascent = 0.95;
+const drop = 0.18;
+
+type Fount = Exclude<keyof typeof fonts, 'symbol'>;
+const sizes: Readonly<Record<RunStyle, number>> = { plain: 1, symbol: 1.06, subscript: 0.7 };
+
+/** NOTE: each fount has its own ascent, so runs on one line need a baseline that they share. */
+function write(document: Document, name: Fount, size: number, text: string, options: PDFKit.Mixins.TextOptions = {}): Document {
+  const runs = printRuns(text);
+  runs.forEach(({ style, text: piece }, index) => {
+    const baseline = -size * (style === 'subscript' ? ascent + drop : ascent);
+    const isLast = index === runs.length - 1;
+    document.font(fonts[style === 'symbol' ? 'symbol' : name]).fontSize(size * sizes[style]);
+    document.text(piece, { ...options, baseline, continued: isLast ? (options.continued ?? false) : true });
+  });
+  return document;
+}
 
 function writeScheme(document: Document, scheme: ItemScheme): void {
   const worked = work(scheme.asked);
-  write(document, 'value', 12, `Key ${scheme.key.text}`);
+  write(document, 'value', 12, ['Key', scheme.key.text.replace('-', '−'), ...scheme.units.slice(0, 1)].join(' '));
   if (worked.ok) {
     const { groups, nuclearCharge, sigma, zeff, steps, selfScreening } = worked.value.derivation;
     const terms = groups.filter(({ counted, place }) => counted > 0 && place !== 'outer').map(({ counted, coefficient }) => `${counted} × ${coefficient.text}`);

@@ -1,7 +1,7 @@
 import { fromFractionText, toDecimals, exactDecimals } from '../../shared/chemistry/exact';
 import { work } from '../../shared/chemistry/work';
 import { bandRange } from '../../shared/marking/bands';
-import { marksText } from '../../shared/marking/grains';
+import { GRAINS_PER_MARK, marksText } from '../../shared/marking/grains';
 import type { ItemScheme } from '../../shared/marking/scheme';
 import { roundingTexts } from './item-drafts';
 
@@ -12,6 +12,8 @@ interface Decided {
 
 const policyWords = { ask: 'a lead decides', none: 'no marks' } as Readonly<Record<string, string>>;
 
+const marksInWords = (grains: number): string => `${marksText(grains)} ${grains === GRAINS_PER_MARK ? 'mark' : 'marks'}`;
+
 function bandsInWords({ bands, key }: ItemScheme): string {
   if (bands.length === 0) return 'none';
   const value = fromFractionText(key.value);
@@ -19,7 +21,7 @@ function bandsInWords({ bands, key }: ItemScheme): string {
     .map((band) => {
       const { from, to } = bandRange(band, value);
       const places = Math.max(key.decimals, exactDecimals(from) ?? 4);
-      return `${band.name}: ${toDecimals(from, places)} to ${toDecimals(to, places)}, ${marksText(band.grains)} marks`;
+      return `${band.name}: ${toDecimals(from, places)} to ${toDecimals(to, places)}, ${marksInWords(band.grains)}`;
     })
     .join('; ');
 }
@@ -32,9 +34,9 @@ export function schemeInWords(scheme: ItemScheme): Decided[] {
   return [
     { name: 'Convention', words: source },
     { name: 'Roundings', words: texts.length === 0 ? 'only the key itself' : `${texts.join(' and ')}, in full${scheme.roundings.truncation ? ', cut off or rounded' : ''}` },
-    { name: 'Alternatives', words: scheme.alternatives.length === 0 ? 'none' : scheme.alternatives.map(({ name, text, grains }) => `${name} ${text}, ${marksText(grains)} marks`).join('; ') },
+    { name: 'Alternatives', words: scheme.alternatives.length === 0 ? 'none' : scheme.alternatives.map(({ name, text, grains }) => `${name} ${text}, ${marksInWords(grains)}`).join('; ') },
     { name: 'Bands', words: bandsInWords(scheme) },
-    { name: 'Named slips', words: (scheme.slips ?? []).length === 0 ? 'none' : (scheme.slips ?? []).map(({ letter, name, text, grains }) => `${letter}, ${name}, ${text}: ${marksText(grains)} marks`).join('; ') },
+    { name: 'Named slips', words: (scheme.slips ?? []).length === 0 ? 'none' : (scheme.slips ?? []).map(({ letter, name, text, grains }) => `${letter}, ${name}, ${text}: ${marksInWords(grains)}`).join('; ') },
     { name: 'Crossed out', words: policyWords[scheme.crossedOut] ?? scheme.crossedOut },
     { name: 'Two answers', words: policyWords[scheme.twoAnswers] ?? scheme.twoAnswers },
   ];

@@ -68,7 +68,9 @@ describe('a paper as a file', () => {
     expect(document.getPageCount()).toBe(2);
     expect(document.getTitle()).toBe('CHM 214, Paper 2, spring sitting: paper and mark scheme');
     const fontFiles = document.context.enumerateIndirectObjects().filter(([, object]) => object.toString().includes('/FontFile2'));
-    expect(fontFiles.length).toBeGreaterThanOrEqual(3);
+    expect(fontFiles.length).toBeGreaterThanOrEqual(4);
+    const names = document.context.enumerateIndirectObjects().map(([, object]) => object.toString()).join('\n');
+    for (const name of ['AtkinsonHyperlegibleNext', 'AtkinsonHyperlegibleMono', 'STIXTwoText']) expect(names).toContain(name);
   });
 
   it('is kept from readers', async () => {
