@@ -12,18 +12,19 @@ import { words } from './words';
 interface PaperFilesProps {
   readonly sitting: SittingView;
   readonly items: number;
+  readonly isLead: boolean;
   readonly canChange: boolean;
 }
 
 const w = words.files;
 
 /** What can be done with the paper as a whole: vetted, printed, kept as a file, taken from one. */
-export function PaperFiles({ sitting, items, canChange }: PaperFilesProps) {
+export function PaperFiles({ sitting, items, isLead, canChange }: PaperFilesProps) {
   const open = (name: string) => window.open(apiUrl(`/sittings/${sitting.id}/${name}`), '_blank', 'noopener');
-  const save = () => {
+  const save = (ending: string) => {
     const link = document.createElement('a');
-    link.href = apiUrl(`/sittings/${sitting.id}/paper.json`);
-    link.download = `paper-${sitting.printNumber}.json`;
+    link.href = apiUrl(`/sittings/${sitting.id}/paper.${ending}`);
+    link.download = `paper-${sitting.printNumber}.${ending}`;
     link.click();
   };
   return (
@@ -34,16 +35,21 @@ export function PaperFiles({ sitting, items, canChange }: PaperFilesProps) {
       <Button isSmall isWide icon="print" onPress={() => open('paper.pdf')} testID="print-paper">
         {w.print}
       </Button>
-      <Button kind="text" isSmall icon="download" onPress={save} testID="save-paper">
+      <Button kind="text" isSmall icon="download" onPress={() => save('json')} testID="save-paper">
         {w.save}
       </Button>
+      {isLead && items > 0 ? (
+        <Button kind="text" isSmall icon="download" onPress={() => save('qti.zip')} testID="save-qti">
+          {w.saveQti}
+        </Button>
+      ) : null}
       {canChange ? <TakeButton sitting={sitting} items={items} /> : null}
     </View>
   );
 }
 
 /** Chooses a file and asks before the paper gives way to it. */
-export function TakeButton({ sitting, items }: Omit<PaperFilesProps, 'canChange'>) {
+export function TakeButton({ sitting, items }: Pick<PaperFilesProps, 'sitting' | 'items'>) {
   const [file, setFile] = useState<File | null>(null);
   return (
     <>

@@ -95,7 +95,7 @@ function PaperPanes({ sitting, items, lockedAt, itemId }: PanesProps) {
           {trouble.message}
         </Text>
       ) : null}
-      <PaperFiles sitting={sitting} items={items.length} canChange={canChange} />
+      <PaperFiles sitting={sitting} items={items.length} isLead={isLead} canChange={canChange} />
     </View>
   );
   if (items.length === 0) return <NoItems canChange={canChange} isAdding={make.isPending} message={trouble?.message ?? null} onAdd={add} others={<EarlierWays sitting={sitting} onBank={() => setBankOpen(true)} isBankOpen={isBankOpen} onCloseBank={() => setBankOpen(false)} />} />;

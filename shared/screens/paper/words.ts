@@ -8,6 +8,7 @@ export const words = {
   files: {
     print: 'Print view',
     save: 'Save as a file',
+    saveQti: 'Save as QTI 3.0',
     take: 'Take from a file',
     takeTitle: (name: string) => `Take the paper from ${name}?`,
     takeText: (items: number) => (items === 0 ? 'Its items and regions come into this paper; their keys are worked anew.' : `The ${items === 1 ? 'item' : `${items} items`} of this paper and its regions give way to those of the file. Their keys are worked anew. When anything in the file is wrong, nothing changes.`),
