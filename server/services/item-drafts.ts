@@ -207,10 +207,11 @@ export function workDraft(draft: ItemDraft): WorkedDraft {
   };
 }
 
+/** As it could be typed again: a width that no decimal says stays a fraction, so that storing it anew changes nothing. */
 function widthText({ kind, width }: Band, decimals: number): string {
-  const value = fromFractionText(width);
-  if (kind === 'relative') return exactText(multiply(value, percent), 0);
-  return exactText(value, kind === 'absolute' ? decimals : 0);
+  const value = kind === 'relative' ? multiply(fromFractionText(width), percent) : fromFractionText(width);
+  const places = exactDecimals(value);
+  return places === null ? toFractionText(value) : toDecimals(value, Math.max(places, kind === 'absolute' ? decimals : 0));
 }
 
 /** A stored scheme as the editor's draft; the wording is null where it is the proposed one. */

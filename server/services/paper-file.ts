@@ -1,11 +1,13 @@
 import { inTransaction, type Database } from '../../db/client';
+import { updateSitting } from '../../db/queries/courses';
 import { boxesOfLayout, findLayout, layoutPages } from '../../db/queries/layouts';
 import { draftedItems } from '../../db/queries/papers';
+import type { SentBox } from '../../shared/contracts/layouts';
 import { paperSchemaPath, type PaperFile } from '../../shared/contracts/paper-file';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
-import { AppError, conflict, invalidRequest } from '../errors';
-import { draftOf } from './item-drafts';
+import { conflict, invalidRequest } from '../errors';
+import { draftOf, readDraft } from './item-drafts';
 import { createItem, removeItem } from './items';
 import { saveLayout } from './layouts';
 import { requireOpenPaper, requireSitting } from './sitting-access';
@@ -32,12 +34,21 @@ export function paperFileFor(context: Context, actor: Actor, sittingId: string):
   return fileOf(context.db, sittingId, sitting.title);
 }
 
-/** Names the item of a file that a refusal belongs to: `items.3.asked.electron`. */
-function atItem(error: unknown, index: number): unknown {
-  if (!(error instanceof AppError) || error.code !== 'invalid_request') return error;
-  const fields = Object.fromEntries(Object.entries(error.details.fields ?? {}).map(([path, message]) => [`items.${index}.${path}`, message]));
-  return invalidRequest(`Item ${index + 1}: ${error.message}`, fields);
+/** Throws with every field of every item that keeps the file from being taken: `items.3.asked.electron`. */
+function requireSoundItems({ items }: PaperFile): void {
+  const refused = items.flatMap((draft, index) => readDraft(draft).refusals.map(({ path, message }) => ({ index, path, message })));
+  const [first] = refused;
+  if (!first) return;
+  throw invalidRequest(`Item ${first.index + 1}: ${first.message}`, Object.fromEntries(refused.map(({ index, path, message }) => [`items.${index}.${path}`, message])));
 }
+
+/** The boxes of a file, each with the id of its item. */
+const boxesFor = ({ boxes }: PaperFile, ids: readonly string[]): SentBox[] =>
+  boxes.map(({ item, ...box }, index) => {
+    const id = item === null ? null : ids[item - 1];
+    if (id === undefined) throw invalidRequest(`Box ${index + 1}: the paper has no item ${item}.`, { [`boxes.${index}.item`]: 'There is no such item.' });
+    return { ...box, item: id };
+  });
 
 /** Replaces items and regions of an open paper by those of a file, all or nothing; keys are worked here. */
 export function takePaperFile(context: Context, actor: Actor, sittingId: string, rev: number, file: PaperFile): PaperFile {
@@ -46,22 +57,13 @@ export function takePaperFile(context: Context, actor: Actor, sittingId: string,
   inTransaction(db, () => {
     const { sitting } = requireSitting(context, actor, sittingId, ['lead']);
     requireOpenPaper(context, sitting);
-    if (sitting.rev !== rev) throw conflict('Someone changed this sitting meanwhile. The file was not taken.');
+    if (sitting.rev !== rev) throw conflict('Someone changed this sitting meanwhile. The file was not taken.', fileOf(db, sittingId, sitting.title));
+    requireSoundItems(file);
     for (const { item } of draftedItems(db, sittingId).reverse()) removeItem(context, actor, item.id, item.rev);
-    const ids = file.items.map((draft, index) => {
-      try {
-        return createItem(context, actor, sittingId, draft).id;
-      } catch (error) {
-        throw atItem(error, index);
-      }
-    });
-    if (file.pages.length === 0) return;
-    const boxes = file.boxes.map(({ item, ...box }, index) => {
-      const id = item === null ? null : ids[item - 1];
-      if (id === undefined) throw invalidRequest(`Box ${index + 1}: the paper has no item ${item}.`, { [`boxes.${index}.item`]: 'There is no such item.' });
-      return { ...box, item: id };
-    });
-    saveLayout(context, actor, sittingId, findLayout(db, sittingId, drawnOrdinal)?.rev ?? 0, { pages: file.pages, boxes });
+    const ids = file.items.map((draft) => createItem(context, actor, sittingId, draft).id);
+    const layout = findLayout(db, sittingId, drawnOrdinal);
+    if (layout || file.pages.length > 0 || file.boxes.length > 0) saveLayout(context, actor, sittingId, layout?.rev ?? 0, { pages: file.pages, boxes: boxesFor(file, ids) });
+    updateSitting(db, sittingId, {});
   });
   return paperFileFor(context, actor, sittingId);
 }

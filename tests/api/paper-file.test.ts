@@ -1,6 +1,7 @@
 import { PDFDocument } from 'pdf-lib';
 import type { Agent } from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { auditEntry } from '../../db/schema';
 import type { PaperFile } from '../../shared/contracts/paper-file';
 import { buildPaper, itemDraft } from '../support/paper';
 import { startTestServer, type TestServer } from '../support/test-server';
@@ -41,9 +42,26 @@ describe('a paper as a file', () => {
     const bad = await put(sittingId, { ...before, items: [itemDraft(), itemDraft('Fe', '4p')] });
     expect(bad.status).toBe(400);
     expect(bad.body).toMatchObject({ error: { message: 'Item 2: Iron has no 4p electron in its ground state.', fields: { 'items.1.asked.electron': 'Iron has no 4p electron in its ground state.' } } });
+    const both = await put(sittingId, { ...before, items: [itemDraft('Xx', '1s'), itemDraft(), itemDraft('Cl', '3p', { marks: '1/7' })] });
+    expect(Object.keys((both.body as { error: { fields: object } }).error.fields)).toEqual(['items.0.asked.symbol', 'items.2.marks']);
+    expect((await put(sittingId, { ...before, items: [{ ...itemDraft(), key: '5.00' }] })).status).toBe(400);
+    expect((await put(sittingId, { ...before, pages: [] })).body).toMatchObject({ error: { message: 'Item 1, answer box on page 1: there is no page 1.' } });
     expect((await put(sittingId, { ...before, boxes: [{ ...before.boxes[0], item: 9 }] })).body).toMatchObject({ error: { fields: { 'boxes.0.item': 'There is no such item.' } } });
     expect((await put(sittingId, { ...before, version: 2 })).status).toBe(400);
     expect(await fileOf(sittingId)).toEqual(before);
+  });
+
+  it('is not taken over a file that another lead took meanwhile, and leaves its acts in the trail', async () => {
+    const { sittingId } = buildPaper(server, { locked: false });
+    const file = await fileOf(sittingId);
+    const seen = await revOf(sittingId);
+    await lead.put(`/api/sittings/${sittingId}/paper.json`).set('If-Match', seen).send(file).expect(200);
+    const late = await lead.put(`/api/sittings/${sittingId}/paper.json`).set('If-Match', seen).send({ ...file, items: [] }).expect(409);
+    expect((late.body as { error: { current: unknown } }).error.current).toEqual(file);
+    await lead.put(`/api/sittings/${sittingId}/paper.json`).send(file).expect(400);
+    const acts = server.context.db.select().from(auditEntry).all().filter(({ sitting }) => sitting === sittingId).map(({ act }) => act);
+    expect(acts.filter((act) => act === 'item-removed')).toHaveLength(2);
+    expect(acts.at(-1)).toBe('layout-changed');
   });
 
   it('is not taken by a locked paper', async () => {
@@ -73,8 +91,16 @@ describe('a paper as a file', () => {
     for (const name of ['AtkinsonHyperlegibleNext', 'AtkinsonHyperlegibleMono', 'STIXTwoText']) expect(names).toContain(name);
   });
 
-  it('is kept from readers', async () => {
-    const { sittingId } = buildPaper(server, { locked: false });
-    await (await server.signInAs('readerOne')).get(`/api/sittings/${sittingId}/paper.json`).expect(403);
+  describe('someone else’s', () => {
+    it('is kept from readers and outsiders; an external examiner looks only', async () => {
+      const { sittingId } = buildPaper(server, { locked: false });
+      const file = await fileOf(sittingId);
+      for (const [name, look, write] of [['readerOne', 403, 403], ['external', 200, 403], ['officer', 403, 403], ['outsider', 404, 404]] as const) {
+        const agent = await server.signInAs(name);
+        for (const kind of ['json', 'pdf']) await agent.get(`/api/sittings/${sittingId}/paper.${kind}`).expect(look);
+        await agent.put(`/api/sittings/${sittingId}/paper.json`).set('If-Match', '1').send({ ...file, items: [], boxes: [] }).expect(write);
+      }
+      expect(await fileOf(sittingId)).toEqual(file);
+    });
   });
 });
