@@ -49,6 +49,15 @@ it('when the commit fails, no act of the group is answered as done', async () =>
   expect(names()).toEqual(['later']);
 });
 
+it('when one act ends the whole transaction, as a full disk does, no act of the group is answered or kept', async () => {
+  const { db, names, act } = open();
+  act('old')();
+  const ending = () => void db.$client.exec("insert or rollback into act values ('old')");
+  const outcomes = await Promise.allSettled([committedTogether(db, act('a')), committedTogether(db, ending), committedTogether(db, act('b'))]);
+  expect(outcomes.map(({ status }) => status)).toEqual(['rejected', 'rejected', 'rejected']);
+  expect(names()).toEqual(['old']);
+});
+
 it('gives back what the work gives back, and waits for another turn when one has begun', async () => {
   const { db, act } = open();
   expect(await committedTogether(db, () => 7)).toBe(7);

@@ -18,6 +18,8 @@ function attempt(db: Database, work: () => unknown): Outcome {
   try {
     return { ok: true, result: inTransaction(db, work as () => never) };
   } catch (error) {
+    // A full disk may end the whole transaction: what ran before is gone, and what follows would commit alone.
+    if (!db.$client.inTransaction) throw error;
     return { ok: false, error };
   }
 }

@@ -2,6 +2,7 @@ import { createHash } from 'node:crypto';
 import type { Request, RequestHandler, Response, Router } from 'express';
 import type { z } from 'zod';
 import { inTransaction } from '../../db/client';
+import { committedTogether } from '../../db/group-commit';
 import { findStoredResponse, storeResponse } from '../../db/queries/idempotency';
 import type { BodyOf, ParamsOf, QueryOf, ResponseOf, RouteContract } from '../../shared/contracts/route';
 import { requireActor, type Actor } from '../auth/access';
@@ -84,6 +85,20 @@ export function route<C extends AnyContract>(
     const actor = requireActor(context, req.user?.personId);
     const call = { ...parseCall(context, contract, req, res), actor };
     send(contract, res, runOnce(contract, call, () => work(call)));
+  });
+}
+
+/** The same for what many send at once: calls that arrive together share one commit, and each is answered once it is on disk. */
+export function togetherRoute<C extends AnyContract>(
+  router: Router,
+  context: Context,
+  contract: C,
+  work: (call: SignedInCall<C>) => ResponseOf<C> | void,
+): void {
+  router[contract.method](contract.path, async (req, res) => {
+    const actor = requireActor(context, req.user?.personId);
+    const call = { ...parseCall(context, contract, req, res), actor };
+    send(contract, res, await committedTogether(context.db, () => runOnce(contract, call, () => work(call))));
   });
 }
 

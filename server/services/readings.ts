@@ -1,5 +1,4 @@
 import { inTransaction } from '../../db/client';
-import { committedTogether } from '../../db/group-commit';
 import { endLeaseAt, endReading, findLease, findReading, hasOpenLease, insertReading, ownLiveReading, readingTarget } from '../../db/queries/desk';
 import { liveReadings, standingRuling } from '../../db/queries/settling';
 import { toFractionText } from '../../shared/chemistry/exact';
@@ -62,7 +61,7 @@ function isSurplus(context: Context, target: Target, canonical: string): boolean
   return others.length >= wanted && others.every((other) => other.canonical === canonical);
 }
 
-/** Records one reading and settles its answer; on disk when this returns. A late one, its lease run out, is kept too. */
+/** Records one reading and settles its answer; on disk with the transaction it is called in, its own when there is none. A late one, its lease run out, is kept too. */
 export function recordReading(context: Context, actor: Actor, id: string, sent: SentReading): void {
   const { db, clock } = context;
   const { target, access } = requireTarget(context, actor, sent.answerId);
@@ -100,9 +99,6 @@ export function recordReading(context: Context, actor: Actor, id: string, sent: 
     settleAnswers(context, [sent.answerId]);
   });
 }
-
-/** The same, sharing its commit with readings that arrive at the same moment; on disk when this resolves. */
-export const keepReading = (context: Context, actor: Actor, id: string, sent: SentReading): Promise<void> => committedTogether(context.db, () => recordReading(context, actor, id, sent));
 
 /** Ends an own reading and gives its answer back to the reader, unless another reader holds it by now. */
 export function takeBackReading(context: Context, actor: Actor, id: string): DeskLease | null {
