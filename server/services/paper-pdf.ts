@@ -1,4 +1,3 @@
-import { fileURLToPath } from 'node:url';
 import PDFDocument from 'pdfkit';
 import { draftedItems, paperLockedAt } from '../../db/queries/papers';
 import { findCourse } from '../../db/queries/courses';
@@ -7,36 +6,14 @@ import { marksText } from '../../shared/marking/grains';
 import type { ItemScheme } from '../../shared/marking/scheme';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
-import { printRuns, type RunStyle } from './print-runs';
+import { fonts, paragraph, type Document, type Part } from './print-paragraph';
 import { schemeInWords } from './scheme-words';
 import { requireSitting } from './sitting-access';
-
-const font = (name: string): string => fileURLToPath(new URL(`../../assets/fonts/${name}.ttf`, import.meta.url));
-const fonts = { text: font('AtkinsonHyperlegibleNext_400Regular'), strong: font('AtkinsonHyperlegibleNext_600SemiBold'), value: font('AtkinsonHyperlegibleMono_500Medium'), symbol: font('STIXTwoText_400Regular_Italic') } as const;
 
 /** A4 in points, 18 mm of margin. */
 const margin = 51;
 
-type Document = InstanceType<typeof PDFDocument>;
-
-/** Where the baseline lies below the top of a line, and how far a subscript is dropped, in sizes of the text. */
-const ascent = 0.95;
-const drop = 0.18;
-
-type Fount = Exclude<keyof typeof fonts, 'symbol'>;
-const sizes: Readonly<Record<RunStyle, number>> = { plain: 1, symbol: 1.06, subscript: 0.7 };
-
-/** NOTE: each fount has its own ascent, so runs on one line need a baseline that they share. */
-function write(document: Document, name: Fount, size: number, text: string, options: PDFKit.Mixins.TextOptions = {}): Document {
-  const runs = printRuns(text);
-  runs.forEach(({ style, text: piece }, index) => {
-    const baseline = -size * (style === 'subscript' ? ascent + drop : ascent);
-    const isLast = index === runs.length - 1;
-    document.font(fonts[style === 'symbol' ? 'symbol' : name]).fontSize(size * sizes[style]);
-    document.text(piece, { ...options, baseline, continued: isLast ? (options.continued ?? false) : true });
-  });
-  return document;
-}
+const write = (document: Document, fount: Part['fount'], size: number, text: string): Document => paragraph(document, { fount, size, text });
 
 function writeScheme(document: Document, scheme: ItemScheme): void {
   const worked = work(scheme.asked);
@@ -49,8 +26,7 @@ function writeScheme(document: Document, scheme: ItemScheme): void {
     if (selfScreening) write(document, 'text', 9.5, selfScreening);
   }
   for (const { name, words } of schemeInWords(scheme)) {
-    write(document, 'strong', 9.5, `${name}: `, { continued: true });
-    write(document, 'text', 9.5, words);
+    paragraph(document, { fount: 'strong', size: 9.5, text: `${name}: ` }, { fount: 'text', size: 9.5, text: words });
   }
 }
 
