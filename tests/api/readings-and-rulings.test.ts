@@ -63,6 +63,17 @@ describe('readings, marks and rulings', () => {
     expect((await view(held.answerId)).readings).toHaveLength(1);
   });
 
+  it('keeps readings sent at once each for itself: a refused one and a repeat among them touch no other', async () => {
+    const [first, second, third] = await lease(one);
+    if (!first || !second || !third) throw new Error('Three answers to read were expected.');
+    const id = uuidv7();
+    const sent = [record(one, first, { text: '6.10' }, id), record(one, second, { text: '6..1' }), record(one, third, { text: '6.70' }), record(one, first, { text: '6.10' }, id)];
+    const statuses = (await Promise.all(sent)).map(({ status }) => status);
+    expect(statuses).toEqual([200, 400, 200, 200]);
+    const seen = await Promise.all([first, second, third].map(({ answerId }) => view(answerId)));
+    expect(seen.map(({ readings }) => readings.length)).toEqual([1, 0, 1]);
+  });
+
   it('names the place of a text it does not understand, and stores nothing', async () => {
     const [held] = await lease(one);
     if (!held) throw new Error('Nothing to read.');
