@@ -118,6 +118,7 @@ export function answerView(context: Context, actor: Actor, answerId: string): An
       id: reading.id,
       reader: nameOf(reading.reader),
       given: shownGiven(reading, head.state, covered),
+      grains: covered ? null : verdictFor(db, scheme, reading.canonical, reading.code === null ? { text: reading.text ?? '' } : { code: reading.code }).grains,
       note: covered ? null : reading.note,
       recordedAt: reading.recordedAt,
       isAsMine: covered || !third ? null : third.canonical === reading.canonical,

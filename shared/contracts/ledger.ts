@@ -63,6 +63,8 @@ const shownReading = z.object({
   /** A pseudonym, steady within the sitting: `reader 2`. */
   reader: z.string(),
   given: shownGiven,
+  /** What the scheme in force gives for it; null where it is covered, or where the scheme leaves it to a person. */
+  grains: grains.nullable(),
   note: z.string().nullable(),
   recordedAt: instant,
   /** Whether it has the form of the third reading of the person who looks. */

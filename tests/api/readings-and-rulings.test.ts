@@ -122,8 +122,9 @@ describe('readings, marks and rulings', () => {
     const [row] = await rows({ show: 'discordant' });
     expect(row).toMatchObject({ isCovered: true, readings: [null, null], value: null, grains: null });
     expect(await rows({ find: '6.*' })).toEqual([]);
+    expect((await view(first.answerId)).readings).toMatchObject([{ given: null, grains: null }, { given: null, grains: null }]);
     const typed: AnswerView = (await type(first.answerId, { text: '6.10' }).expect(200)).body;
-    expect(typed).toMatchObject({ gap: '0.60', readings: [{ isAsMine: true }, { isAsMine: false }] });
+    expect(typed).toMatchObject({ gap: '0.60', readings: [{ isAsMine: true, grains: 3600 }, { isAsMine: false, grains: 0 }] });
     // It equals one of the two, so no reason is asked.
     await rule(first.answerId, typed.rev, { kind: 'value', text: '6.10' }).expect(200);
   });

@@ -4,6 +4,7 @@ import { marksText } from '../../marking/grains';
 import { codeWords } from '../desk/words';
 
 type Mine = NonNullable<AnswerView['mine']>;
+type Ruling = NonNullable<AnswerView['ruling']>;
 
 export const saidOf = ({ text, code }: Pick<Mine, 'text' | 'code'>): string => (code === null ? (text ?? '') : codeWords[code]);
 
@@ -16,8 +17,38 @@ const isHeld = ({ state }: Pick<AnswerView, 'state'>): boolean => heldStates.som
 export const needsReason = (answer: AnswerView): boolean => answer.ruling !== null || !isHeld(answer) || !answer.readings.some(({ isAsMine }) => isAsMine === true);
 
 /** What the button says it will do; null where my reading gives no mark by the scheme and a mark has to be ruled. */
-export function ruleWords(answer: AnswerView): string | null {
-  const { mine } = answer;
+export function ruleWords({ mine }: Pick<AnswerView, 'mine'>): string | null {
   if (mine === null || mine.grains === null) return null;
   return `Rule ${saidOf(mine)}, ${marksWords(mine.grains)}`;
+}
+
+/** What a ruling says, with the mark that stands by it: "6.10, 3 marks", or the mark alone where one was ruled by hand. */
+export function ruledWords(ruling: Pick<Ruling, 'kind' | 'text' | 'code' | 'grains'>, standing: number | null): string {
+  const grains = ruling.grains ?? standing;
+  const mark = grains === null ? '' : marksWords(grains);
+  return ruling.kind === 'mark' ? mark : [saidOf(ruling), mark].filter((part) => part !== '').join(', ');
+}
+
+/** "a minute ago", "12 minutes ago", "2 hours ago": how long somebody else's ruling has stood. */
+export function agoWords(ms: number): string {
+  const minutes = Math.max(1, Math.round(ms / 60_000));
+  if (minutes < 60) return minutes === 1 ? 'a minute ago' : `${minutes} minutes ago`;
+  const hours = Math.round(minutes / 60);
+  if (hours < 24) return hours === 1 ? 'an hour ago' : `${hours} hours ago`;
+  const days = Math.round(hours / 24);
+  return days === 1 ? 'a day ago' : `${days} days ago`;
+}
+
+/** What stands now that somebody else was first; null where the change was not a ruling. */
+export function conflictWords(current: AnswerView, now: number): string | null {
+  const { ruling, score } = current;
+  if (ruling === null) return null;
+  return `Someone ruled this ${agoWords(now - ruling.at)}: ${ruledWords(ruling, score?.grains ?? null)}. Yours was not stored.`;
+}
+
+/** "Either way 0 of 3": two readings that differ and give the same mark. Null where they do not, or are kept back. */
+export function eitherWay({ state, readings, maxGrains }: Pick<AnswerView, 'state' | 'maxGrains'> & { readonly readings: readonly { readonly grains: number | null }[] }): string | null {
+  const [first, ...others] = readings.map(({ grains }) => grains);
+  if (state !== 'discordant' || first === undefined || first === null || others.length === 0 || others.some((grains) => grains !== first)) return null;
+  return `Either way ${marksText(first)} of ${marksText(maxGrains)}.`;
 }
