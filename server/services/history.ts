@@ -24,12 +24,13 @@ export function answerHistory(context: Context, actor: Actor, answerId: string):
     if (end) acts.push({ ...plain, at: end.at, who: nameOf(end.by), act: end.why === 'surplus' ? 'surplus' : 'taken-back' });
   }
   for (const { ruling, ruling_end: end } of rulingsEver(db, answerId)) {
-    const given = ruling.kind === 'mark' ? null : { text: ruling.text, code: ruling.code };
-    acts.push({ ...plain, at: ruling.at, who: 'lead', act: 'ruled', given, grains: ruling.grains, reason: ruling.reason });
+    // A ruling that was taken back names a reading of a pair that is covered again.
+    const given = covered || ruling.kind === 'mark' ? null : { text: ruling.text, code: ruling.code };
+    acts.push({ ...plain, at: ruling.at, who: 'lead', act: 'ruled', given, isCovered: covered, grains: covered ? null : ruling.grains, reason: covered ? null : ruling.reason });
     if (end) acts.push({ ...plain, at: end.at, who: 'lead', act: 'ruling-ended', reason: end.why === 'replaced' ? 'replaced by another ruling' : 'taken back' });
   }
   for (const score of scoresEver(db, answerId)) {
-    acts.push({ ...plain, at: score.at, who: 'the scheme', act: 'scored', grains: score.grains, schemeOrdinal: score.ordinal });
+    acts.push({ ...plain, at: score.at, who: 'the scheme', act: 'scored', isCovered: covered, grains: covered ? null : score.grains, schemeOrdinal: score.ordinal });
   }
   return acts.sort((one, other) => one.at - other.at);
 }

@@ -126,7 +126,13 @@ describe('readings, marks and rulings', () => {
     const typed: AnswerView = (await type(first.answerId, { text: '6.10' }).expect(200)).body;
     expect(typed).toMatchObject({ gap: '0.60', readings: [{ isAsMine: true, grains: 3600 }, { isAsMine: false, grains: 0 }] });
     // It equals one of the two, so no reason is asked.
-    await rule(first.answerId, typed.rev, { kind: 'value', text: '6.10' }).expect(200);
+    const ruled: AnswerView = (await rule(first.answerId, typed.rev, { kind: 'value', text: '6.10' }).expect(200)).body;
+    // Once it is taken back, someone who has not typed learns neither reading from what was ruled.
+    await lead.post(`/api/rulings/${ruled.ruling?.id}/take-back`).expect(200);
+    const external = await server.signInAs('external');
+    const history = JSON.stringify((await external.get(`/api/answers/${first.answerId}/history`).expect(200)).body);
+    for (const kept of ['6.10', '6.70', '3600']) expect(history).not.toContain(kept);
+    expect(JSON.stringify((await lead.get(`/api/answers/${first.answerId}/history`).expect(200)).body)).toContain('6.70');
   });
 
   it('rules a share of a mark exactly, and only with a reason', async () => {
