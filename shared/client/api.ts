@@ -44,6 +44,15 @@ async function errorOf(response: Response): Promise<ApiError> {
 
 /** One call of the interface. Throws ApiError for a refusal and OfflineError when nothing answered. */
 export async function api<Answer>(path: string, sent: Sent = {}): Promise<Answer> {
+  const response = await answered(path, sent);
+  if (response.status === 204) return undefined as Answer;
+  return (await response.json()) as Answer;
+}
+
+/** The same for a file. */
+export const apiBlob = async (path: string): Promise<Blob> => (await answered(path, {})).blob();
+
+async function answered(path: string, sent: Sent): Promise<Response> {
   const headers: Record<string, string> = {};
   if (sent.body !== undefined) headers['Content-Type'] = 'application/json';
   if (sent.rev !== undefined) headers['If-Match'] = String(sent.rev);
@@ -63,6 +72,5 @@ export async function api<Answer>(path: string, sent: Sent = {}): Promise<Answer
     throw new OfflineError();
   }
   if (!response.ok) throw await errorOf(response);
-  if (response.status === 204) return undefined as Answer;
-  return (await response.json()) as Answer;
+  return response;
 }

@@ -2,7 +2,8 @@ import { keepPreviousData, queryOptions, useMutation, useQueries, useQuery, useQ
 import type { LedgerChip, LedgerSort } from '../contracts/enums';
 import type { AnswerView, getAnswerHistory, getLedger, getTotals, LedgerRow, makeExport, RulingBody } from '../contracts/ledger';
 import type { ResponseOf } from '../contracts/route';
-import { api, apiUrl } from './api';
+import { api, apiBlob } from './api';
+import { windowRows, windowsFor, type Rows } from './ledger-windows';
 import { progressQueryOptions } from './sittings';
 
 export interface LedgerQuestion {
@@ -15,9 +16,8 @@ export interface LedgerQuestion {
 
 type LedgerWindow = ResponseOf<typeof getLedger>;
 
-/** Rows fetched at once. */
-export const windowRows = 100;
 const lookAgainMs = 20_000;
+const fileKeptMs = 60_000;
 
 const addressOf = (sittingId: string, { show, item, find, sort, direction }: LedgerQuestion, offset: number): string => {
   const query = new URLSearchParams({ show, sort, direction, offset: String(offset), limit: String(windowRows) });
@@ -35,10 +35,9 @@ const windowOptions = (sittingId: string, question: LedgerQuestion, index: numbe
   });
 
 /** The windows of the ledger that hold the rows asked for, with the first window's counts. */
-export function useLedger(sittingId: string, question: LedgerQuestion, from: number, to: number) {
+export function useLedger(sittingId: string, question: LedgerQuestion, ranges: readonly Rows[]) {
   const first = useQuery(windowOptions(sittingId, question, 0));
-  const windows = [];
-  for (let index = Math.max(1, Math.floor(from / windowRows)); index <= Math.floor(Math.max(from, to) / windowRows); index += 1) windows.push(index);
+  const windows = windowsFor(ranges);
   const others = useQueries({ queries: windows.map((index) => windowOptions(sittingId, question, index)) });
   const byWindow = new Map<number, readonly LedgerRow[]>([[0, first.data?.rows ?? []]]);
   windows.forEach((index, at) => byWindow.set(index, others[at]?.data?.rows ?? []));
@@ -97,10 +96,13 @@ export function useExportMarks(sittingId: string) {
   return useMutation({
     mutationFn: async () => {
       const { id, fileName } = await api<ResponseOf<typeof makeExport>>(`/sittings/${sittingId}/exports`, { method: 'POST', body: { kind: 'marks-csv' } });
+      const url = URL.createObjectURL(await apiBlob(`/exports/${id}/file`));
       const link = document.createElement('a');
-      link.href = apiUrl(`/exports/${id}/file`);
+      link.href = url;
       link.download = fileName;
       link.click();
+      // Some browsers read it only after the press has returned.
+      setTimeout(() => URL.revokeObjectURL(url), fileKeptMs);
       return fileName;
     },
   });

@@ -58,6 +58,11 @@ export function RowMark({ row }: { row: LedgerRow }) {
   return <MarkStand state={state} got={(row.grains ?? 0) / GRAINS_PER_MARK} of={of} gotText={marksText(row.grains ?? 0)} ofText={marksText(row.maxGrains)} />;
 }
 
+function RowScale({ row, width }: { row: LedgerRow; width?: number }) {
+  const at = row.value === null ? {} : row.isRuled ? { ruled: row.value } : { readings: [row.value] };
+  return <ScaleRow keyAt={row.key} reach={row.span} of={row.maxGrains / GRAINS_PER_MARK} width={width} {...at} />;
+}
+
 function Pair({ row }: { row: LedgerRow }) {
   const tone = row.state === 'ruled' ? 'manganate' : isHeld(row) ? 'iodine' : 'ink2';
   return (
@@ -75,6 +80,8 @@ interface LedgerRowProps {
   readonly columns: readonly ColumnKey[];
   readonly index: number;
   readonly isChosen: boolean;
+  /** Just changed by someone else. */
+  readonly isTouched: boolean;
   /** The row above is of the same candidate. */
   readonly isRepeated: boolean;
   readonly onOpen: () => void;
@@ -83,7 +90,7 @@ interface LedgerRowProps {
 const spokenRow = (row: LedgerRow): string => `${row.candidateNumber}, item ${row.itemNumber} ${row.label}, ${stateWords[row.state]}`;
 
 /** One answer as a line of the ledger. */
-export function LedgerLine({ row, columns, index, isChosen, isRepeated, onOpen }: LedgerRowProps) {
+export function LedgerLine({ row, columns, index, isChosen, isTouched, isRepeated, onOpen }: LedgerRowProps) {
   const cells: Readonly<Record<ColumnKey, ReactNode>> = {
     candidate: (
       <Text variant="readingS" tone={isRepeated ? 'ink3' : 'ink'} weight={isChosen ? 600 : 500}>
@@ -99,7 +106,7 @@ export function LedgerLine({ row, columns, index, isChosen, isRepeated, onOpen }
     first: <Given row={row} at={0} />,
     second: <Given row={row} at={1} />,
     pair: <Pair row={row} />,
-    scale: <ScaleRow keyAt={row.key} reach={row.span} of={row.maxGrains / GRAINS_PER_MARK} readings={row.value === null || row.isRuled ? [] : [row.value]} ruled={row.isRuled && row.value !== null ? row.value : undefined} />,
+    scale: <RowScale row={row} />,
     why: (
       <Text variant="small" tone="ink2" lines={1}>
         {row.why}
@@ -108,7 +115,7 @@ export function LedgerLine({ row, columns, index, isChosen, isRepeated, onOpen }
     mark: <RowMark row={row} />,
   };
   return (
-    <TableRow index={index + 2} isChosen={isChosen} onPress={onOpen} label={spokenRow(row)} testID={`row-${row.candidateNumber}-${row.itemNumber}`}>
+    <TableRow index={index + 2} isChosen={isChosen} isTouched={isTouched} onPress={onOpen} label={spokenRow(row)} testID={`row-${row.candidateNumber}-${row.itemNumber}`}>
       {columns.map((column) => (
         <Cell key={column} {...rooms[column]}>
           {cells[column]}
@@ -118,10 +125,13 @@ export function LedgerLine({ row, columns, index, isChosen, isRepeated, onOpen }
   );
 }
 
+const cardScale = 96;
+export const cardHeight = 96;
+
 /** The same on a phone: three lines. */
-export function LedgerCard({ row, index, isChosen, onOpen }: Omit<LedgerRowProps, 'columns' | 'isRepeated'>) {
+export function LedgerCard({ row, index, isChosen, isTouched, onOpen }: Omit<LedgerRowProps, 'columns' | 'isRepeated'>) {
   return (
-    <TableRow index={index + 2} isChosen={isChosen} onPress={onOpen} label={spokenRow(row)} height={cardHeight} testID={`row-${row.candidateNumber}-${row.itemNumber}`}>
+    <TableRow index={index + 2} isChosen={isChosen} isTouched={isTouched} onPress={onOpen} label={spokenRow(row)} height={cardHeight} testID={`row-${row.candidateNumber}-${row.itemNumber}`}>
       <Cell grow={1}>
         <View style={{ flex: 1, gap: 3 }}>
           <View style={{ flexDirection: 'row', gap: 10, alignItems: 'baseline' }}>
@@ -133,21 +143,31 @@ export function LedgerCard({ row, index, isChosen, onOpen }: Omit<LedgerRowProps
               <ChemText beside="small">{row.label}</ChemText>
             </Text>
           </View>
-          <Pair row={row} />
-          <View style={{ flexDirection: 'row', gap: 14, alignItems: 'center', minHeight: 20 }}>
+          <View style={{ flexDirection: 'row', gap: 8, alignItems: 'center', minHeight: 24 }}>
             <Given row={row} at={0} />
-            {row.readings.length > 1 ? <Given row={row} at={1} /> : null}
+            {row.readings.length > 1 ? (
+              <>
+                <Text variant="small" tone="ink2">
+                  {words.and}
+                </Text>
+                <Given row={row} at={1} />
+              </>
+            ) : null}
+          </View>
+          <View style={{ flexDirection: 'row', gap: 8, alignItems: 'center' }}>
+            <Pair row={row} />
             <Text variant="small" tone="ink2" lines={1} style={{ flex: 1 }}>
               {row.why}
             </Text>
           </View>
         </View>
       </Cell>
-      <Cell width={84} align="right">
-        <RowMark row={row} />
+      <Cell width={cardScale} align="right">
+        <View style={{ alignItems: 'flex-end', gap: 6 }}>
+          <RowMark row={row} />
+          <RowScale row={row} width={cardScale} />
+        </View>
       </Cell>
     </TableRow>
   );
 }
-
-export const cardHeight = 92;

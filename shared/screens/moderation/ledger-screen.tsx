@@ -1,162 +1,140 @@
 import { useLocalSearchParams, useRouter } from 'expo-router';
 import { useCallback, useRef, useState } from 'react';
-import { ScrollView, View, type TextInput } from 'react-native';
-import { useLedger, useTakeBackRuling, type LedgerQuestion } from '../../client/ledger';
+import { View, type TextInput } from 'react-native';
+import { useLedger, type LedgerQuestion } from '../../client/ledger';
 import { useSitting } from '../../client/sittings';
 import type { LedgerSort } from '../../contracts/enums';
 import type { AnswerView } from '../../contracts/ledger';
 import { Button } from '../../ui/button';
-import { Chip } from '../../ui/chip';
 import { Dialog } from '../../ui/dialog';
 import { KeyList, KeyStrip } from '../../ui/key-strip';
 import { Empty } from '../../ui/page-state';
-import { PairGlyph } from '../../ui/pair-glyph';
-import { Select } from '../../ui/select';
 import { Text } from '../../ui/text';
-import { useToast } from '../../ui/toast';
-import { useBreakpoint, useIsPhone, useIsWide } from '../../ui/use-breakpoint';
+import { useBreakpoint, useIsWide } from '../../ui/use-breakpoint';
 import { useKeys } from '../../ui/use-keys';
-import { Vessel } from '../../ui/vessel';
 import { InSitting } from '../in-sitting';
 import { QueryState } from '../query-state';
-import { useSettled } from '../use-settled';
 import { AnswerSheet } from './answer-sheet';
+import { LedgerHead } from './ledger-head';
 import { LedgerTable } from './ledger-table';
+import { nothingHere } from './nothing-here';
+import { countOfHeld, nowhere, placeAfterRuling, steppedPlace } from './place';
 import { nextHeld, paramsOf, questionOf } from './question';
-import { chipOrder, chipWords, keyGroups, stateGlyphs, words } from './words';
+import { useLastRuling } from './use-last-ruling';
+import { usePlace } from './use-place';
+import { useTouched } from './use-touched';
+import { keyGroups, words } from './words';
 
-const settleMs = 250;
+/** Rows fetched beyond those on view. */
+const ahead = 10;
 
 /** The moderation ledger: every answer of the sitting, and beside it the one that is looked at. */
 export function LedgerScreen({ sittingId }: { sittingId: string }) {
   const router = useRouter();
-  const toast = useToast();
-  const isPhone = useIsPhone();
   const isWide = useIsWide();
   const isFull = useBreakpoint() === 'full';
-  const question = questionOf(useLocalSearchParams());
-  const [find, setFind] = useState(question.find);
-  const asked: LedgerQuestion = { ...question, find: useSettled(find, settleMs) };
+  const asked = questionOf(useLocalSearchParams());
   const [view, setView] = useState({ from: 0, to: 0 });
-  const [chosen, setChosen] = useState(-1);
   const [isOpen, setOpen] = useState(false);
   const [areKeysOpen, setKeysOpen] = useState(false);
   const findField = useRef<TextInput>(null);
+  const filters = useRef<View>(null);
   const { data: sitting } = useSitting(sittingId);
-  const { first, rowAt } = useLedger(sittingId, asked, Math.min(view.from, Math.max(0, chosen)), Math.max(view.to, chosen));
-  const takeBack = useTakeBackRuling();
+  const { at, settle, setPlace } = usePlace();
+  const { first, rowAt } = useLedger(sittingId, asked, [
+    { from: view.from - ahead, to: view.to + ahead },
+    { from: at - 1, to: at + 1 },
+  ]);
+  const idAt = (row: number) => rowAt(row)?.answerId;
+  const place = settle(idAt);
   const canRule = sitting?.roles.includes('lead') ?? false;
   const total = first.data?.total ?? 0;
   const held = first.data?.heldOffsets ?? [];
-  const row = chosen < 0 ? undefined : rowAt(chosen);
+  const onView = Array.from({ length: Math.max(0, view.to - view.from + 1) }, (_, index) => rowAt(view.from + index) ?? []).flat();
+  const { touched, isOwn } = useTouched(onView);
+  const last = useLastRuling(isOwn);
 
   const ask = (changes: Partial<LedgerQuestion>) => {
-    setChosen(-1);
+    setPlace(nowhere);
     setOpen(false);
     router.setParams(paramsOf({ ...asked, ...changes }) as never);
   };
-  const go = (to: number) => setChosen(Math.min(total - 1, Math.max(0, to)));
-  const goHeld = (step: 1 | -1) => {
-    const to = nextHeld(held, chosen, step);
-    if (to === null) return;
-    setChosen(to);
+  const go = (to: number) => setPlace({ at: to, id: idAt(to) ?? null });
+  const step = (by: 1 | -1) => () => setPlace(steppedPlace(place, by, total, idAt));
+  const goHeld = (by: 1 | -1) => () => {
+    const to = nextHeld(held, place.at, by);
+    if (to !== null) open(to);
+  };
+  const open = (to: number) => {
+    go(to);
     setOpen(true);
   };
-  const open = (at: number) => {
-    setChosen(at);
-    setOpen(true);
-  };
-  const close = () => setOpen(false);
-  const onView = useCallback((from: number, to: number) => setView((before) => (before.from === from && before.to === to ? before : { from, to })), []);
-  const sort = (by: LedgerSort) => ask(asked.sort === by ? { direction: asked.direction === 'up' ? 'down' : 'up' } : { sort: by, direction: 'up' });
+  const see = useCallback((from: number, to: number) => setView((before) => (before.from === from && before.to === to ? before : { from, to })), []);
+  const sort = (by: LedgerSort, direction: 'up' | 'down') => ask({ sort: by, direction });
   const ruled = (answer: AnswerView, what: string) => {
-    const { ruling, candidateNumber } = answer;
-    toast({
-      text: words.sheet.ruled(what, candidateNumber),
-      icon: 'check',
-      ...(ruling ? { action: { label: words.sheet.takeBack, onPress: () => takeBack.mutate(ruling.id, { onSuccess: () => toast({ text: words.sheet.takenBack(candidateNumber) }), onError: (error) => toast({ text: error.message, icon: 'warning' }) }) } } : {}),
-    });
-    const next = nextHeld(held.filter((at) => at !== chosen), chosen, 1);
-    // Among those to rule, this row leaves the list and the next one moves up into its place.
-    if (asked.show === 'all' && next !== null) setChosen(next);
-    else if (asked.show !== 'all' && chosen >= total - 1) setChosen(Math.max(0, total - 2));
+    last.keep(answer, what);
+    const next = placeAfterRuling(place, held, asked.show, idAt, last.ruled());
+    if (next === null) setOpen(false);
+    else setPlace(next);
   };
 
-  useKeys({
-    J: () => go(chosen + 1),
-    K: () => go(chosen - 1),
-    ArrowDown: () => go(chosen + 1),
-    ArrowUp: () => go(chosen - 1),
+  const moves = {
+    J: step(1),
+    K: step(-1),
+    ArrowDown: step(1),
+    ArrowUp: step(-1),
     Home: () => go(0),
     End: () => go(total - 1),
-    '[': () => goHeld(-1),
-    ']': () => goHeld(1),
+    '[': goHeld(-1),
+    ']': goHeld(1),
+  };
+  const isShown = isOpen && place.id !== null;
+  useKeys({ ...moves, Enter: () => (place.id === null ? undefined : setOpen(true)), ...(last.onTakeBack ? { U: last.onTakeBack } : {}) }, { isOff: isShown });
+  useKeys({
     '/': () => findField.current?.focus(),
+    F: () => (filters.current as unknown as HTMLElement | null)?.querySelector<HTMLElement>('[aria-pressed="true"]')?.focus(),
     '?': () => setKeysOpen(true),
-    Escape: close,
-    ...(isOpen ? {} : { Enter: () => (row ? setOpen(true) : undefined) }),
   });
 
+  const here = rowAt(place.at);
   const sheet =
-    isOpen && row ? (
-      <AnswerSheet key={row.answerId} answerId={row.answerId} canRule={canRule} onClose={close} onPrevious={() => go(chosen - 1)} onNext={() => go(chosen + 1)} onNextHeld={held.length > 0 ? () => goHeld(1) : null} onRuled={ruled} />
+    isOpen && place.id !== null ? (
+      <AnswerSheet
+        key={place.id}
+        answerId={place.id}
+        rev={here?.answerId === place.id ? here.rev : 0}
+        canRule={canRule}
+        heldCount={countOfHeld(held, place.at)}
+        moves={moves}
+        last={last}
+        onClose={() => setOpen(false)}
+        onPrevious={step(-1)}
+        onNext={step(1)}
+        onNextHeld={held.some((row) => row !== place.at) ? goHeld(1) : null}
+        onRuled={ruled}
+      />
     ) : null;
   const isFiltered = asked.show !== 'all' || asked.item !== null || asked.find !== '';
-  const side = isPhone ? 16 : 24;
   return (
-    <InSitting sittingId={sittingId} isFixed isSlim={isOpen && !isFull} side={isWide ? sheet : null}>
+    <InSitting sittingId={sittingId} isFixed isSlim={isShown && !isFull} side={isWide ? sheet : null}>
       <QueryState query={first} fetching="Fetching the ledger" failed="The ledger did not come." rows={12}>
-        {({ counts, items }) => (
+        {({ items, counts }) => (
           <View style={{ flex: 1, minHeight: 0 }}>
-            <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'flex-end', gap: 14, paddingHorizontal: side, paddingTop: 12, paddingBottom: 8 }}>
-              <Text variant="title" level={1} style={{ flexGrow: 1, flexBasis: isPhone ? '100%' : undefined }}>
-                {words.title}
-              </Text>
-              <View style={isPhone ? { flex: 1 } : { width: 170 }}>
-                <Select label={words.item} height={40} value={asked.item ?? ''} onChange={(item) => ask({ item: item === '' ? null : item })} options={[{ value: '', label: words.allItems }, ...items.map(({ id, number, label }) => ({ value: id, label: `${number} ${label}` }))]} testID="ledger-item" />
-              </View>
-              <View style={isPhone ? { flex: 1.3 } : { width: 220 }}>
-                <Vessel label={words.find} value={find} onChange={setFind} height={40} maxLength={64} inputRef={findField} testID="ledger-find" />
-              </View>
-            </View>
-            <ScrollView horizontal style={{ flexGrow: 0 }} contentContainerStyle={{ gap: 8, paddingHorizontal: side, paddingBottom: 12 }} role="group" aria-label="Filters">
-              {chipOrder
-                .filter((chip) => counts[chip] > 0 || chip === asked.show || chip === 'all' || chip === 'to-rule')
-                .map((chip) => (
-                  <Chip key={chip} isChosen={chip === asked.show} count={counts[chip]} onPress={() => ask({ show: chip })} testID={`chip-${chip}`} {...(chip === 'all' || chip === 'to-rule' ? {} : { glyph: <PairGlyph state={stateGlyphs[chip]} /> })}>
-                    {chipWords[chip]}
-                  </Chip>
-                ))}
-            </ScrollView>
-            {total === 0 ? (
-              <Empty
-                head={counts.all === 0 && !isFiltered ? words.notYet : asked.find !== '' ? words.noneFound(asked.find) : words.none(chipWords[asked.show].toLowerCase())}
-                action={
-                  isFiltered ? (
-                    <Button
-                      onPress={() => {
-                        setFind('');
-                        ask({ show: 'all', item: null, find: '' });
-                      }}
-                    >
-                      {words.clear}
-                    </Button>
-                  ) : null
-                }
-              >
-                {counts.all === 0 && !isFiltered ? words.notYetText : words.findHelp}
-              </Empty>
+            <LedgerHead asked={asked} counts={counts} items={items} onAsk={ask} findField={findField} filters={filters} />
+            {total > 0 ? (
+              <LedgerTable question={asked} total={total} heldOffsets={held} rowAt={rowAt} place={place} touched={touched} isNarrow={isShown && !isFull} onView={see} onChoose={open} onSort={sort} />
             ) : (
-              <LedgerTable question={asked} total={total} heldOffsets={held} rowAt={rowAt} chosen={chosen} isNarrow={isOpen && !isFull} onView={onView} onChoose={open} onSort={sort} />
+              <View style={{ flex: 1 }}>
+                {isFiltered ? (
+                  <Empty head={nothingHere({ show: asked.show, find: asked.find, item: items.find(({ id }) => id === asked.item)?.number })} action={<Button onPress={() => ask({ show: 'all', item: null, find: '' })}>{words.clear}</Button>}>
+                    {asked.find === '' ? words.clearHelp : words.findHelp}
+                  </Empty>
+                ) : (
+                  <Empty head={words.notYet}>{words.notYetText}</Empty>
+                )}
+              </View>
             )}
-            <KeyStrip
-              hints={[
-                { keys: ['J', 'K'], does: 'down, up' },
-                { keys: ['[', ']'], does: 'held rows' },
-                { keys: ['/'], does: 'find' },
-              ]}
-              last={{ keys: ['?'], does: 'all keys' }}
-            >
+            <KeyStrip hints={words.hints} last={words.allKeys}>
               <Text variant="small" tone="ink2" live="polite">
                 {words.rows(total === 0 ? 0 : view.from + 1, Math.min(total, view.to + 1), total)}
               </Text>
@@ -164,7 +142,7 @@ export function LedgerScreen({ sittingId }: { sittingId: string }) {
             {isWide ? null : sheet}
             {areKeysOpen ? (
               <Dialog title={words.keysTitle} onClose={() => setKeysOpen(false)} width={620}>
-                <KeyList groups={keyGroups} />
+                <KeyList groups={canRule ? keyGroups : keyGroups.filter(({ isForLead }) => !isForLead)} />
               </Dialog>
             ) : null}
           </View>

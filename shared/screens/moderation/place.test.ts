@@ -9,6 +9,10 @@ describe('the place in the ledger', () => {
     expect(settledPlace({ at: 0, id: 'a' }, listed('n', 'm', 'a'))).toEqual({ at: 2, id: 'a' });
   });
 
+  it('follows its answer where the list has become shorter than its old row', () => {
+    expect(settledPlace({ at: 1, id: 'b' }, listed('b'))).toEqual({ at: 0, id: 'b' });
+  });
+
   it('takes the answer of its row once that has come, and stays the same object while nothing moves', () => {
     expect(settledPlace({ at: 1, id: null }, listed('a', 'b'))).toEqual({ at: 1, id: 'b' });
     const place = { at: 1, id: 'b' };
@@ -37,6 +41,10 @@ describe('after a ruling', () => {
     const idAt = listed('a', 'b', 'c', 'd');
     expect(placeAfterRuling({ at: 1, id: 'b' }, [1, 3], 'all', idAt)).toEqual({ at: 3, id: 'd' });
     expect(placeAfterRuling({ at: 3, id: 'd' }, [1, 3], 'to-rule', idAt)).toEqual({ at: 1, id: 'b' });
+  });
+
+  it('what was ruled a moment ago is not opened again from an older list', () => {
+    expect(placeAfterRuling({ at: 1, id: 'b' }, [0, 1], 'to-rule', listed('a', 'b'), new Set(['a', 'b']))).toBeNull();
   });
 
   it('with none left the sheet stays, and closes where only what waits is listed', () => {

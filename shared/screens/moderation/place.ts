@@ -20,8 +20,9 @@ const reach = 200;
 export function settledPlace(place: Place, idAt: IdAt): Place {
   if (place.at < 0) return place;
   const here = idAt(place.at);
-  if (here === undefined || here === place.id) return place;
-  if (place.id === null) return { at: place.at, id: here };
+  if (here === place.id) return place;
+  if (place.id === null) return here === undefined ? place : { at: place.at, id: here };
+  // The row may have gone too, where the list has become shorter.
   for (let away = 1; away <= reach; away += 1) {
     const found = [place.at - away, place.at + away].find((row) => row >= 0 && idAt(row) === place.id);
     if (found !== undefined) return { at: found, id: place.id };
@@ -39,9 +40,13 @@ export function steppedPlace({ at, id }: Place, step: 1 | -1, total: number, idA
 
 const onlyHeld = (show: LedgerChip): boolean => show === 'to-rule' || heldStates.some((state) => state === show);
 
-/** Where a ruling leads: to the next row that waits. With none left it stays, or null where the list shows only what waits. */
-export function placeAfterRuling(place: Place, held: readonly number[], show: LedgerChip, idAt: IdAt): Place | null {
-  const next = nextHeld(held.filter((row) => row !== place.at), place.at, 1);
+/**
+ * Where a ruling leads: to the next row that waits. With none left it stays, or null where the list shows only what waits.
+ * The list may be older than the last rulings: what they settled is no longer waiting.
+ */
+export function placeAfterRuling(place: Place, held: readonly number[], show: LedgerChip, idAt: IdAt, ruled: ReadonlySet<string> = new Set()): Place | null {
+  const waits = (row: number): boolean => row !== place.at && !ruled.has(idAt(row) ?? '');
+  const next = nextHeld(held.filter(waits), place.at, 1);
   if (next !== null) return { at: next, id: idAt(next) ?? null };
   return onlyHeld(show) ? null : place;
 }

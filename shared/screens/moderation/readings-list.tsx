@@ -1,6 +1,8 @@
 import { View } from 'react-native';
 import type { AnswerView } from '../../contracts/ledger';
+import { GRAINS_PER_MARK, marksText } from '../../marking/grains';
 import { Cover } from '../../ui/cover';
+import { MarkStand } from '../../ui/mark-stand';
 import { SameGlyph } from '../../ui/pair-glyph';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
@@ -14,7 +16,7 @@ export function ReadingsList({ answer }: { answer: AnswerView }) {
   const colors = useColors();
   return (
     <View role="list">
-      {answer.readings.map(({ id, reader, given, note, isAsMine }, index) => (
+      {answer.readings.map(({ id, reader, given, grains, note, isAsMine }, index) => (
         <View key={id} role="listitem" style={{ flexDirection: 'row', alignItems: 'center', gap: 14, minHeight: 48, paddingVertical: 6, borderTopWidth: 1, borderColor: colors.hair }}>
           {isAsMine === null ? null : <View style={{ width: 20 }}>{isAsMine ? <SameGlyph /> : null}</View>}
           {given === null ? (
@@ -38,6 +40,7 @@ export function ReadingsList({ answer }: { answer: AnswerView }) {
             )}
             {note === null ? null : <Text variant="small">{words.sheet.note(note)}</Text>}
           </View>
+          {grains === null ? null : <MarkStand state="given" got={grains / GRAINS_PER_MARK} of={answer.maxGrains / GRAINS_PER_MARK} gotText={marksText(grains)} ofText={marksText(answer.maxGrains)} />}
         </View>
       ))}
     </View>

@@ -17,18 +17,31 @@ import { words } from './words';
 const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
 const rareWithLead: readonly Code[] = rareCodes;
 
+interface ThirdReadingProps {
+  readonly answer: AnswerView;
+  readonly text: string;
+  readonly onText: (text: string) => void;
+  readonly isInDialog: boolean;
+  readonly onDone: () => void;
+}
+
 /** What the lead reads from the image: typed or a code, before anything is uncovered. */
-export function ThirdReading({ answer, isInDialog, onDone }: { answer: AnswerView; isInDialog: boolean; onDone: () => void }) {
+export function ThirdReading({ answer, text, onText, isInDialog, onDone }: ThirdReadingProps) {
   const isPhone = useIsPhone();
   const send = useThirdReading(answer.answerId);
   const [openedAt] = useState(() => Date.now());
-  const [text, setText] = useState('');
   const [isRare, setRare] = useState(false);
   const field = useRef<TextInput>(null);
   const back = understood(text, answer.units);
   useEffect(() => field.current?.focus(), []);
   const give = (given: { text: string } | { code: Code }) => {
-    if (!send.isPending) send.mutate({ id: uuidv7(), openedAt, ...given }, { onSuccess: onDone });
+    if (send.isPending) return;
+    send.mutate({ id: uuidv7(), openedAt, ...given }, {
+      onSuccess: () => {
+        onText('');
+        onDone();
+      },
+    });
   };
   const code = (chosen: Code) => () => {
     if (text === '') give({ code: chosen });
@@ -40,6 +53,7 @@ export function ThirdReading({ answer, isInDialog, onDone }: { answer: AnswerVie
       },
       B: code('blank'),
       X: code('cannot-read'),
+      S: code('ask-the-lead'),
       W: () => setRare(!isRare),
       ...(isRare ? Object.fromEntries(rareWithLead.map((rare, index) => [String(index + 1), code(rare)])) : {}),
     },
@@ -48,7 +62,7 @@ export function ThirdReading({ answer, isInDialog, onDone }: { answer: AnswerVie
   const help = back.kind === 'value' ? `Understood as ${back.value}. ${back.form}` : words.sheet.fromImage;
   return (
     <View style={{ gap: 10 }}>
-      <Vessel label={words.sheet.read} value={text} onChange={setText} help={help} error={back.kind === 'refused' ? back.message : undefined} variant="readingM" height={52} maxLength={64} takesCommands isFocusedFirst={!isPhone} inputRef={field} testID="third-reading" />
+      <Vessel label={words.sheet.read} value={text} onChange={onText} help={help} error={back.kind === 'refused' ? back.message : undefined} variant="readingM" height={52} maxLength={64} takesCommands isFocusedFirst={!isPhone} inputRef={field} testID="third-reading" />
       {text === '' ? (
         <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 8 }}>
           <Button isSmall keyCap="B" onPress={code('blank')} testID="third-blank">
@@ -73,12 +87,10 @@ export function ThirdReading({ answer, isInDialog, onDone }: { answer: AnswerVie
               {capital(codeWords[rare])}
             </Button>
           ))}
+          <Button isSmall keyCap="S" onPress={code('ask-the-lead')} testID="third-ask-the-lead">
+            {words.sheet.setAside}
+          </Button>
         </View>
-      ) : null}
-      {answer.isCovered ? (
-        <Text variant="small" tone="ink2">
-          {words.sheet.opens}
-        </Text>
       ) : null}
       {send.error ? (
         <Text variant="small" tone="methyl" live="assertive">
