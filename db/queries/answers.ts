@@ -20,6 +20,9 @@ import {
 } from '../schema';
 
 /** One answer with what identifies it. */
+/** The number of the item whose answer is waited for. */
+export const waitsForItem = sql<number | null>`(select i.number from answer a join item i on i.id = a.item where a.id = ${answer.waitsFor})`;
+
 export function answerHead(db: Database, answerId: string) {
   return db
     .select({
@@ -34,6 +37,7 @@ export function answerHead(db: Database, answerId: string) {
       state: answer.state,
       readingsDue: answer.readingsDue,
       score: answer.score,
+      waitsFor: waitsForItem,
       rev: answer.rev,
     })
     .from(answer)

@@ -13,6 +13,7 @@ import {
   uncovered,
   verdict,
 } from '../schema';
+import { waitsForItem } from './answers';
 
 export interface LedgerQuestion {
   readonly sitting: string;
@@ -60,6 +61,7 @@ export function ledgerRows(db: Database, question: LedgerQuestion, offset: numbe
       maxGrains: item.maxGrains,
       rule: verdict.rule,
       numbers: verdict.numbers,
+      waitsFor: waitsForItem,
       rev: answer.rev,
     })
     .from(answer)
@@ -112,6 +114,7 @@ export function readingsOfAnswers(db: Database, answerIds: readonly string[]) {
       code: reading.code,
       canonical: reading.canonical,
       value: reading.value,
+      method: reading.method,
       note: reading.note,
       recordedAt: reading.recordedAt,
     })

@@ -18,6 +18,12 @@ export const findDraftedItem = (db: Database, id: string): DraftedItem | undefin
 export const draftedItems = (db: Database, sittingId: string): DraftedItem[] =>
   drafted(db).where(eq(item.sitting, sittingId)).orderBy(asc(item.number), asc(item.id)).all();
 
+/** Tells the number of an item of a paper; null for one that is not on it. */
+export function numbersOf(db: Database, sittingId: string): (itemId: string) => number | null {
+  const numbers = new Map(db.select({ id: item.id, number: item.number }).from(item).where(eq(item.sitting, sittingId)).all().map(({ id, number }) => [id, number]));
+  return (itemId) => numbers.get(itemId) ?? null;
+}
+
 export const lastItemNumber = (db: Database, sittingId: string): number =>
   db.select({ last: max(item.number) }).from(item).where(eq(item.sitting, sittingId)).get()?.last ?? 0;
 
@@ -28,7 +34,7 @@ export function insertItem(db: Database, row: typeof item.$inferInsert, scheme: 
 
 export function updateItem(db: Database, id: string, prompt: string, scheme: ItemScheme): void {
   db.update(item)
-    .set({ prompt, maxGrains: scheme.maxGrains, rev: sql`${item.rev} + 1` })
+    .set({ prompt, kind: scheme.kind, maxGrains: scheme.maxGrains, rev: sql`${item.rev} + 1` })
     .where(eq(item.id, id))
     .run();
   db.update(itemDraft)

@@ -25,7 +25,13 @@ const statements = preparedOnce((db) => ({
       script: answer.script,
       sitting: answer.sitting,
       evidence: answer.evidence,
+      state: answer.state,
+      readingsDue: answer.readingsDue,
+      settledCanonical: answer.settledCanonical,
+      settledFrom: answer.settledFrom,
       score: answer.score,
+      waitsFor: answer.waitsFor,
+      sortValue: answer.sortValue,
       attendance: candidate.attendance,
       secondPolicy: sitting.secondPolicy,
       schemeVersion: sitting.schemeVersion,
@@ -37,7 +43,7 @@ const statements = preparedOnce((db) => ({
     .where(eq(answer.id, sql.placeholder('answer')))
     .prepare(),
   readings: db
-    .select({ id: reading.id, canonical: reading.canonical, code: reading.code, text: reading.text, value: reading.value })
+    .select({ id: reading.id, canonical: reading.canonical, code: reading.code, text: reading.text, value: reading.value, method: reading.method })
     .from(reading)
     .leftJoin(readingEnd, eq(readingEnd.reading, reading.id))
     .where(and(eq(reading.answer, sql.placeholder('answer')), eq(reading.purpose, 'live'), isNull(readingEnd.reading)))
@@ -49,14 +55,8 @@ const statements = preparedOnce((db) => ({
     .leftJoin(rulingEnd, eq(rulingEnd.ruling, ruling.id))
     .where(and(eq(ruling.answer, sql.placeholder('answer')), isNull(rulingEnd.ruling)))
     .prepare(),
-  scheme: db
-    .select({ hash: itemScheme.hash, body: itemScheme.body })
-    .from(schemeVersionItem)
-    .innerJoin(itemScheme, eq(itemScheme.hash, schemeVersionItem.itemScheme))
-    .where(and(eq(schemeVersionItem.version, sql.placeholder('version')), eq(schemeVersionItem.item, sql.placeholder('item'))))
-    .prepare(),
   verdict: db
-    .select({ id: verdict.id, grains: verdict.grains })
+    .select({ id: verdict.id, grains: verdict.grains, rule: verdict.rule, numbers: verdict.numbers })
     .from(verdict)
     .where(
       and(
@@ -89,11 +89,25 @@ const statements = preparedOnce((db) => ({
       settledCanonical: sql`${sql.placeholder('settledCanonical')}`,
       settledFrom: sql`${sql.placeholder('settledFrom')}`,
       score: sql`${sql.placeholder('score')}`,
+      waitsFor: sql`${sql.placeholder('waitsFor')}`,
       sortValue: sql`${sql.placeholder('sortValue')}`,
       seq: sql`${sql.placeholder('seq')}`,
       rev: sql`${answer.rev} + 1`,
     })
     .where(eq(answer.id, sql.placeholder('answer')))
+    .prepare(),
+  ofScript: db
+    .select({
+      id: answer.id,
+      item: answer.item,
+      state: answer.state,
+      settledCanonical: answer.settledCanonical,
+      numbers: verdict.numbers,
+    })
+    .from(answer)
+    .leftJoin(score, eq(score.id, answer.score))
+    .leftJoin(verdict, eq(verdict.id, score.verdict))
+    .where(eq(answer.script, sql.placeholder('script')))
     .prepare(),
   sum: db
     .select({
@@ -137,7 +151,19 @@ export const liveReadings = (db: Database, answerId: string) => statements(db).r
 export const standingRuling = (db: Database, answerId: string): RulingRow | undefined =>
   statements(db).ruling.get({ answer: answerId })?.ruling;
 
-export const schemeOfItem = (db: Database, version: string, itemId: string) => statements(db).scheme.get({ version, item: itemId });
+/** The items of a scheme version in paper order, each with its scheme. */
+export const schemesOfVersion = (db: Database, version: string) =>
+  db
+    .select({ id: item.id, number: item.number, hash: itemScheme.hash, body: itemScheme.body })
+    .from(schemeVersionItem)
+    .innerJoin(item, eq(item.id, schemeVersionItem.item))
+    .innerJoin(itemScheme, eq(itemScheme.hash, schemeVersionItem.itemScheme))
+    .where(eq(schemeVersionItem.version, version))
+    .orderBy(asc(item.number), asc(item.id))
+    .all();
+
+/** The answers of one script with what is settled, and the numbers of the verdict that stands. */
+export const answersOfScript = (db: Database, scriptId: string) => statements(db).ofScript.all({ script: scriptId });
 
 export const findVerdict = (db: Database, itemSchemeHash: string, canonical: string, context: string) =>
   statements(db).verdict.get({ itemScheme: itemSchemeHash, canonical, context });
@@ -170,6 +196,7 @@ export interface DerivedState {
   readonly settledCanonical: string | null;
   readonly settledFrom: string | null;
   readonly score: string | null;
+  readonly waitsFor: string | null;
   readonly sortValue: number | null;
   readonly seq: number;
 }

@@ -24,6 +24,8 @@ export const answer = sqliteTable(
     settledFrom: text({ enum: ['reading', 'ruling'] }),
     /** The score that stands; null while held, due or waiting. */
     score: text(),
+    /** The answer whose settling could still raise this mark; null where nothing is waited for. */
+    waitsFor: text(),
     /** Orders rows by value; it never decides. */
     sortValue: real(),
     /** The random order in which this answer comes to the desk. */
@@ -74,6 +76,8 @@ export const reading = sqliteTable(
     /** The parsed value as a fraction; null for a code. */
     value: text(),
     note: text(),
+    /** Ids of the method marks struck, in the order of the scheme, with commas. */
+    method: text().notNull().default(''),
     /** Read by someone who could know the key: such readings count in no error figure. */
     knewKey: integer({ mode: 'boolean' }).notNull(),
     lease: text(),

@@ -52,6 +52,7 @@ export const ruling = sqliteTable(
     canonical: text(),
     value: text(),
     grains: integer(),
+    method: text().notNull().default(''),
     reason: text(),
     /** The ruling this one took the place of; taking this one back puts that one in force again. */
     replaces: text(),

@@ -1,5 +1,5 @@
 import { index, integer, primaryKey, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core';
-import { vettingOutcomes } from '../../shared/contracts/enums';
+import { itemKinds, vettingOutcomes } from '../../shared/contracts/enums';
 import type { ItemScheme } from '../../shared/marking/scheme';
 import { id, instant, rev } from './columns';
 import { person } from './people';
@@ -13,7 +13,7 @@ export const item = sqliteTable(
     sitting: text().notNull().references(() => sitting.id),
     number: integer().notNull(),
     prompt: text().notNull(),
-    kind: text({ enum: ['numeric'] }).notNull().default('numeric'),
+    kind: text({ enum: itemKinds }).notNull().default('numeric'),
     maxGrains: integer().notNull(),
     rev: rev(),
   },

@@ -40,7 +40,7 @@ export function readAhead(context: Context, { sittingId, readers }: DemoSitting,
       for (const reader of readers) {
         if (ownLiveReading(db, answerId, reader)) continue;
         const leaseId = inTransaction(db, () => giveLease(context, answerId, reader));
-        recordReading(context, { personId: reader, isOfficer: false }, uuidv7(), { answerId, leaseId, openedAt: clock.now(), ...asRead(written, randomFrom(demoSeed, 'reading', reader === readers[0] ? 1 : 2, candidate, item.number)) });
+        recordReading(context, { personId: reader, isOfficer: false }, uuidv7(), { answerId, leaseId, method: [], openedAt: clock.now(), ...asRead(written, randomFrom(demoSeed, 'reading', reader === readers[0] ? 1 : 2, candidate, item.number)) });
       }
     }
   }

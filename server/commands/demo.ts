@@ -8,7 +8,7 @@ import { seedPeople } from '../../db/seed/people';
 import { demoItems, workedKey, type DemoItem } from '../../db/seed/truth/demo-items';
 import type { CandidateTruth } from '../../db/seed/truth/written';
 import { allCourses } from '../../db/queries/people';
-import type { ItemDraft } from '../../shared/contracts/items';
+import { itemDraft } from '../../shared/contracts/items';
 import { marksText } from '../../shared/marking/grains';
 import type { Actor } from '../auth/access';
 import { hashPassword } from '../auth/passwords';
@@ -33,19 +33,16 @@ function addItems(context: Context, lead: Actor, sittingId: string, items: reado
   return items.map((item) => {
     const { symbol, charge, electron } = item.asked;
     const quantity = item.asked.quantity === 'sigma' ? 'sigma' : 'zeff';
-    const draft: ItemDraft = {
+    const draft = itemDraft.parse({
       asked: { symbol, charge, electron, quantity, convention: 'slater' },
       decimals: workedKey(item).decimals,
-      figures: 4,
       prompt: null,
       marks: marksText(item.maxGrains),
       roundings: { downToDecimals: 1, truncation: false },
       bands: [],
-      alternatives: [],
-      slips: [],
       crossedOut: 'ask',
       twoAnswers: 'ask',
-    };
+    });
     return createItem(context, lead, sittingId, draft).id;
   });
 }

@@ -39,7 +39,7 @@ it('marks texts and codes by the rules of the paper', () => {
     ['', '', '3', 'code', '', ''],
     ['', '', '3', '', '', 'text'],
     ['', '', '', '', '', 'item'],
-    ['', '', '', '', '', 'text'],
+    ['', '', '3', '', '', 'text'],
   ]);
 });
 

@@ -17,7 +17,7 @@ export function itemRoutes(router: Router, context: Context): void {
   route(router, context, saveItem, ({ actor, params, body, req }) => items.saveItem(context, actor, params.id, seenRev(req), body));
   route(router, context, removeItem, ({ actor, params, req }) => items.removeItem(context, actor, params.id, seenRev(req)));
   route(router, context, orderItems, ({ actor, params, body }) => items.orderItems(context, actor, params.id, body.items));
-  route(router, context, workKey, ({ actor, body }) => items.workKey(context, actor, body.sittingId, body.draft));
-  route(router, context, spotTestContract, ({ actor, params, body }) => spotTest(context, actor, params.id, body.text, body.draft));
+  route(router, context, workKey, ({ actor, body }) => items.workKey(context, actor, body));
+  route(router, context, spotTestContract, ({ actor, params, body }) => spotTest(context, actor, params.id, body));
   route(router, context, lockContract, ({ actor, params }) => lockPaper(context, actor, params.id));
 }

@@ -1,3 +1,4 @@
+import type { Database } from '../../db/client';
 import {
   answerHead,
   cropsOfAnswer,
@@ -11,8 +12,10 @@ import { standingRuling } from '../../db/queries/settling';
 import { absolute, exactDecimals, fromFractionText, subtract, toDecimals } from '../../shared/chemistry/exact';
 import { work } from '../../shared/chemistry/work';
 import type { AnswerView } from '../../shared/contracts/ledger';
+import { completeScheme } from '../../shared/marking/complete-scheme';
 import { reasonInWords } from '../../shared/marking/reasons';
 import { scaleOf } from '../../shared/marking/scale';
+import { isConcordant } from '../../shared/marking/settlement';
 import type { GuardRole } from '../../shared/contracts/route';
 import { itemLabel } from '../../shared/marking/item-label';
 import type { Actor } from '../auth/access';
@@ -21,13 +24,15 @@ import { notFound } from '../errors';
 import { isCovered, shownGiven } from './covers';
 import { requireSitting, type SittingAccess } from './sitting-access';
 import { pictureVersion } from './picture-version';
-import { schemeInForce, verdictFor, type SchemeInForce } from './verdicts';
+import { answerContext, paperPlan, schemeInForce, type PaperPlan, type SchemeInForce } from './paper-plan';
+import { verdictFor } from './verdicts';
 
 export type AnswerHead = NonNullable<ReturnType<typeof answerHead>>;
 
 export interface AnswerAccess extends SittingAccess {
   readonly head: AnswerHead;
   readonly scheme: SchemeInForce;
+  readonly plan: PaperPlan;
 }
 
 /** The answer with the scheme in force, for an actor with one of the roles in its course. */
@@ -36,7 +41,7 @@ export function requireAnswer(context: Context, actor: Actor, answerId: string, 
   if (!head) throw notFound();
   const { sitting, access } = requireSitting(context, actor, head.sitting, roles);
   if (sitting.schemeVersion === null) throw notFound();
-  return { sitting, access, head, scheme: schemeInForce(context.db, sitting.schemeVersion, head.item) };
+  return { sitting, access, head, scheme: schemeInForce(context.db, sitting.schemeVersion, head.item), plan: paperPlan(context.db, sitting.schemeVersion) };
 }
 
 /** Readers by number, steady within the sitting; a lead's names are for the people pages. */
@@ -59,8 +64,8 @@ function gapOf(readings: readonly Reading[]): string | null {
 function rulingView(context: Context, actor: Actor, answerId: string): AnswerView['ruling'] {
   const ruling = standingRuling(context.db, answerId);
   if (!ruling) return null;
-  const { id, kind, text, code, grains, reason, at } = ruling;
-  return { id, kind, text, code, grains, reason, isOwn: ruling.by === actor.personId, at };
+  const { id, kind, text, code, grains, method, reason, at } = ruling;
+  return { id, kind, text, code, grains, method: idsOf(method), reason, isOwn: ruling.by === actor.personId, at };
 }
 
 function scoreView(context: Context, head: AnswerHead): AnswerView['score'] {
@@ -70,17 +75,35 @@ function scoreView(context: Context, head: AnswerHead): AnswerView['score'] {
   return { grains: found.grains, why, schemeOrdinal: found.ordinal };
 }
 
-function mineView(context: Context, actor: Actor, { head, scheme }: AnswerAccess): AnswerView['mine'] {
+const idsOf = (method: string): string[] => (method === '' ? [] : method.split(','));
+
+/** What a reading of this answer would get, beside the rest of the paper as it stands. */
+function grainsOf(db: Database, { head, scheme, plan }: AnswerAccess, reading: Pick<Reading, 'canonical' | 'text' | 'code' | 'method'>): number | null {
+  const { context } = answerContext(db, plan, head, reading.method);
+  const given = reading.code === null ? { text: reading.text ?? '' } : { code: reading.code };
+  return verdictFor(db, scheme, { canonical: reading.canonical, given, context }).grains;
+}
+
+function mineView(context: Context, actor: Actor, access: AnswerAccess): AnswerView['mine'] {
+  const { head } = access;
   const third = thirdReadingOf(context.db, head.id, actor.personId);
   if (!third) return null;
-  const verdict = verdictFor(context.db, scheme, third.canonical, third.code === null ? { text: third.text ?? '' } : { code: third.code });
-  return { id: third.id, text: third.text, code: third.code, grains: verdict.grains };
+  return { id: third.id, text: third.text, code: third.code, method: idsOf(third.method), grains: grainsOf(context.db, access, third) };
 }
 
 /** Why this person may not settle the answer: who read it cannot. */
 export function cannotSettle(actor: Actor, isLead: boolean, readings: readonly Reading[]): string | null {
   if (!isLead) return 'Only a lead can rule.';
   return readings.some((reading) => reading.reader === actor.personId) ? 'You read this answer yourself. Another lead has to settle it.' : null;
+}
+
+/** The own values that an answer follows from, as they are settled by now. */
+function followsView(db: Database, { head, scheme, plan }: AnswerAccess): AnswerView['follows'] {
+  const link = completeScheme(scheme.body).followThrough;
+  if (!link) return [];
+  const { facts } = answerContext(db, plan, head, '');
+  const numbered = (id: string, canonical: string | null) => ({ itemNumber: (plan.items.get(id)?.at ?? 0) + 1, canonical });
+  return [numbered(link.from, facts.followed), ...(link.second ? [numbered(link.second.from, facts.second)] : [])];
 }
 
 /** One answer whole, as this person may see it. */
@@ -103,11 +126,15 @@ export function answerView(context: Context, actor: Actor, answerId: string): An
     candidateNumber: head.candidateNumber ?? '',
     itemId: head.item,
     itemNumber: head.itemNumber,
-    label: itemLabel(scheme.body.asked),
+    label: itemLabel(scheme.body),
     prompt: head.prompt,
+    kind: scheme.body.kind,
     units: [...scheme.body.units],
     maxGrains: head.maxGrains,
     state: head.state,
+    methodMarks: completeScheme(scheme.body).methodMarks.map(({ id, text, grains }) => ({ id, text, grains })),
+    waitsFor: head.waitsFor,
+    follows: followsView(db, found),
     isCovered: covered,
     cannotSettle: cannotSettle(actor, access.roles.has('lead'), readings),
     crops: crops.flatMap(({ box, use, blob, widthPx, heightPx }) => (use === 'number' ? [] : [{ box, version: pictureVersion(blob), use, widthPx, heightPx }])),
@@ -118,10 +145,11 @@ export function answerView(context: Context, actor: Actor, answerId: string): An
       id: reading.id,
       reader: nameOf(reading.reader),
       given: shownGiven(reading, head.state, covered),
-      grains: covered ? null : verdictFor(db, scheme, reading.canonical, reading.code === null ? { text: reading.text ?? '' } : { code: reading.code }).grains,
+      grains: covered ? null : grainsOf(db, found, reading),
       note: covered ? null : reading.note,
+      method: covered ? [] : idsOf(reading.method),
       recordedAt: reading.recordedAt,
-      isAsMine: covered || !third ? null : third.canonical === reading.canonical,
+      isAsMine: covered || !third ? null : isConcordant(third, reading),
     })),
     mine,
     gap: covered ? null : gapOf(readings),
@@ -131,7 +159,7 @@ export function answerView(context: Context, actor: Actor, answerId: string): An
       key: scheme.body.key.text,
       quantity: scheme.body.asked.quantity,
       convention: scheme.body.asked.convention,
-      scale: scaleOf(scheme.body),
+      scale: scheme.body.kind === 'numeric' ? scaleOf(scheme.body) : null,
       derivation: worked.ok ? worked.value.derivation : null,
     },
     rev: head.rev,

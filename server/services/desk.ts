@@ -17,6 +17,7 @@ import {
   renewLeases,
 } from '../../db/queries/desk';
 import type { DeskItem, DeskLease, RecentReading } from '../../shared/contracts/desk';
+import { completeScheme } from '../../shared/marking/complete-scheme';
 import { itemLabel } from '../../shared/marking/item-label';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
@@ -97,8 +98,10 @@ export function deskStanding(context: Context, actor: Actor, sittingId: string) 
     id,
     number,
     prompt,
-    label: itemLabel(body.asked),
+    label: itemLabel(body),
+    kind: body.kind,
     units: [...body.units],
+    methodMarks: completeScheme(body).methodMarks.map(({ id, text }) => ({ id, text })),
     ...(counts.get(id) ?? { read: 0, toRead: 0 }),
   }));
   return {

@@ -5,11 +5,11 @@ import { marksText } from '../../shared/marking/grains';
 import { itemLabel } from '../../shared/marking/item-label';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
-import { draftOf } from './item-drafts';
+import { draftOf } from './drafts/draft-of';
 import { schemeHash } from './schemes';
 import { requireSitting } from './sitting-access';
 
-/** Items of the other sittings of a course, each content once, with the sittings that used it, newest first. */
+/** Items of the other sittings of a course, each content once, with the sittings that used it, newest first; what they follow from stays behind. */
 export function itemBank(context: Context, actor: Actor, sittingId: string): BankItem[] {
   const { db } = context;
   const { sitting } = requireSitting(context, actor, sittingId, ['lead']);
@@ -19,7 +19,7 @@ export function itemBank(context: Context, actor: Actor, sittingId: string): Ban
       const content = `${schemeHash(scheme)} ${item.prompt}`;
       const known = bank.get(content);
       const usedIn = [...(known?.usedIn ?? []), other.title];
-      bank.set(content, known ? { ...known, usedIn } : { itemId: item.id, label: itemLabel(scheme.asked), prompt: item.prompt, key: scheme.key.text, marks: marksText(item.maxGrains), usedIn, draft: draftOf(scheme, item.prompt) });
+      bank.set(content, known ? { ...known, usedIn } : { itemId: item.id, label: itemLabel(scheme), prompt: item.prompt, key: scheme.key.text, marks: marksText(item.maxGrains), usedIn, draft: { ...draftOf(scheme, item.prompt), followThrough: null } });
     }
   }
   return [...bank.values()];

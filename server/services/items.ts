@@ -1,14 +1,16 @@
 import { v7 as uuidv7 } from 'uuid';
 import { inTransaction, type Database } from '../../db/client';
 import { answerBoxCounts, deleteItem, draftedItems, findDraftedItem, insertItem, lastItemNumber, numberItem, paperLockedAt, updateItem, type DraftedItem } from '../../db/queries/papers';
-import { proposedStem } from '../../shared/chemistry/stem';
 import type { ItemDraft, ItemView, WorkedDraft } from '../../shared/contracts/items';
 import type { ItemScheme } from '../../shared/marking/scheme';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
 import { conflict, invalidRequest, notFound } from '../errors';
 import { recordAct } from './audit';
-import { draftOf, readDraft, workDraft } from './item-drafts';
+import { proposedPrompt } from './drafts/asked-of';
+import { draftOf } from './drafts/draft-of';
+import { readDraft, type Place } from './drafts/read-draft';
+import { workDraft } from './drafts/work-draft';
 import { bumpSitting, requireOpenPaper, requireSitting, type SittingAccess } from './sitting-access';
 import { schemeHash } from './schemes';
 
@@ -17,15 +19,25 @@ interface ItemList {
   readonly items: ItemView[];
 }
 
-function viewOf({ item, scheme }: DraftedItem, answerBoxes: number): ItemView {
+const linked = (items: readonly DraftedItem[]): Place['items'] => items.map(({ item, scheme }) => ({ id: item.id, number: item.number, scheme }));
+
+function viewOf({ item, scheme }: DraftedItem, items: Place['items'], answerBoxes: number): ItemView {
   const draft = draftOf(scheme, item.prompt);
   const { id, number, prompt, maxGrains, rev } = item;
-  return { id, sittingId: item.sitting, number, draft, prompt, worked: workDraft(draft), maxGrains, hasAnswerBox: answerBoxes === 1, rev };
+  return { id, sittingId: item.sitting, number, draft, prompt, worked: workDraft(draft, { items, number }), maxGrains, hasAnswerBox: answerBoxes === 1, rev };
+}
+
+/** Where an item stands on its paper; one that is not made yet comes last. */
+export function placeOf(db: Database, sittingId: string, itemId: string | null): Place {
+  const items = linked(draftedItems(db, sittingId));
+  return { items, number: items.find(({ id }) => id === itemId)?.number ?? items.length + 1 };
 }
 
 function listOf(db: Database, sittingId: string): ItemList {
   const boxes = answerBoxCounts(db, sittingId, 1);
-  const items = draftedItems(db, sittingId).map((drafted) => viewOf(drafted, boxes.get(drafted.item.id) ?? 0));
+  const drafted = draftedItems(db, sittingId);
+  const paper = linked(drafted);
+  const items = drafted.map((one) => viewOf(one, paper, boxes.get(one.item.id) ?? 0));
   return { lockedAt: paperLockedAt(db, sittingId), items };
 }
 
@@ -47,15 +59,15 @@ export function requireItem(context: Context, actor: Actor, itemId: string, role
 
 export function itemFor(context: Context, actor: Actor, itemId: string): ItemView {
   const { drafted } = requireItem(context, actor, itemId, ['lead', 'external']);
-  return viewOf(drafted, answerBoxCounts(context.db, drafted.item.sitting, 1).get(itemId) ?? 0);
+  return viewOf(drafted, linked(draftedItems(context.db, drafted.item.sitting)), answerBoxCounts(context.db, drafted.item.sitting, 1).get(itemId) ?? 0);
 }
 
 /** The scheme of a draft that can be stored, or a refusal that names its fields. */
-function storable(draft: ItemDraft): { scheme: ItemScheme; prompt: string } {
-  const { scheme, refusals } = readDraft(draft);
+function storable(draft: ItemDraft, place: Place): { scheme: ItemScheme; prompt: string } {
+  const { scheme, refusals } = readDraft(draft, place);
   const [first] = refusals;
   if (!scheme || first) throw invalidRequest(first?.message ?? 'The item cannot be worked.', Object.fromEntries(refusals.map(({ path, message }) => [path, message])));
-  return { scheme, prompt: draft.prompt ?? proposedStem(scheme.asked, scheme.key.decimals, scheme.key.figures ?? null) };
+  return { scheme, prompt: draft.prompt ?? proposedPrompt(scheme) };
 }
 
 /** Adds an item at the end of an open paper; its key is computed here. */
@@ -66,10 +78,10 @@ export function createItem(context: Context, actor: Actor, sittingId: string, dr
   inTransaction(db, () => {
     const { sitting } = requireSitting(context, actor, sittingId, ['lead']);
     requireOpenPaper(context, sitting);
-    const { scheme, prompt } = storable(draft);
+    const { scheme, prompt } = storable(draft, placeOf(db, sittingId, null));
     const number = lastItemNumber(db, sittingId) + 1;
     if (number > 200) throw invalidRequest('A paper has at most 200 items.');
-    insertItem(db, { id, sitting: sittingId, number, prompt, maxGrains: scheme.maxGrains }, scheme);
+    insertItem(db, { id, sitting: sittingId, number, prompt, kind: scheme.kind, maxGrains: scheme.maxGrains }, scheme);
     bumpSitting(db, sittingId);
     recordAct(context, { actor: actor.personId, act: 'item-made', sitting: sittingId, subject: id, after: { number, scheme: schemeHash(scheme) } });
   });
@@ -84,7 +96,7 @@ export function saveItem(context: Context, actor: Actor, itemId: string, rev: nu
     const { drafted, sitting } = requireItem(context, actor, itemId, ['lead']);
     requireOpenPaper(context, sitting);
     if (drafted.item.rev !== rev) throw conflict('Someone changed this item meanwhile. Yours was not stored.', itemFor(context, actor, itemId));
-    const { scheme, prompt } = storable(draft);
+    const { scheme, prompt } = storable(draft, placeOf(db, sitting.id, itemId));
     updateItem(db, itemId, prompt, scheme);
     bumpSitting(db, sitting.id);
     const before = { scheme: schemeHash(drafted.scheme), prompt: drafted.item.prompt };
@@ -101,6 +113,8 @@ export function removeItem(context: Context, actor: Actor, itemId: string, rev: 
     const { drafted, sitting } = requireItem(context, actor, itemId, ['lead']);
     requireOpenPaper(context, sitting);
     if (drafted.item.rev !== rev) throw conflict('Someone changed this item meanwhile. It was not removed.', itemFor(context, actor, itemId));
+    const followers = draftedItems(db, sitting.id).filter(({ scheme: { followThrough } }) => followThrough?.from === itemId || followThrough?.second?.from === itemId);
+    if (followers.length > 0) throw invalidRequest(`Item ${followers.map(({ item }) => item.number).join(' and ')} follows from this one. Take that link away first.`);
     deleteItem(db, itemId);
     draftedItems(db, sitting.id).forEach(({ item }, index) => numberItem(db, item.id, index + 1));
     bumpSitting(db, sitting.id);
@@ -127,7 +141,7 @@ export function orderItems(context: Context, actor: Actor, sittingId: string, or
 }
 
 /** Works a draft without storing it. */
-export function workKey(context: Context, actor: Actor, sittingId: string, draft: ItemDraft): WorkedDraft {
+export function workKey(context: Context, actor: Actor, { sittingId, itemId, draft }: { sittingId: string; itemId: string | null; draft: ItemDraft }): WorkedDraft {
   requireSitting(context, actor, sittingId, ['lead']);
-  return workDraft(draft);
+  return workDraft(draft, placeOf(context.db, sittingId, itemId));
 }

@@ -29,7 +29,7 @@ function viewOf(db: Database, sittingId: string): LayoutView {
     boxes: boxes.map(({ layout: _layout, ...box }) => box),
     itemsWithoutBox: draftedItems(db, sittingId)
       .filter(({ item }) => !placed.has(item.id))
-      .map(({ item, scheme }) => ({ id: item.id, number: item.number, label: itemLabel(scheme.asked) })),
+      .map(({ item, scheme }) => ({ id: item.id, number: item.number, label: itemLabel(scheme) })),
     rev: layout?.rev ?? 0,
   };
 }

@@ -22,6 +22,7 @@ const held = new Set<string>(heldStates);
 function whyOf(row: Row): string {
   if (row.state === 'ruled') return row.rule && row.numbers ? `ruled, ${reasonInWords({ grains: row.grains, rule: row.rule, numbers: row.numbers }).head}` : 'a mark ruled by hand';
   if (row.state === 'one-reading' && row.readingsDue > 0) return 'another reading is due';
+  if (row.waitsFor !== null) return `waits for item ${row.waitsFor}`;
   return row.rule && row.numbers ? reasonInWords({ grains: row.grains, rule: row.rule, numbers: row.numbers }).head : '';
 }
 
@@ -37,7 +38,7 @@ function rowView(row: Row, readings: readonly Reading[], uncovered: boolean, sch
     isCovered: covered,
     readingsDue: row.readingsDue,
     readings: readings.map((reading) => shownGiven(reading, row.state, covered)),
-    value: row.sortValue,
+    value: scheme.body.kind === 'numeric' ? row.sortValue : null,
     key: key.at,
     span: Math.max(key.at - lo, hi - key.at),
     why: whyOf(row),
@@ -75,7 +76,7 @@ export function ledger(context: Context, actor: Actor, sittingId: string, query:
   requireLockedPaper(context, sitting);
   const schemeVersion = sitting.schemeVersion ?? '';
   const question: LedgerQuestion = { sitting: sittingId, show: query.show, item: query.item, find: query.find, sort: query.sort, direction: query.direction };
-  const schemes = new Map(deskItems(db, schemeVersion).map(({ id, number, body }) => [id, { number, body, label: itemLabel(body.asked) }]));
+  const schemes = new Map(deskItems(db, schemeVersion).map(({ id, number, body }) => [id, { number, body, label: itemLabel(body) }]));
   const counts = countsByChip(ledgerCounts(db, question));
   const rows = ledgerRows(db, question, query.offset, query.limit);
   const ids = rows.map((row) => row.answerId);

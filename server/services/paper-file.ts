@@ -7,7 +7,8 @@ import { paperSchemaPath, type PaperFile } from '../../shared/contracts/paper-fi
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
 import { conflict, invalidRequest } from '../errors';
-import { draftOf, readDraft } from './item-drafts';
+import { draftOf } from './drafts/draft-of';
+import { draftOfFileItem, fileItemOf, readFileItems } from './drafts/file-items';
 import { createItem, removeItem } from './items';
 import { saveLayout } from './layouts';
 import { requireOpenPaper, requireSitting } from './sitting-access';
@@ -23,7 +24,7 @@ function fileOf(db: Database, sittingId: string, title: string): PaperFile {
     format: 'meniscus-paper',
     version: 1,
     title,
-    items: items.map(({ item, scheme }) => draftOf(scheme, item.prompt)),
+    items: items.map(({ item, scheme }) => fileItemOf(draftOf(scheme, item.prompt), (id) => numbers.get(id) ?? null)),
     pages: layout ? layoutPages(db, layout.id).map(({ widthMm, heightMm }) => ({ widthMm, heightMm })) : [],
     boxes: layout ? boxesOfLayout(db, layout.id).map(({ item, pageNo, use, x, y, w, h }) => ({ item: item === null ? null : (numbers.get(item) ?? null), pageNo, use, x, y, w, h })) : [],
   };
@@ -36,10 +37,10 @@ export function paperFileFor(context: Context, actor: Actor, sittingId: string):
 
 /** Throws with every field of every item that keeps the file from being taken: `items.3.asked.electron`. */
 function requireSoundItems({ items }: PaperFile): void {
-  const refused = items.flatMap((draft, index) => readDraft(draft).refusals.map(({ path, message }) => ({ index, path, message })));
-  const [first] = refused;
+  const { refusals } = readFileItems(items);
+  const [first] = refusals;
   if (!first) return;
-  throw invalidRequest(`Item ${first.index + 1}: ${first.message}`, Object.fromEntries(refused.map(({ index, path, message }) => [`items.${index}.${path}`, message])));
+  throw invalidRequest(`Item ${first.place}: ${first.message}`, Object.fromEntries(refusals.map(({ place, path, message }) => [`items.${place - 1}.${path}`, message])));
 }
 
 /** The boxes of a file, each with the id of its item. */
@@ -60,7 +61,8 @@ export function takePaperFile(context: Context, actor: Actor, sittingId: string,
     if (sitting.rev !== rev) throw conflict('Someone changed this sitting meanwhile. The file was not taken.', fileOf(db, sittingId, sitting.title));
     requireSoundItems(file);
     for (const { item } of draftedItems(db, sittingId).reverse()) removeItem(context, actor, item.id, item.rev);
-    const ids = file.items.map((draft) => createItem(context, actor, sittingId, draft).id);
+    const ids: string[] = [];
+    for (const item of file.items) ids.push(createItem(context, actor, sittingId, draftOfFileItem(item, (place) => ids[place - 1] ?? '')).id);
     const layout = findLayout(db, sittingId, drawnOrdinal);
     if (layout || file.pages.length > 0 || file.boxes.length > 0) saveLayout(context, actor, sittingId, layout?.rev ?? 0, { pages: file.pages, boxes: boxesFor(file, ids) });
     updateSitting(db, sittingId, {});

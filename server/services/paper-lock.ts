@@ -4,6 +4,7 @@ import { updateSitting } from '../../db/queries/courses';
 import { findLayout } from '../../db/queries/layouts';
 import { answerBoxCounts, draftedItems, insertPaperLock, insertSchemeVersion, insertSchemeVersionItem } from '../../db/queries/papers';
 import type { Database } from '../../db/client';
+import { linkProblem } from '../../shared/marking/links';
 import { schemeProblems } from '../../shared/marking/scheme-checks';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
@@ -25,10 +26,13 @@ function lockProblems(db: Database, sittingId: string): Record<string, string> {
   const items = draftedItems(db, sittingId);
   if (items.length === 0) return { items: 'The paper has no item yet.' };
   const boxes = answerBoxCounts(db, sittingId, 1);
+  const paper = items.map(({ item, scheme }) => ({ id: item.id, number: item.number, scheme }));
   const problems: Record<string, string> = {};
   for (const { item, scheme } of items) {
     const [wrong] = schemeProblems(scheme);
-    if (wrong) problems[`items.${item.number}`] = `Item ${item.number}: ${wrong.message}`;
+    const link = linkProblem({ id: item.id, number: item.number, scheme }, paper);
+    if (link) problems[`items.${item.number}`] = `Item ${item.number}: ${link}`;
+    else if (wrong) problems[`items.${item.number}`] = `Item ${item.number}: ${wrong.message}`;
     else if (boxes.get(item.id) !== 1) problems[`items.${item.number}`] = `Item ${item.number} has no answer box on a page.`;
   }
   return problems;

@@ -1,5 +1,5 @@
 import PDFDocument from 'pdfkit';
-import { draftedItems, paperLockedAt } from '../../db/queries/papers';
+import { draftedItems, numbersOf, paperLockedAt } from '../../db/queries/papers';
 import { findCourse } from '../../db/queries/courses';
 import { work } from '../../shared/chemistry/work';
 import { marksText } from '../../shared/marking/grains';
@@ -15,7 +15,7 @@ const margin = 51;
 
 const write = (document: Document, fount: Part['fount'], size: number, text: string): Document => paragraph(document, { fount, size, text });
 
-function writeScheme(document: Document, scheme: ItemScheme): void {
+function writeScheme(document: Document, scheme: ItemScheme, numberOf: (itemId: string) => number | null): void {
   const worked = work(scheme.asked);
   write(document, 'value', 12, ['Key', scheme.key.text.replace('-', '−'), ...scheme.units.slice(0, 1)].join(' '));
   if (worked.ok) {
@@ -25,7 +25,7 @@ function writeScheme(document: Document, scheme: ItemScheme): void {
     for (const step of steps) write(document, 'value', 9.5, step);
     if (selfScreening) write(document, 'text', 9.5, selfScreening);
   }
-  for (const { name, words } of schemeInWords(scheme)) {
+  for (const { name, words } of schemeInWords(scheme, numberOf)) {
     paragraph(document, { fount: 'strong', size: 9.5, text: `${name}: ` }, { fount: 'text', size: 9.5, text: words });
   }
 }
@@ -35,6 +35,7 @@ export async function paperPdf(context: Context, actor: Actor, sittingId: string
   const { db } = context;
   const { sitting } = requireSitting(context, actor, sittingId, ['lead', 'external']);
   const items = draftedItems(db, sittingId);
+  const numberOf = numbersOf(db, sittingId);
   const total = items.reduce((sum, { item }) => sum + item.maxGrains, 0);
   const head = `${findCourse(db, sitting.course)?.code ?? ''}, ${sitting.title}`;
   const document = new PDFDocument({ size: 'A4', margin, bufferPages: true, info: { Title: `${head}: paper and mark scheme`, Producer: 'Meniscus', Creator: 'Meniscus' } });
@@ -53,7 +54,7 @@ export async function paperPdf(context: Context, actor: Actor, sittingId: string
   for (const { item, scheme } of items) {
     if (document.y > document.page.height - 180) document.addPage();
     write(document, 'strong', 12, `${item.number}   ${item.prompt}   [${marksText(item.maxGrains)}]`);
-    writeScheme(document, scheme);
+    writeScheme(document, scheme, numberOf);
     document.moveDown(1);
   }
   const { start, count } = document.bufferedPageRange();

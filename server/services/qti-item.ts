@@ -59,7 +59,7 @@ export function qtiItem({ identifier, number, prompt, scheme }: PackedItem): str
   const document = create({ version: '1.0', encoding: 'UTF-8', invalidCharReplacement: '' });
   const item = document.ele(itemSpace, 'qti-assessment-item', {
     identifier,
-    title: `${number}. ${itemLabel(scheme.asked)}`,
+    title: `${number}. ${itemLabel(scheme)}`,
     adaptive: 'false',
     'time-dependent': 'false',
     'xml:lang': 'en-GB',

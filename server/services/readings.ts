@@ -4,8 +4,10 @@ import { liveReadings, standingRuling } from '../../db/queries/settling';
 import { toFractionText } from '../../shared/chemistry/exact';
 import type { DeskLease, SentReading } from '../../shared/contracts/desk';
 import { codeCanonical } from '../../shared/marking/canonical';
-import { grammarVersion, readAnswer } from '../../shared/marking/read-answer';
-import type { Code } from '../../shared/marking/scheme';
+import { grammarVersion } from '../../shared/marking/read-answer';
+import { readTyped } from '../../shared/marking/read-typed';
+import type { Code, ItemScheme } from '../../shared/marking/scheme';
+import { isConcordant } from '../../shared/marking/settlement';
 import { requireCourseRole, type Actor, type CourseAccess } from '../auth/access';
 import type { Context } from '../context';
 import { conflict, invalidRequest, notFound } from '../errors';
@@ -23,18 +25,27 @@ export interface Understood {
   readonly code: Code | null;
   readonly canonical: string;
   readonly value: string | null;
+  /** Ids of the method marks struck, in the order of the scheme, with commas. */
+  readonly method: string;
+}
+
+function struckOf({ methodMarks = [] }: ItemScheme, struck: readonly string[]): string {
+  const unknown = struck.find((id) => !methodMarks.some((mark) => mark.id === id));
+  if (unknown !== undefined) throw invalidRequest('This item has no such method mark.', { method: 'This item has no such method mark.' });
+  return methodMarks.filter(({ id }) => struck.includes(id)).map(({ id }) => id).join(',');
 }
 
 /** A typed text or a code as it is stored; a text that the grammar refuses is named with its place. */
-export function understand(given: { text?: string | undefined; code?: Code | undefined }, units: readonly string[]): Understood {
-  if (given.code !== undefined) return { text: null, code: given.code, canonical: codeCanonical(given.code), value: null };
+export function understand(given: { text?: string | undefined; code?: Code | undefined; method: readonly string[] }, scheme: ItemScheme): Understood {
+  const method = struckOf(scheme, given.method);
+  if (given.code !== undefined) return { text: null, code: given.code, canonical: codeCanonical(given.code), value: null, method };
   const text = given.text ?? '';
-  const read = readAnswer(text, units);
+  const read = readTyped(text, scheme);
   if (!read.ok) {
     const message = 'message' in read ? read.message : 'This is not yet a value.';
     throw invalidRequest(message, { text: message });
   }
-  return { text, code: null, canonical: read.canonical, value: toFractionText(read.value) };
+  return { text, code: null, canonical: read.canonical, value: toFractionText(read.value), method };
 }
 
 function requireTarget(context: Context, actor: Actor, answerId: string): { target: Target; access: CourseAccess } {
@@ -48,17 +59,17 @@ function isRepeat(context: Context, actor: Actor, id: string, sent: SentReading)
   const known = findReading(context.db, id);
   if (!known) return false;
   if (known.reader !== actor.personId) throw notFound();
-  const same = known.answer === sent.answerId && known.text === (sent.text ?? null) && known.code === (sent.code ?? null);
+  const same = known.answer === sent.answerId && known.text === (sent.text ?? null) && known.code === (sent.code ?? null) && known.method.split(',').filter((id) => id !== '').sort().join() === [...sent.method].sort().join();
   if (!same) throw conflict('Another reading was stored under this id. Yours was not stored.', { text: known.text, code: known.code });
   return true;
 }
 
 /** A reading counts for the pair unless the pair is full and it says the same, or a ruling stands. */
-function isSurplus(context: Context, target: Target, canonical: string): boolean {
+function isSurplus(context: Context, target: Target, understood: Understood): boolean {
   if (standingRuling(context.db, target.answer)) return true;
   const others = liveReadings(context.db, target.answer);
   const wanted = target.secondPolicy === 'all' ? 2 : 1;
-  return others.length >= wanted && others.every((other) => other.canonical === canonical);
+  return others.length >= wanted && others.every((other) => isConcordant(other, understood));
 }
 
 /** Records one reading and settles its answer; on disk with the transaction it is called in, its own when there is none. A late one, its lease run out, is kept too. */
@@ -69,7 +80,7 @@ export function recordReading(context: Context, actor: Actor, id: string, sent: 
   if (!lease || lease.reader !== actor.personId || lease.answer !== sent.answerId) throw notFound();
   if (target.schemeVersion === null) throw conflict('The paper is still open to change.');
   const scheme = schemeInForce(db, target.schemeVersion, target.item);
-  const understood = understand(sent, scheme.body.units);
+  const understood = understand(sent, scheme.body);
   inTransaction(db, () => {
     if (isRepeat(context, actor, id, sent)) return;
     const own = ownLiveReading(db, sent.answerId, actor.personId);
@@ -78,7 +89,7 @@ export function recordReading(context: Context, actor: Actor, id: string, sent: 
       throw conflict('You have read this answer already. This reading was not stored.', { text: stored?.text ?? null, code: stored?.code ?? null });
     }
     const at = clock.now();
-    const surplus = isSurplus(context, target, understood.canonical);
+    const surplus = isSurplus(context, target, understood);
     insertReading(db, {
       id,
       answer: sent.answerId,

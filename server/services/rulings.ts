@@ -9,6 +9,7 @@ import type { AnswerView, RulingBody } from '../../shared/contracts/ledger';
 import { marksText } from '../../shared/marking/grains';
 import { grammarVersion } from '../../shared/marking/read-answer';
 import type { Code } from '../../shared/marking/scheme';
+import { isConcordant } from '../../shared/marking/settlement';
 import { readMarks } from '../../shared/marking/typed-marks';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
@@ -18,11 +19,12 @@ import { recordAct } from './audit';
 import { isCovered } from './covers';
 import { understand } from './readings';
 import { settleAnswers } from './settle';
-import { verdictFor } from './verdicts';
+import { decidesCode } from './verdicts';
 
 interface TypedThird {
   readonly text?: string | undefined;
   readonly code?: Code | undefined;
+  readonly method: readonly string[];
   readonly openedAt: number;
 }
 
@@ -37,11 +39,11 @@ function requireSettling(context: Context, actor: Actor, answerId: string): Answ
 export function recordThirdReading(context: Context, actor: Actor, answerId: string, readingId: string, typed: TypedThird): AnswerView {
   const { db, clock } = context;
   const { head, scheme, sitting } = requireSettling(context, actor, answerId);
-  const understood = understand(typed, scheme.body.units);
+  const understood = understand(typed, scheme.body);
   inTransaction(db, () => {
     const known = findReading(db, readingId);
     if (known) {
-      const same = known.answer === answerId && known.reader === actor.personId && known.canonical === understood.canonical;
+      const same = known.answer === answerId && known.reader === actor.personId && isConcordant(known, understood);
       if (!same) throw conflict('Another reading was stored under this id. Yours was not stored.');
       return;
     }
@@ -73,14 +75,13 @@ function grainsOf(typed: string, maxGrains: number): number {
   return marks.grains;
 }
 
-type Ruled = Pick<RulingRow, 'kind' | 'text' | 'code' | 'canonical' | 'value' | 'grains'>;
+type Ruled = Pick<RulingRow, 'kind' | 'text' | 'code' | 'canonical' | 'value' | 'grains' | 'method'>;
 
 /** What the ruling says, checked against the scheme: a code it leaves to a person cannot be ruled, only a mark. */
-function ruledBy(context: Context, { head, scheme }: AnswerAccess, body: RulingBody): Ruled {
-  if (body.kind === 'mark') return { kind: 'mark', text: null, code: null, canonical: null, value: null, grains: grainsOf(body.marks, head.maxGrains) };
-  const understood = understand(body, scheme.body.units);
-  const given = understood.code === null ? { text: understood.text ?? '' } : { code: understood.code };
-  if (verdictFor(context.db, scheme, understood.canonical, given).grains === null) {
+function ruledBy({ head, scheme }: AnswerAccess, body: RulingBody): Ruled {
+  if (body.kind === 'mark') return { kind: 'mark', text: null, code: null, canonical: null, value: null, method: '', grains: grainsOf(body.marks, head.maxGrains) };
+  const understood = understand(body, scheme.body);
+  if (understood.code !== null && !decidesCode(scheme, { code: understood.code })) {
     throw invalidRequest('The scheme leaves this code to a person. Rule a mark, with a reason.', { code: 'Rule a mark instead.' });
   }
   return { kind: body.kind, ...understood, grains: null };
@@ -89,7 +90,7 @@ function ruledBy(context: Context, { head, scheme }: AnswerAccess, body: RulingB
 /** A reason is asked for a mark, for a ruling that is neither reading, and for changing what stands. */
 function requireReason(ruled: Ruled, body: RulingBody, readings: ReturnType<typeof readingsOfAnswers>, isHeld: boolean, replaces: boolean): void {
   if (body.reason !== undefined) return;
-  const isOneOfThem = ruled.canonical !== null && readings.some((reading) => reading.canonical === ruled.canonical);
+  const isOneOfThem = ruled.canonical !== null && readings.some((reading) => isConcordant(reading, { canonical: ruled.canonical ?? '', method: ruled.method }));
   if (isOneOfThem && isHeld && !replaces) return;
   throw invalidRequest('Say why: this ruling is neither of the readings, or changes a mark that stands.', { reason: 'A reason is needed here.' });
 }
@@ -106,7 +107,7 @@ export function ruleAnswer(context: Context, actor: Actor, answerId: string, see
     if (isCovered(head.state, head.readingsDue, hasTyped)) throw conflict('Type what the image says first. The readings are uncovered then.');
     const readings = readingsOfAnswers(db, [answerId]);
     const before = standingRuling(db, answerId);
-    const ruled = ruledBy(context, found, body);
+    const ruled = ruledBy(found, body);
     const isHeld = heldStates.some((state) => state === head.state);
     requireReason(ruled, body, readings, isHeld, before !== undefined);
     const at = clock.now();

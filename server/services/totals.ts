@@ -24,8 +24,8 @@ export function totals(context: Context, actor: Actor, sittingId: string): Total
     items: deskItems(db, sitting.schemeVersion ?? '').map(({ id, number, body }) => ({
       id,
       number,
-      label: itemLabel(body.asked),
-      maxGrains: body.maxGrains,
+      label: itemLabel(body),
+      maxGrains: body.withdrawn === 'drop' ? 0 : body.maxGrains,
     })),
     rows: scriptTotals(db, sittingId).map((row) => {
       const marks = byScript.get(row.script) ?? [];

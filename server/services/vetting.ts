@@ -1,12 +1,12 @@
 import { v7 as uuidv7 } from 'uuid';
 import { inTransaction } from '../../db/client';
-import { draftedItems, findDraftedItem, type DraftedItem } from '../../db/queries/papers';
+import { draftedItems, findDraftedItem, numbersOf, type DraftedItem } from '../../db/queries/papers';
 import { checkOf, hasMade, insertCheck, insertVetting, vettingsOf } from '../../db/queries/vetting';
 import { work } from '../../shared/chemistry/work';
 import type { BodyOf } from '../../shared/contracts/route';
 import type { VettingItem, vetItem as vetContract } from '../../shared/contracts/vetting';
 import { itemLabel } from '../../shared/marking/item-label';
-import { readAnswer } from '../../shared/marking/read-answer';
+import { readTyped } from '../../shared/marking/read-typed';
 import { emptyContext } from '../../shared/marking/scheme';
 import { markAnswer } from '../../shared/marking/verdict';
 import type { Actor } from '../auth/access';
@@ -28,16 +28,17 @@ function viewOf({ db }: Context, actor: Actor, { item, scheme }: DraftedItem): V
   return {
     itemId: item.id,
     number: item.number,
-    label: itemLabel(scheme.asked),
+    label: itemLabel(scheme),
     quantity: scheme.asked.quantity,
     prompt: item.prompt,
     maxGrains: item.maxGrains,
+    kind: scheme.kind,
     units: [...scheme.units],
     cannotVet: made ? 'You made or changed this item. Somebody else has to vet it.' : null,
     mine,
     key: isUncovered ? scheme.key.text : null,
     derivation: isUncovered && worked.ok ? worked.value.derivation : null,
-    decides: isUncovered ? schemeInWords(scheme) : [],
+    decides: isUncovered ? schemeInWords(scheme, numbersOf(db, item.sitting)) : [],
     vettings: vettingsOf(db, item.id, hash).map(({ person, by, ...vetting }) => ({ ...vetting, by: by ?? 'somebody', isOwn: person === actor.personId })),
     rev: item.rev,
   };
@@ -62,7 +63,7 @@ function requireVetted(context: Context, actor: Actor, itemId: string, rev: numb
 export function checkKey(context: Context, actor: Actor, itemId: string, rev: number, text: string): VettingItem {
   const { db, clock } = context;
   const found = requireVetted(context, actor, itemId, rev);
-  const read = readAnswer(text, found.scheme.units);
+  const read = readTyped(text, found.scheme);
   if (!read.ok) {
     const message = read.unfinished ? 'This is not yet a value.' : read.message;
     throw invalidRequest(message, { text: message });

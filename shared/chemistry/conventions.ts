@@ -62,3 +62,10 @@ export const computedConventions: Readonly<Record<ComputedConvention, Convention
     range: 'The outermost electron of atoms and cations with a measured ionisation energy, Z up to 104.',
   },
 };
+
+const slaterConventions: readonly string[] = ['slater', 'slater-035-in-1s', 'slater-d-at-1'] satisfies readonly CountingConvention[];
+
+/** Slater's rules or one of their variants: what energies, radii and electronegativities are worked out from. */
+export const isSlater = (convention: string): convention is CountingConvention => slaterConventions.includes(convention);
+
+export const isComputed = (convention: string): convention is ComputedConvention => Object.hasOwn(computedConventions, convention);

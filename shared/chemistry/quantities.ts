@@ -20,7 +20,8 @@ export interface Followed {
 
 /** n* for n = 1 to 6. Source: J. C. Slater, Phys. Rev. 36, 57 (1930). */
 const effectiveNumbers = ['1', '2', '3', '3.7', '4.0', '4.2'];
-const KJ_PER_MOL = decimal('96.48533');
+/** 1 eV a particle in kJ/mol. Source: CODATA 2018, from memory. */
+export const KJ_PER_MOL = decimal('96.48533');
 const BOHR_PM = decimal('52.9177');
 
 const allredRochowSource = 'A. L. Allred and E. G. Rochow, J. Inorg. Nucl. Chem. 5, 264 (1958).';

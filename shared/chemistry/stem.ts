@@ -1,4 +1,4 @@
-import { computedConventions } from './conventions';
+import { computedConventions, isComputed } from './conventions';
 import { speciesText, withArticle } from './species';
 import type { ChoiceAsked, ChoiceKind } from './choices';
 import type { ElectronAsked } from './target';
@@ -62,5 +62,3 @@ export function proposedChoiceStem({ kind, quantity, convention, options }: Choi
 /** With the convention in front where it is known. */
 const opening = (convention: string, rest: string, alone: string): string =>
   isComputed(convention) ? `${computedConventions[convention].opening}, ${rest}` : alone;
-
-const isComputed = (convention: string): convention is keyof typeof computedConventions => Object.hasOwn(computedConventions, convention);

@@ -1,4 +1,4 @@
-import { computedConventions } from './conventions';
+import { computedConventions, isComputed, isSlater } from './conventions';
 import type { ComputedConvention } from './conventions';
 import type { Derivation } from './derivation';
 import { FIGURES, effectiveCharge } from './effective-charge';
@@ -61,10 +61,6 @@ export function work(asked: AskedInput): Result<Worked> {
   const followed = followedBy(asked, target.value, effective.value, convention);
   return followed.ok ? found(withStep(base, followed.value, units[quantity] ?? '')) : followed;
 }
-
-const slaterConventions: readonly string[] = ['slater', 'slater-035-in-1s', 'slater-d-at-1'] satisfies readonly CountingConvention[];
-const isSlater = (convention: string): convention is CountingConvention => slaterConventions.includes(convention);
-const isComputed = (convention: string): convention is ComputedConvention => Object.hasOwn(computedConventions, convention);
 
 const units: Readonly<Record<string, string>> = { 'energy-ev': 'eV', 'energy-kj-mol': 'kJ/mol', 'radius-pm': 'pm' };
 

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { itemKinds } from './enums';
 import { code, idParams, instant, uuid } from './parts';
 import { defineRoute } from './route';
 
@@ -51,6 +52,8 @@ const sentReading = z.strictObject({
   text: z.string().min(1).max(64).optional(),
   code: code.optional(),
   note: z.string().trim().min(1).max(500).optional(),
+  /** Ids of the method marks struck. */
+  method: z.array(z.string().max(40)).max(6).default([]),
   openedAt: instant,
 });
 export type SentReading = z.infer<typeof sentReading>;
@@ -106,7 +109,10 @@ export const deskItem = z.object({
   /** Species and electron, such as `Cl 3p`. */
   label: z.string(),
   prompt: z.string(),
+  kind: z.enum(itemKinds),
   units: z.array(z.string()),
+  /** Criteria to strike from the working, in words; never what they are worth. */
+  methodMarks: z.array(z.object({ id: z.string(), text: z.string() })),
   /** Read by this reader, and still to be read by this reader. */
   read: z.int(),
   toRead: z.int(),

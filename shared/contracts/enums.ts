@@ -12,6 +12,9 @@ export type TotalRounding = (typeof totalRoundings)[number];
 export const attendances = ['expected', 'present', 'absent', 'withdrawn', 'deferred', 'late'] as const;
 export type Attendance = (typeof attendances)[number];
 
+/** `choice`: one printed number is right; `order`: the printed numbers in their order. */
+export const itemKinds = ['numeric', 'choice', 'order'] as const;
+
 export const boxUses = ['answer', 'working', 'number'] as const;
 export const scriptOrigins = ['printed', 'spare', 'unprinted', 'by-hand'] as const;
 

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { itemKinds } from './enums';
 import { grains, idParams, instant, rev, uuid } from './parts';
 import { defineRoute } from './route';
 
@@ -6,9 +7,10 @@ const leads = { who: 'course', roles: ['lead'] } as const;
 const overseers = { who: 'course', roles: ['lead', 'external'] } as const;
 
 export const bandKinds = ['absolute', 'relative', 'decimal-places', 'significant-figures'] as const;
-export const answerPolicies = ['ask', 'none'] as const;
-export const askedQuantities = ['zeff', 'sigma', 'energy-ev', 'energy-kj-mol', 'radius-pm', 'electronegativity'] as const;
-export const askedConventions = ['slater', 'slater-035-in-1s', 'slater-d-at-1', 'core-count', 'scf', 'ionisation-energy'] as const;
+export const answerPolicies = ['ask', 'none', 'last'] as const;
+export const askedQuantities = ['zeff', 'sigma', 'energy-ev', 'energy-kj-mol', 'radius-pm', 'electronegativity', 'difference', 'value'] as const;
+export const askedConventions = ['slater', 'slater-035-in-1s', 'slater-d-at-1', 'core-count', 'scf', 'ionisation-energy', 'typed'] as const;
+export const printedQuestions = ['greatest', 'least', 'increasing', 'decreasing'] as const;
 
 const bandDraft = z.strictObject({
   name: z.string().trim().min(1, 'Name the band.').max(60),
@@ -35,20 +37,48 @@ export type AlternativeDraft = z.infer<typeof alternativeDraft>;
 /** A slip the scheme names, with its share as typed; 0 names it only. */
 const slipDraft = z.strictObject({ id: z.string().max(60), marks: z.string().max(16) });
 
-/** What the lead decides about an item, as typed. The key is never among it: the server computes it. */
+const electronDraft = z.strictObject({
+  symbol: z.string().max(3),
+  charge: z.int().min(-8).max(117),
+  electron: z.string().max(3),
+  /** A configuration other than the ground state, as typed. */
+  configuration: z.string().trim().max(160).optional(),
+});
+export type ElectronDraft = z.infer<typeof electronDraft>;
+
+/** A key that the lead types, with the value and unit as they would be written. */
+const typedDraft = z.strictObject({ label: z.string().trim().max(60), value: z.string().max(32), unit: z.string().trim().max(12), source: z.string().trim().max(300) });
+
+/** Options as printed, numbered from 1; which are right, the server works out. Part marks are of an order only. */
+const printedDraft = z.strictObject({
+  question: z.enum(printedQuestions),
+  options: z.array(electronDraft).max(9),
+  partMarks: z.array(z.strictObject({ inPlace: z.int().min(1).max(8), marks: z.string().max(16) })).max(8),
+});
+export type PrintedDraft = z.infer<typeof printedDraft>;
+
+/** `from` and `second` are items of the same sitting that come earlier; `second` is of a difference, the electron taken off. */
+const followDraft = z.strictObject({ from: uuid, second: uuid.nullable(), isTrivial: z.boolean() });
+export type FollowDraft = z.infer<typeof followDraft>;
+
+const methodDraft = z.strictObject({ id: z.string().min(1).max(40), text: z.string().trim().max(200), marks: z.string().max(16) });
+export type MethodDraft = z.infer<typeof methodDraft>;
+
+/** What the lead decides about an item, as typed. A key is among it only where the lead types it: all others the server computes. */
 export const itemDraft = z.strictObject({
-  asked: z.strictObject({
-    symbol: z.string().max(3),
-    charge: z.int().min(-8).max(117),
-    electron: z.string().max(3),
+  kind: z.enum(itemKinds).default('numeric'),
+  asked: electronDraft.extend({
     quantity: z.enum(askedQuantities),
     convention: z.enum(askedConventions),
     /** Of an electronegativity: the radius as the question states it, in ångström, and whether the electron counts itself. */
     radiusAngstrom: z.string().trim().max(12).optional(),
     countsItself: z.boolean().optional(),
-    /** A configuration other than the ground state, as typed. */
-    configuration: z.string().trim().max(160).optional(),
+    /** Of a difference: the electron taken off. */
+    other: electronDraft.optional(),
+    typed: typedDraft.optional(),
   }),
+  /** Of a choice or an order. */
+  printed: printedDraft.nullable().default(null),
   /** The decimals that the question asks for, where the key is a short decimal. */
   decimals: z.int().min(0).max(4),
   /** The significant figures that it asks for, where the key is none. */
@@ -60,6 +90,12 @@ export const itemDraft = z.strictObject({
   bands: z.array(bandDraft).max(8),
   alternatives: z.array(alternativeDraft).max(8).default([]),
   slips: z.array(slipDraft).max(60).default([]),
+  followThrough: followDraft.nullable().default(null),
+  /** Yes-or-no criteria that a reader strikes from the working; their marks are part of those of the item. */
+  methodMarks: z.array(methodDraft).max(6).default([]),
+  /** What a missing or wrong unit, or a reversed sign, costs once a paper, as typed; null without a rule. */
+  unitCost: z.string().max(16).nullable().default(null),
+  signCost: z.string().max(16).nullable().default(null),
   crossedOut: z.enum(answerPolicies),
   twoAnswers: z.enum(answerPolicies),
 });
@@ -72,9 +108,16 @@ export type ItemProblem = z.infer<typeof itemProblem>;
 export const workedDraft = z.object({
   label: z.string(),
   key: z.object({ value: z.string(), text: z.string(), decimals: z.int(), figures: z.int().nullable() }).nullable(),
-  /** Of the key, where it has one. */
+  /** Of the key, where it has one; and all that an answer may carry. */
   unit: z.string(),
+  units: z.array(z.string()),
   derivation: z.unknown(),
+  /** Of the second electron of a difference. */
+  otherDerivation: z.unknown(),
+  /** The value of each printed option, where it has one. */
+  options: z.array(z.string().nullable()),
+  /** Earlier items that this one can follow from, in paper order; of a difference, whose electron each is. */
+  sources: z.array(z.object({ id: uuid, number: z.int(), label: z.string(), of: z.enum(['first', 'second']) })),
   scale: z.unknown(),
   /** Accepted roundings as they would be written. */
   roundings: z.array(z.string()),
@@ -86,7 +129,7 @@ export const workedDraft = z.object({
   /** Slips and other conventions' values that a band would pay, nearest first. */
   guard: z.array(z.object({ kind: z.enum(['slip', 'convention']), name: z.string(), text: z.string(), band: z.string(), marks: z.string(), distance: z.string() })),
   /** Slips that an accepted rounding cannot tell from the key. */
-  untold: z.array(z.object({ name: z.string(), text: z.string(), rounded: z.string(), decimals: z.int() })),
+  untold: z.array(z.object({ name: z.string(), text: z.string(), rounded: z.string(), decimals: z.int(), distance: z.string() })),
   /** What other conventions make of the same question, where they differ. */
   others: z.array(z.object({ convention: z.enum(otherConventions), name: z.string(), text: z.string() })),
   /** Subshells that hold an electron of this species. */
@@ -174,7 +217,7 @@ export const workKey = defineRoute({
   path: '/keys',
   summary: 'Work a draft: key, derivation, proposed wording, scale, and what is wrong, field by field. Stores nothing.',
   access: leads,
-  body: z.strictObject({ sittingId: uuid, draft: itemDraft.extend({ prompt: z.string().max(600).nullable(), bands: z.array(bandDraft.extend({ name: z.string().max(60) })).max(8), alternatives: z.array(alternativeDraft.extend({ name: z.string().max(60) })).max(8).default([]) }) }),
+  body: z.strictObject({ sittingId: uuid, /** The item that the draft is of; null for one not made yet, which comes last. */ itemId: uuid.nullable().default(null), draft: itemDraft.extend({ prompt: z.string().max(600).nullable(), bands: z.array(bandDraft.extend({ name: z.string().max(60) })).max(8), alternatives: z.array(alternativeDraft.extend({ name: z.string().max(60) })).max(8).default([]) }) }),
   response: workedDraft,
 });
 
@@ -189,6 +232,10 @@ export const spotTestResult = z.object({
   numbers: z.record(z.string(), z.string()),
   /** For the drawing; null when there is no value. */
   value: z.number().nullable(),
+  /** Whether it would wait for the item it follows from. */
+  waits: z.boolean(),
+  /** What the candidate is told. */
+  told: z.string(),
   refusedAt: z.int().nullable(),
 });
 export type SpotTestResult = z.infer<typeof spotTestResult>;
@@ -199,7 +246,14 @@ export const spotTest = defineRoute({
   summary: 'How a value would be marked, with the rule and its numbers; against the draft sent along, or as stored. Stores nothing.',
   access: leads,
   params: idParams,
-  body: z.strictObject({ text: z.string().min(1).max(64), draft: itemDraft.optional() }),
+  body: z.strictObject({
+    text: z.string().min(1).max(64),
+    draft: itemDraft.optional(),
+    /** What else a mark may rest on: own values of the items followed from as written, and ids of method marks struck. */
+    followed: z.string().max(64).optional(),
+    second: z.string().max(64).optional(),
+    method: z.array(z.string().max(40)).max(6).default([]),
+  }),
   response: spotTestResult,
 });
 

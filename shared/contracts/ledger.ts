@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { answerStates, attendances, exportKinds, ledgerChips, ledgerSorts, rulingKinds } from './enums';
+import { answerStates, attendances, exportKinds, itemKinds, ledgerChips, ledgerSorts, rulingKinds } from './enums';
 import { code, grains, idParams, instant, rev, uuid } from './parts';
 import { defineRoute } from './route';
 
@@ -66,6 +66,8 @@ const shownReading = z.object({
   /** What the scheme in force gives for it; null where it is covered, or where the scheme leaves it to a person. */
   grains: grains.nullable(),
   note: z.string().nullable(),
+  /** Ids of the method marks struck; empty where it is covered. */
+  method: z.array(z.string()),
   recordedAt: instant,
   /** Whether it has the form of the third reading of the person who looks. */
   isAsMine: z.boolean().nullable(),
@@ -79,9 +81,15 @@ export const answerView = z.object({
   itemNumber: z.int(),
   label: z.string(),
   prompt: z.string(),
+  kind: z.enum(itemKinds),
   units: z.array(z.string()),
   maxGrains: grains,
   state: z.enum(answerStates),
+  methodMarks: z.array(z.object({ id: z.string(), text: z.string(), grains })),
+  /** The number of the earlier item that the mark waits for. */
+  waitsFor: z.int().nullable(),
+  /** The own values that it follows from, as settled. */
+  follows: z.array(z.object({ itemNumber: z.int(), canonical: z.string().nullable() })),
   isCovered: z.boolean(),
   /** Why this person cannot type a third reading here, or null. */
   cannotSettle: z.string().nullable(),
@@ -90,7 +98,7 @@ export const answerView = z.object({
   pageImageRev: z.int(),
   pageNo: z.int().nullable(),
   readings: z.array(shownReading),
-  mine: z.object({ id: uuid, text: z.string().nullable(), code: code.nullable(), grains: grains.nullable() }).nullable(),
+  mine: z.object({ id: uuid, text: z.string().nullable(), code: code.nullable(), method: z.array(z.string()), grains: grains.nullable() }).nullable(),
   /** The exact distance between two readings that differ, once uncovered. */
   gap: z.string().nullable(),
   ruling: z
@@ -100,6 +108,7 @@ export const answerView = z.object({
       text: z.string().nullable(),
       code: code.nullable(),
       grains: grains.nullable(),
+      method: z.array(z.string()),
       reason: z.string().nullable(),
       isOwn: z.boolean(),
       at: instant,
@@ -148,6 +157,9 @@ export const getAnswerHistory = defineRoute({
   response: z.object({ acts: z.array(historyAct) }),
 });
 
+/** Ids of the method marks struck. */
+const method = z.array(z.string().max(40)).max(6).default([]);
+
 export const recordThirdReading = defineRoute({
   method: 'put',
   path: '/answers/:id/third-reading/:reading',
@@ -155,15 +167,15 @@ export const recordThirdReading = defineRoute({
   access: leads,
   params: z.object({ id: uuid, reading: uuid }),
   body: z
-    .strictObject({ text: z.string().min(1).max(64).optional(), code: code.optional(), openedAt: instant })
+    .strictObject({ text: z.string().min(1).max(64).optional(), code: code.optional(), method, openedAt: instant })
     .refine((sent) => (sent.text === undefined) !== (sent.code === undefined), { message: 'Send a text or a code, never both.', path: ['text'] }),
   response: answerView,
 });
 
 const why = z.string().trim().min(3).max(500).optional();
 export const rulingBody = z.discriminatedUnion('kind', [
-  z.strictObject({ kind: z.literal('value'), text: z.string().min(1).max(64), reason: why }),
-  z.strictObject({ kind: z.literal('code'), code, reason: why }),
+  z.strictObject({ kind: z.literal('value'), text: z.string().min(1).max(64), method, reason: why }),
+  z.strictObject({ kind: z.literal('code'), code, method, reason: why }),
   z.strictObject({ kind: z.literal('mark'), marks: z.string().min(1).max(16), reason: why }),
 ]);
 export type RulingBody = z.infer<typeof rulingBody>;

@@ -7,13 +7,19 @@ import { defineRoute } from './route';
 const mm = z.number().min(-5000).max(5000);
 const side = z.number().min(50).max(1000);
 
+const place = z.int().min(1).max(200);
+
+/** An item as the editor has it; the items it follows from are named by their place in the file, from 1. */
+const fileItem = itemDraft.extend({ followThrough: z.strictObject({ from: place, second: place.nullable(), isTrivial: z.boolean() }).nullable().default(null) });
+export type FileItem = z.infer<typeof fileItem>;
+
 /** A paper as one file: everything the lead decides, nothing that is computed. Keys are worked anew where it is read. */
 export const paperFile = z.strictObject({
   $schema: z.string().optional(),
   format: z.literal('meniscus-paper'),
   version: z.literal(1),
   title: z.string().max(120),
-  items: z.array(itemDraft).max(200),
+  items: z.array(fileItem).max(200),
   pages: z.array(z.strictObject({ widthMm: side, heightMm: side })).max(40),
   /** `item` is the place in `items`, from 1; null for the box of the candidate number. */
   boxes: z.array(z.strictObject({ item: z.int().min(1).nullable(), pageNo: z.int().min(1).max(40), use: z.enum(boxUses), x: mm, y: mm, w: mm, h: mm })).max(800),

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { vettingOutcomes } from './enums';
+import { itemKinds, vettingOutcomes } from './enums';
 import { grains, idParams, instant, rev, uuid } from './parts';
 import { defineRoute } from './route';
 
@@ -13,6 +13,7 @@ export const vettingItem = z.object({
   prompt: z.string(),
   maxGrains: grains,
   /** What an answer may carry; empty for a pure number. */
+  kind: z.enum(itemKinds),
   units: z.array(z.string()),
   /** Why this person cannot vet it, or null. */
   cannotVet: z.string().nullable(),

@@ -8,7 +8,7 @@ const value = (text: string, units: readonly string[] = []) => {
   const read = readAnswer(text, units);
   return read.ok ? toFractionText(read.value) : null;
 };
-const form = (text: string, units: readonly string[] = []) => canonicalOf({ text }, units);
+const form = (text: string, units: readonly string[] = []) => canonicalOf({ text }, { kind: 'numeric', units });
 const trouble = (text: string, units: readonly string[] = []) => {
   const read = readAnswer(text, units);
   return read.ok || read.unfinished ? null : { at: read.at, length: read.length, message: read.message };

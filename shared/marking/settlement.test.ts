@@ -5,8 +5,8 @@ import type { Code } from './scheme';
 import { settlement, type SettlingReading } from './settlement';
 
 let made = 0;
-const value = (text: string): SettlingReading => ({ id: String((made += 1)), canonical: text, code: null });
-const coded = (code: Code): SettlingReading => ({ id: String((made += 1)), canonical: codeCanonical(code), code });
+const value = (text: string): SettlingReading => ({ id: String((made += 1)), canonical: text, code: null, method: '' });
+const coded = (code: Code): SettlingReading => ({ id: String((made += 1)), canonical: codeCanonical(code), code, method: '' });
 const settle = (readings: readonly SettlingReading[], wanted = 1, decides: readonly Code[] = []) =>
   settlement({ readings, ruling: null, wanted, schemeDecides: (code) => decides.includes(code) });
 

@@ -5,7 +5,13 @@ export interface SettlingReading {
   readonly id: string;
   readonly canonical: string;
   readonly code: Code | null;
+  /** Ids of the method marks struck, in the order of the scheme, with commas. */
+  readonly method: string;
 }
+
+/** Two readings that agree, as titres do: the same form or code, and the same method marks. */
+export const isConcordant = (one: Pick<SettlingReading, 'canonical' | 'method'>, other: Pick<SettlingReading, 'canonical' | 'method'>): boolean =>
+  one.canonical === other.canonical && one.method === other.method;
 
 export interface SettlingRuling {
   readonly id: string;
@@ -54,7 +60,7 @@ const settledBy = (state: SettledState, canonical: string): Settlement => ({ sta
  */
 export function settlement({ readings, ruling, wanted, schemeDecides }: SettlementFacts): Settlement {
   const [first] = readings;
-  const agreed = first !== undefined && readings.every((reading) => reading.canonical === first.canonical);
+  const agreed = first !== undefined && readings.every((reading) => isConcordant(reading, first));
   if (ruling) {
     const standing = ruling.canonical ?? (agreed ? first.canonical : null);
     return { state: 'ruled', due: 0, canonical: standing, from: ruling.canonical === null && standing !== null ? 'reading' : 'ruling', isMarked: true };

@@ -1,4 +1,5 @@
-import { readAnswer, writtenNumber } from './read-answer';
+import { writtenNumber } from './read-answer';
+import { readTyped, type AnswerForm } from './read-typed';
 
 export type Understood =
   | { readonly kind: 'nothing' }
@@ -13,13 +14,14 @@ const decimalsWords = (decimals: number): string => `${smallNumbers[decimals] ??
 
 /**
  * What is said back of a typed text before it is recorded, without a word on its mark.
- * understood('5,75', []) is the value 5.75 with "Two decimals, no unit."; the typed text itself stays as it is.
+ * understood('5,75', plainNumber) is the value 5.75 with "Two decimals, no unit."; the typed text itself stays as it is.
  */
-export function understood(text: string, units: readonly string[]): Understood {
+export function understood(text: string, form: AnswerForm): Understood {
   if (text.trim() === '') return { kind: 'nothing' };
-  const read = readAnswer(text, units);
+  const read = readTyped(text, form);
   if (!read.ok) return read.unfinished ? { kind: 'waiting' } : { kind: 'refused', message: read.message };
   const value = writtenNumber(read);
+  if (form.kind !== 'numeric') return { kind: 'value', value, form: read.figures === 1 ? 'One number.' : `${smallNumbers[read.figures ?? 0] ?? ''} numbers in this order.` };
   const written = read.figures === null ? 'A fraction' : /e/.test(value) ? 'A power of ten' : decimalsWords(read.decimals);
   return { kind: 'value', value, form: `${written}, ${unitWords(read.unit)}.` };
 }

@@ -6,7 +6,7 @@ import { findSitting } from '../../db/queries/sittings';
 import { paperFile } from '../../shared/contracts/paper-file';
 import { itemDraft, type ItemDraft } from '../../shared/contracts/items';
 import { createItem } from '../../server/services/items';
-import { readDraft } from '../../server/services/item-drafts';
+import { readDraft } from '../../server/services/drafts/read-draft';
 import { saveLayout } from '../../server/services/layouts';
 import { paperFileFor, takePaperFile } from '../../server/services/paper-file';
 import { createSitting } from '../../server/services/sittings';

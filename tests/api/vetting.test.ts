@@ -59,7 +59,7 @@ describe('vetting', () => {
     const energy = itemDraft('Cl', '3p', { asked: { symbol: 'Cl', charge: 0, electron: '3p', quantity: 'energy-ev', convention: 'slater' } });
     const other = buildPaper(server, { drafts: [energy], locked: false });
     const [item] = ((await external.get(`/api/sittings/${other.sittingId}/vetting`).expect(200)).body as { items: VettingItem[] }).items;
-    expect(item).toMatchObject({ units: ['eV'], key: null });
+    expect(item).toMatchObject({ units: ['eV', 'kJ/mol', 'J'], key: null });
     // -13.605693 eV x (6.10 / 3)^2 = -56.25 eV (n* = 3; J. C. Slater, Phys. Rev. 36, 57, 1930).
     const { body } = await external.put(`/api/items/${other.items[0]}/vetting-check`).set('If-Match', '1').send({ text: '-56.25 eV' }).expect(200);
     expect(body).toMatchObject({ mine: { text: '-56.25 eV', agrees: true } });

@@ -23,6 +23,7 @@ const size = (server: TestServer) => {
 
 /** Eighty thousand readings: half right, the rest spread over three thousand other values. */
 function readingsFor(server: TestServer, sitting: LargeSitting): ReadingRow[] {
+  const { scheme } = benchScheme();
   return sitting.scripts.flatMap(({ answers }, at) =>
     answers.map((answerId, index): ReadingRow => {
       const n = (at * items + index) % 6000;
@@ -32,7 +33,7 @@ function readingsFor(server: TestServer, sitting: LargeSitting): ReadingRow[] {
         answer: answerId,
         reader: server.people.readerOne,
         purpose: 'live',
-        ...understand({ text }, []),
+        ...understand({ text, method: [] }, scheme),
         note: null,
         knewKey: false,
         lease: null,

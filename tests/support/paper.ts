@@ -11,7 +11,9 @@ import type { TestServer } from './test-server';
 
 /** A sound item: 3 marks, key and one-decimal roundings, no band. */
 export const itemDraft = (symbol = 'Cl', electron = '3p', changes: Partial<ItemDraft> = {}): ItemDraft => ({
+  kind: 'numeric',
   asked: { symbol, charge: 0, electron, quantity: 'zeff', convention: 'slater' },
+  printed: null,
   decimals: 2,
   figures: 4,
   prompt: null,
@@ -20,6 +22,10 @@ export const itemDraft = (symbol = 'Cl', electron = '3p', changes: Partial<ItemD
   bands: [],
   alternatives: [],
   slips: [],
+  followThrough: null,
+  methodMarks: [],
+  unitCost: null,
+  signCost: null,
   crossedOut: 'ask',
   twoAnswers: 'ask',
   ...changes,

@@ -1,6 +1,7 @@
 import type { Ref } from 'react';
 import { useWindowDimensions, View, type TextInput } from 'react-native';
 import type { DeskItem } from '../../contracts/desk';
+import type { AnswerForm } from '../../marking/read-typed';
 import type { Code } from '../../marking/scheme';
 import { understood } from '../../marking/understood';
 import { Button } from '../../ui/button';
@@ -32,9 +33,9 @@ export interface DeskFootProps {
 }
 
 /** What was understood, in one line; a refusal names its place. */
-function Line({ text, units, note }: { text: string; units: readonly string[]; note: string }) {
+function Line({ text, form, note }: { text: string; form: AnswerForm; note: string }) {
   const isWide = useIsWide();
-  const back = understood(text, units);
+  const back = understood(text, form);
   const head = isWide ? 'head' : 'body';
   const noteLine = note === '' ? null : (
     <Text variant="small" tone="manganate" lines={1}>
@@ -120,7 +121,7 @@ export function DeskFoot(props: DeskFootProps) {
   const isEmpty = text === '';
   const putUnit = () => onText(withNextUnit(text, item.units));
   useKeys(item.units.length === 0 ? {} : { ArrowUp: putUnit });
-  const canRecord = understood(text, item.units).kind === 'value';
+  const canRecord = understood(text, item).kind === 'value';
   const aside = item.units.length === 0 ? words.noUnit : words.unit(item.units);
   const field = (
     <Vessel
@@ -143,7 +144,7 @@ export function DeskFoot(props: DeskFootProps) {
     return (
       <View>
         <View style={{ minHeight: 40, justifyContent: 'center', paddingHorizontal: 16, paddingVertical: 6, backgroundColor: colors.paper, borderTopWidth: 1, borderColor: colors.hair }}>
-          <Line text={text} units={item.units} note={note} />
+          <Line text={text} form={item} note={note} />
         </View>
         <Pad
           field={field}
@@ -182,7 +183,7 @@ export function DeskFoot(props: DeskFootProps) {
         ) : (
           <>
             <View style={{ flex: 1, minWidth: 0, paddingTop: 22 }}>
-              <Line text={text} units={item.units} note={note} />
+              <Line text={text} form={item} note={note} />
             </View>
             <Acts canRecord={canRecord} isEmpty={isEmpty} onRecord={onRecord} onCode={onCode} onOther={props.onOther} />
           </>

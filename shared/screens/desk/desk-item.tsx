@@ -91,7 +91,7 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
   const record = () => {
     if (open === 'other') {
       if (code !== null) sayCode(code);
-    } else if (understood(text, item.units).kind === 'value') say({ text });
+    } else if (understood(text, item).kind === 'value') say({ text });
   };
   const zoom = (factor: number) => setPicture((before) => ({ ...before, zoom: Math.min(closest, Math.max(1, before.zoom * factor)) }));
   const whole = () => setPicture((before) => ({ ...before, isWhole: !before.isWhole }));

@@ -50,7 +50,7 @@ export function RulingForm({ answer, isInDialog, onRuled, onSee, onAgain, childr
     setTried(true);
     if (!mine || rule.isPending || (asksReason && reason.trim().length < 3) || (hand && grains === null)) return;
     const why = reason.trim() === '' ? {} : { reason: reason.trim() };
-    const body: RulingBody = hand ? { kind: 'mark', marks: marks.trim(), ...why } : mine.code !== null ? { kind: 'code', code: mine.code, ...why } : { kind: 'value', text: mine.text ?? '', ...why };
+    const body: RulingBody = hand ? { kind: 'mark', marks: marks.trim(), ...why } : mine.code !== null ? { kind: 'code', code: mine.code, method: mine.method, ...why } : { kind: 'value', text: mine.text ?? '', method: mine.method, ...why };
     const what = hand ? marksWords(grains ?? 0) : saidOf(mine);
     rule.mutate(
       { rev: answer.rev, body, once: once.current },

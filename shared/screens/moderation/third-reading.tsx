@@ -32,7 +32,7 @@ export function ThirdReading({ answer, text, onText, isInDialog, onDone }: Third
   const [openedAt] = useState(() => Date.now());
   const [isRare, setRare] = useState(false);
   const field = useRef<TextInput>(null);
-  const back = understood(text, answer.units);
+  const back = understood(text, answer);
   useEffect(() => field.current?.focus(), []);
   const give = (given: { text: string } | { code: Code }) => {
     if (send.isPending) return;

@@ -10,13 +10,21 @@ export function outermostElectron(symbol: string, charge = 0): string {
   return (electrons.ok ? electrons.value.at(-1) : undefined) ?? '1s';
 }
 
+/** A difference needs a second electron, and a typed key its value: after those a new item asks for Z_eff. */
+function plainQuantity(last: ItemDraft | undefined): Pick<ItemDraft['asked'], 'quantity' | 'convention'> {
+  const isPlain = last !== undefined && last.asked.quantity !== 'difference' && last.asked.convention !== 'typed';
+  return isPlain ? { quantity: last.asked.quantity, convention: last.asked.convention } : { quantity: 'zeff', convention: 'slater' };
+}
+
 /** What a new item starts with: the next element after the last item's, its outermost electron, the same quantity and marks. */
 export function newDraft(last: ItemDraft | undefined): ItemDraft {
   const before = last ? elementBySymbol(last.asked.symbol) : null;
   const next = elementByNumber(before?.ok ? before.value.number + 1 : lithium);
   const symbol = next.ok ? next.value.symbol : 'C';
   return {
-    asked: { symbol, charge: 0, electron: outermostElectron(symbol), quantity: last?.asked.quantity ?? 'zeff', convention: last?.asked.convention ?? 'slater' },
+    kind: 'numeric',
+    printed: null,
+    asked: { symbol, charge: 0, electron: outermostElectron(symbol), ...plainQuantity(last) },
     decimals: last?.decimals ?? 2,
     figures: last?.figures ?? 4,
     prompt: null,
@@ -25,6 +33,10 @@ export function newDraft(last: ItemDraft | undefined): ItemDraft {
     bands: [],
     alternatives: [],
     slips: [],
+    followThrough: null,
+    methodMarks: [],
+    unitCost: null,
+    signCost: null,
     crossedOut: last?.crossedOut ?? 'ask',
     twoAnswers: last?.twoAnswers ?? 'ask',
   };

@@ -7,18 +7,18 @@ const asked = (convention: ItemDraft['asked']['convention']): ItemDraft['asked']
 
 it('finds nothing missing in what the server proposes, under any convention', () => {
   for (const convention of ['slater', 'slater-035-in-1s', 'slater-d-at-1', 'core-count', 'scf', 'ionisation-energy'] as const) {
-    expect(stemWarnings(proposedStem(asked(convention), 2), { asked: asked(convention) }), convention).toEqual([]);
+    expect(stemWarnings(proposedStem(asked(convention), 2), { kind: 'numeric', asked: asked(convention) }), convention).toEqual([]);
   }
 });
 
 it('asks for the configuration where it is not the ground state', () => {
   const excited = { ...asked('slater'), symbol: 'Ne', electron: '3s', configuration: '1s2 2s2 2p5 3s1' };
-  expect(stemWarnings(proposedStem(excited, 2), { asked: excited })).toEqual([]);
-  expect(stemWarnings('By Slater’s rules, find Z_eff for a 3s electron of an Ne atom, to two decimals.', { asked: excited })).toEqual(['configuration']);
+  expect(stemWarnings(proposedStem(excited, 2), { kind: 'numeric', asked: excited })).toEqual([]);
+  expect(stemWarnings('By Slater’s rules, find Z_eff for a 3s electron of an Ne atom, to two decimals.', { kind: 'numeric', asked: excited })).toEqual(['configuration']);
 });
 
 it('names what a wording leaves out', () => {
-  expect(stemWarnings('Find Z_eff for a 3p electron of Cl.', { asked: asked('slater') })).toEqual(['figures', 'convention']);
-  expect(stemWarnings('By Slater’s rules, how strongly is it held? Two decimals.', { asked: asked('slater') })).toEqual(['element']);
-  expect(stemWarnings('By Slater’s rules, Cl 3p, to two decimals.', { asked: asked('scf') })).toEqual(['convention']);
+  expect(stemWarnings('Find Z_eff for a 3p electron of Cl.', { kind: 'numeric', asked: asked('slater') })).toEqual(['figures', 'convention']);
+  expect(stemWarnings('By Slater’s rules, how strongly is it held? Two decimals.', { kind: 'numeric', asked: asked('slater') })).toEqual(['element']);
+  expect(stemWarnings('By Slater’s rules, Cl 3p, to two decimals.', { kind: 'numeric', asked: asked('scf') })).toEqual(['convention']);
 });

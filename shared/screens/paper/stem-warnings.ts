@@ -10,6 +10,7 @@ const namesConvention: Readonly<Record<ItemDraft['asked']['convention'], RegExp>
   'core-count': /core|shells? below/i,
   scf: /scf|clementi|self-consistent/i,
   'ionisation-energy': /ioni[sz]ation/i,
+  typed: /./,
 };
 
 const bare = (text: string): string => text.replace(/\s+/g, '');
@@ -18,11 +19,12 @@ const bare = (text: string): string => text.replace(/\s+/g, '');
  * What a wording of one's own leaves out that decides the mark: the figures wanted, the convention, the electron asked for, the configuration where it is not the ground state.
  * "Find Z_eff for a 3p electron of Cl" lacks figures and convention.
  */
-export function stemWarnings(prompt: string, { asked }: Pick<ItemDraft, 'asked'>): StemWarning[] {
+export function stemWarnings(prompt: string, { kind, asked }: Pick<ItemDraft, 'kind' | 'asked'>): StemWarning[] {
   const warnings: StemWarning[] = [];
-  if (!saysFigures.test(prompt)) warnings.push('figures');
+  if (kind === 'numeric' && !saysFigures.test(prompt)) warnings.push('figures');
   if (!namesConvention[asked.convention].test(prompt)) warnings.push('convention');
-  if (!prompt.includes(asked.electron) || !prompt.includes(asked.symbol)) warnings.push('element');
+  if (kind !== 'numeric') return warnings;
+  if (asked.convention !== 'typed' && (!prompt.includes(asked.electron) || !prompt.includes(asked.symbol))) warnings.push('element');
   if (asked.configuration !== undefined && !bare(prompt).includes(bare(asked.configuration))) warnings.push('configuration');
   return warnings;
 }

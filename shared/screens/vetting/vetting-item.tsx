@@ -72,7 +72,7 @@ export function VettingItemPane({ sittingId, item, next, onNext }: VettingItemPr
 function OwnValue({ sittingId, item, onDone }: { sittingId: string; item: VettingItem; onDone: () => void }) {
   const check = useCheckKey(sittingId);
   const [text, setText] = useState('');
-  const back = understood(text, item.units);
+  const back = understood(text, item);
   const go = () => {
     if (back.kind === 'value') check.mutate({ itemId: item.itemId, rev: item.rev, text }, { onSuccess: onDone });
   };
