@@ -36,6 +36,7 @@ export function answerHead(db: Database, answerId: string) {
       candidateNumber: candidate.number,
       state: answer.state,
       readingsDue: answer.readingsDue,
+      settledCanonical: answer.settledCanonical,
       score: answer.score,
       waitsFor: waitsForItem,
       rev: answer.rev,

@@ -99,6 +99,6 @@ export function slipRows(row: Row): Row[] {
   const worked = work(asked);
   if (!worked.ok) return refused(worked.problem.message);
   const slips = slipsOf(asked);
-  if (slips.length === 0) return refused('Slips are worked for zeff and sigma under slater only.');
+  if (slips.length === 0) return refused('Slips are worked under slater only, and not where the electron counts itself.');
   return slips.map(({ id, text, isSilent }) => ({ ...own, electron: asked.electron, slip: id, wrong_value: text, silent: isSilent ? 'yes' : 'no', error: '' }));
 }

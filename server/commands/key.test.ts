@@ -133,7 +133,7 @@ it('lists the slips of a row, silent ones said', () => {
 
 it('says where no slip is worked', () => {
   expect(run(`${head}Cl,0,3p,zeff,scf\nXx,0,3p,,\n`, '--slips').map(({ slip, error }) => [slip, error])).toEqual([
-    ['', 'Slips are worked for zeff and sigma under slater only.'],
+    ['', 'Slips are worked under slater only, and not where the electron counts itself.'],
     ['', 'No element has the symbol “Xx”.'],
   ]);
 });

@@ -22,6 +22,7 @@ import type { Actor } from '../auth/access';
 import type { Context } from '../context';
 import { notFound } from '../errors';
 import { isCovered, shownGiven } from './covers';
+import { likelySlips } from './likely';
 import { requireSitting, type SittingAccess } from './sitting-access';
 import { pictureVersion } from './picture-version';
 import { answerContext, paperPlan, schemeInForce, type PaperPlan, type SchemeInForce } from './paper-plan';
@@ -110,7 +111,7 @@ function followsView(db: Database, { head, scheme, plan }: AnswerAccess): Answer
 export function answerView(context: Context, actor: Actor, answerId: string): AnswerView {
   const { db } = context;
   const found = requireAnswer(context, actor, answerId, ['lead', 'external']);
-  const { head, scheme, access } = found;
+  const { head, scheme, plan, access } = found;
   const readings = readingsOfAnswers(db, [answerId]);
   const mine = mineView(context, actor, found);
   const third = mine ? thirdReadingOf(db, answerId, actor.personId) : undefined;
@@ -155,6 +156,7 @@ export function answerView(context: Context, actor: Actor, answerId: string): An
     gap: covered ? null : gapOf(readings),
     ruling: rulingView(context, actor, answerId),
     score: scoreView(context, head),
+    likely: covered ? [] : likelySlips(db, plan, head, head.settledCanonical ?? third?.canonical ?? null),
     scheme: {
       key: scheme.body.key.text,
       quantity: scheme.body.asked.quantity,

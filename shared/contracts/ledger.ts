@@ -115,6 +115,8 @@ export const answerView = z.object({
     })
     .nullable(),
   score: z.object({ grains, why: reason, schemeOrdinal: z.int() }).nullable(),
+  /** Slips that the value fits, strongest first, with the numbers of the candidate's other items that each explains; empty while it is covered. */
+  likely: z.array(z.object({ letter: z.string(), name: z.string(), feedback: z.string(), alsoOn: z.array(z.int()) })),
   scheme: z.object({
     key: z.string(),
     quantity: z.string(),

@@ -46,7 +46,7 @@ function bandClaim(scheme: CompleteScheme, read: ReadValue, key: Exact, shared: 
 
 /** Every named slip that fits, with the same roundings as the key; one without a share explains a 0. The strongest share counts. */
 function slipClaim(scheme: CompleteScheme, read: ReadValue, shared: Numbers): Claim | null {
-  const fits = scheme.slips.filter((slip) => meets(read, { value: fromFractionText(slip.value), decimals: scheme.key.decimals }, scheme.roundings) !== null);
+  const fits = scheme.slips.filter((slip) => meets(read, { value: fromFractionText(slip.value), decimals: scheme.key.decimals, figures: slip.figures === undefined ? undefined : scheme.key.figures }, scheme.roundings) !== null);
   const [first] = fits;
   if (!first) return null;
   const grains = Math.max(...fits.map((slip) => slip.grains));

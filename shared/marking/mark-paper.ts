@@ -52,9 +52,10 @@ export function markPaper(items: readonly LinkedItem[], answers: ReadonlyMap<str
     const link = completeScheme(item.scheme).followThrough;
     const facts = { followed: settled(link?.from), second: settled(link?.second?.from), isUnitCharged, isSignCharged, struck: answer.struck };
     const verdict = verdictOf(item, canonical, answer.given, contextFor(item.scheme, facts), memo);
-    isUnitCharged ||= isCharged(verdict, 'unitCost');
-    isSignCharged ||= isCharged(verdict, 'signCost');
-    marked.set(item.id, { verdict, waits: isWaiting(item.scheme, verdict, facts) });
+    const waits = isWaiting(item.scheme, verdict, facts);
+    isUnitCharged ||= !waits && isCharged(verdict, 'unitCost');
+    isSignCharged ||= !waits && isCharged(verdict, 'signCost');
+    marked.set(item.id, { verdict, waits });
   }
   return marked;
 }

@@ -113,6 +113,8 @@ export interface NamedSlip {
   readonly name: string;
   readonly value: string;
   readonly text: string;
+  /** The significant figures of a value that is no short decimal; absent for the others. */
+  readonly figures?: number;
   readonly grains: number;
   readonly feedback: string;
 }

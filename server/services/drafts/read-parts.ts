@@ -76,8 +76,8 @@ export function readSlip(reader: PartsReader, draft: ItemDraft['slips'][number],
   const grains = marksAt(reader, `slips.${index}.marks`, draft.marks, true);
   if (!slip) return reader.refuse(`slips.${index}.id`, 'This slip cannot be made on this item.');
   if (slip.isSilent) return reader.refuse(`slips.${index}.id`, `The slip “${slip.name}” gives the right number here: this item cannot see it.`);
-  const { id, name, value, text, feedback } = slip;
-  return grains === null ? null : { id, letter: slipLetter(id), name, value: toFractionText(value), text, grains, feedback };
+  const { id, name, value, text, figures, feedback } = slip;
+  return grains === null ? null : { id, letter: slipLetter(id), name, value: toFractionText(value), text, ...(figures === null ? {} : { figures }), grains, feedback };
 }
 
 export function readMethodMark(reader: PartsReader, { id, text, marks }: ItemDraft['methodMarks'][number], index: number): MethodMark | null {
