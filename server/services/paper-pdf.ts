@@ -1,6 +1,7 @@
 import PDFDocument from 'pdfkit';
 import { draftedItems, numbersOf, paperLockedAt } from '../../db/queries/papers';
 import { findCourse } from '../../db/queries/courses';
+import type { Derivation } from '../../shared/chemistry/derivation';
 import { work } from '../../shared/chemistry/work';
 import { marksText } from '../../shared/marking/grains';
 import type { ItemScheme } from '../../shared/marking/scheme';
@@ -15,15 +16,20 @@ const margin = 51;
 
 const write = (document: Document, fount: Part['fount'], size: number, text: string): Document => paragraph(document, { fount, size, text });
 
+function writeSum(document: Document, { groups, nuclearCharge, sigma, zeff }: Derivation): void {
+  const terms = groups.filter(({ counted, place }) => counted > 0 && place !== 'outer').map(({ counted, coefficient }) => `${counted} × ${coefficient.text}`);
+  if (terms.length > 0) write(document, 'value', 9.5, `${terms.join(' + ')} = ${sigma.text};  ${nuclearCharge} − ${sigma.text} = ${zeff.text}`);
+}
+
 function writeScheme(document: Document, scheme: ItemScheme, numberOf: (itemId: string) => number | null): void {
   const worked = work(scheme.asked);
   write(document, 'value', 12, ['Key', scheme.key.text.replace('-', '−'), ...scheme.units.slice(0, 1)].join(' '));
   if (worked.ok) {
-    const { groups, nuclearCharge, sigma, zeff, steps, selfScreening } = worked.value.derivation;
-    const terms = groups.filter(({ counted, place }) => counted > 0 && place !== 'outer').map(({ counted, coefficient }) => `${counted} × ${coefficient.text}`);
-    if (terms.length > 0) write(document, 'value', 9.5, `${terms.join(' + ')} = ${sigma.text};  ${nuclearCharge} − ${sigma.text} = ${zeff.text}`);
-    for (const step of steps) write(document, 'value', 9.5, step);
-    if (selfScreening) write(document, 'text', 9.5, selfScreening);
+    const { derivation, otherDerivation } = worked.value;
+    writeSum(document, derivation);
+    if (otherDerivation) writeSum(document, otherDerivation);
+    for (const step of derivation.steps) write(document, 'value', 9.5, step);
+    if (derivation.selfScreening) write(document, 'text', 9.5, derivation.selfScreening);
   }
   for (const { name, words } of schemeInWords(scheme, numberOf)) {
     paragraph(document, { fount: 'strong', size: 9.5, text: `${name}: ` }, { fount: 'text', size: 9.5, text: words });
