@@ -27,6 +27,7 @@ const zones = [
   never('server/routes', 'db'),
   never('server/services', 'server/routes', 'server/http'),
   never('server/ingest', 'server/routes', 'server/services', 'db'),
+  never('server/print', 'server/routes', 'server/services', 'server/http', 'db'),
   never('server/storage', 'server/routes', 'server/services', 'db'),
   never('server/jobs', 'server/routes', 'server/services'),
   never('server/auth', 'server/routes', 'server/services'),

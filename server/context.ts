@@ -4,6 +4,7 @@ import type { Config } from './config/config';
 import type { Parts } from './ingest/parts';
 import type { Pictures } from './ingest/pictures';
 import type { Jobs } from './jobs/jobs';
+import type { Printer } from './print/printer';
 import type { Storage } from './storage/storage';
 
 export interface Clock {
@@ -18,6 +19,7 @@ export interface Context {
   readonly storage: Storage;
   readonly jobs: Jobs;
   readonly pictures: Pictures;
+  readonly printer: Printer;
   readonly parts: Parts;
   readonly clock: Clock;
   readonly log: Logger;

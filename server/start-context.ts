@@ -8,7 +8,9 @@ import { systemClock, type Clock, type Context } from './context';
 import { createParts } from './ingest/parts';
 import { createPictures } from './ingest/pictures';
 import { createSqliteJobs } from './jobs/sqlite-jobs';
+import { createPrinter } from './print/printer';
 import { ingestJob, ingestUpload } from './services/ingest';
+import { printJob, printSheets } from './services/printing-job';
 import { createLocalStorage } from './storage/local-storage';
 
 interface Started {
@@ -25,13 +27,16 @@ export function startContext(config: Config, clock: Clock = systemClock): Starte
   const storage = createLocalStorage(join(config.dataDir, 'blobs'));
   const jobs = createSqliteJobs({ db, clock, log, lanes: 2 });
   const pictures = createPictures();
-  const context: Context = { config, db, storage, jobs, pictures, parts: createParts(config.dataDir), clock, log };
+  const printer = createPrinter();
+  const context: Context = { config, db, storage, jobs, pictures, printer, parts: createParts(config.dataDir), clock, log };
   jobs.handle(ingestJob, ({ uploadId }) => ingestUpload(context, String(uploadId)));
+  jobs.handle(printJob, ({ printingId }) => printSheets(context, String(printingId)));
   return {
     context,
     close: async () => {
       await jobs.stop();
       await pictures.close();
+      await printer.close();
       db.$client.close();
     },
   };

@@ -1,5 +1,5 @@
 import { and, asc, eq, isNull, sql } from 'drizzle-orm';
-import type { Attendance } from '../../shared/contracts/enums';
+import type { Attendance, ScriptOrigin } from '../../shared/contracts/enums';
 import { preparedOnce, type Database } from '../client';
 import { answer, candidate, page, script } from '../schema';
 
@@ -71,7 +71,7 @@ const statements = preparedOnce((db) => ({
       number: sql.placeholder('number'),
       layout: sql.placeholder('layout'),
       candidate: sql.placeholder('candidate'),
-      origin: 'unprinted',
+      origin: sql.placeholder('origin'),
     })
     .prepare(),
   page: db
@@ -91,7 +91,7 @@ const statements = preparedOnce((db) => ({
     .prepare(),
 }));
 
-export const insertScript = (db: Database, row: { id: string; sitting: string; number: number; layout: string; candidate: string }): void =>
+export const insertScript = (db: Database, row: { id: string; sitting: string; number: number; layout: string | null; candidate: string | null; origin: ScriptOrigin }): void =>
   void statements(db).script.run(row);
 
 export const insertPage = (db: Database, row: { id: string; script: string; pageNo: number }): void => void statements(db).page.run(row);

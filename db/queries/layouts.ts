@@ -1,4 +1,4 @@
-import { and, asc, eq, gt, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, gt, sql } from 'drizzle-orm';
 import type { Database } from '../client';
 import { box, layout, layoutPage } from '../schema';
 
@@ -8,6 +8,10 @@ export type BoxRow = typeof box.$inferSelect;
 
 export const findLayout = (db: Database, sittingId: string, ordinal: number): LayoutRow | undefined =>
   db.select().from(layout).where(and(eq(layout.sitting, sittingId), eq(layout.ordinal, ordinal))).get();
+
+/** The layout that was made last. */
+export const newestLayout = (db: Database, sittingId: string): LayoutRow | undefined =>
+  db.select().from(layout).where(eq(layout.sitting, sittingId)).orderBy(desc(layout.ordinal)).limit(1).get();
 
 export const insertLayout = (db: Database, row: typeof layout.$inferInsert): void => void db.insert(layout).values(row).run();
 
@@ -36,6 +40,8 @@ export const setPageSample = (db: Database, layoutId: string, pageNo: number, sa
 
 export const boxesOfLayout = (db: Database, layoutId: string): BoxRow[] =>
   db.select().from(box).where(eq(box.layout, layoutId)).orderBy(asc(box.pageNo), asc(box.y), asc(box.x), asc(box.id)).all();
+
+export const insertBox = (db: Database, row: BoxRow): void => void db.insert(box).values(row).run();
 
 export function replaceBoxes(db: Database, layoutId: string, rows: readonly BoxRow[]): void {
   db.delete(box).where(eq(box.layout, layoutId)).run();

@@ -1,4 +1,4 @@
-import { and, asc, count, desc, eq, inArray, isNull, or, sql, type SQL } from 'drizzle-orm';
+import { and, asc, count, desc, eq, inArray, isNotNull, isNull, or, sql, type SQL } from 'drizzle-orm';
 import { heldStates } from '../../shared/contracts/enums';
 import type { LedgerChip, LedgerSort } from '../../shared/contracts/enums';
 import type { Database } from '../client';
@@ -37,7 +37,7 @@ function findFilter(find: string | undefined): SQL | undefined {
 }
 
 const scopeOf = (question: LedgerQuestion): SQL | undefined =>
-  and(eq(answer.sitting, question.sitting), question.item === undefined ? undefined : eq(answer.item, question.item), findFilter(question.find));
+  and(eq(answer.sitting, question.sitting), isNotNull(script.candidate), question.item === undefined ? undefined : eq(answer.item, question.item), findFilter(question.find));
 
 function orderOf({ sort, direction }: LedgerQuestion): SQL[] {
   const turn = direction === 'up' ? asc : desc;

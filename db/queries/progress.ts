@@ -1,4 +1,4 @@
-import { and, count, eq, inArray, isNull, sql } from 'drizzle-orm';
+import { and, count, eq, inArray, isNotNull, isNull, sql } from 'drizzle-orm';
 import { attendances, type Attendance } from '../../shared/contracts/enums';
 import type { Database } from '../client';
 import { answer, box, candidate, item, layout, layoutPage, page, pageImage, reading, readingEnd, script } from '../schema';
@@ -17,7 +17,7 @@ export function candidatesByAttendance(db: Database, sittingId: string): Record<
 export const itemCount = (db: Database, sittingId: string): number =>
   db.select({ n: count() }).from(item).where(eq(item.sitting, sittingId)).get()?.n ?? 0;
 
-/** Items with an answer box, and pages, of the drawn layout. */
+/** Items with an answer box on some layout, and the pages of the longest. */
 export function layoutCounts(db: Database, sittingId: string): { itemsPlaced: number; layoutPages: number } {
   const placed = db
     .select({ n: sql<number>`count(distinct ${box.item})` })
@@ -26,7 +26,7 @@ export function layoutCounts(db: Database, sittingId: string): { itemsPlaced: nu
     .where(and(eq(layout.sitting, sittingId), eq(box.use, 'answer')))
     .get();
   const pages = db
-    .select({ n: count() })
+    .select({ n: sql<number>`coalesce(max(${layoutPage.pageNo}), 0)` })
     .from(layoutPage)
     .innerJoin(layout, eq(layout.id, layoutPage.layout))
     .where(eq(layout.sitting, sittingId))
@@ -36,13 +36,13 @@ export function layoutCounts(db: Database, sittingId: string): { itemsPlaced: nu
 
 const toBeMarked: readonly Attendance[] = ['expected', 'present', 'late'];
 
-/** Places of live scripts: filled, excused, or still due from someone who is to be marked. */
+/** Places of live scripts: filled, excused, or still due from someone who is to be marked. Nothing is due of a spare sheet. */
 export function pageCounts(db: Database, sittingId: string): { due: number; in: number; excused: number; loose: number } {
   const placed = db
     .select({
       in: sql<number>`coalesce(sum(${page.image} is not null), 0)`,
       excused: sql<number>`coalesce(sum(${page.image} is null and ${page.excusedAt} is not null), 0)`,
-      due: sql<number>`coalesce(sum(${page.excusedAt} is null and (${candidate.attendance} is null or ${inArray(candidate.attendance, [...toBeMarked])})), 0)`,
+      due: sql<number>`coalesce(sum(${page.excusedAt} is null and ${inArray(candidate.attendance, [...toBeMarked])}), 0)`,
     })
     .from(page)
     .innerJoin(script, eq(script.id, page.script))
@@ -66,6 +66,7 @@ export const readingsTaken = (db: Database, sittingId: string): number =>
     .where(and(eq(answer.sitting, sittingId), eq(reading.purpose, 'live'), isNull(readingEnd.reading)))
     .get()?.n ?? 0;
 
+/** Answers of candidates; those of a spare sheet count once it is bound to one. */
 export function answerCounts(db: Database, sittingId: string, held: readonly (typeof answer.$inferSelect)['state'][]) {
   return db
     .select({
@@ -76,6 +77,7 @@ export function answerCounts(db: Database, sittingId: string, held: readonly (ty
       due: sql<number>`coalesce(sum(${answer.readingsDue}), 0)`,
     })
     .from(answer)
-    .where(eq(answer.sitting, sittingId))
+    .innerJoin(script, eq(script.id, answer.script))
+    .where(and(eq(answer.sitting, sittingId), isNotNull(script.candidate)))
     .get();
 }

@@ -1,7 +1,8 @@
 import { sql } from 'drizzle-orm';
 import { index, integer, primaryKey, real, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core';
-import { boxUses, scriptOrigins } from '../../shared/contracts/enums';
+import { boxUses, paperSizeNames, printingStates, scriptOrigins } from '../../shared/contracts/enums';
 import { id, instant, rev } from './columns';
+import { person } from './people';
 import { item } from './papers';
 import { candidate, sitting } from './sittings';
 
@@ -79,4 +80,35 @@ export const page = sqliteTable(
     excusedAt: instant(),
   },
   (table) => [uniqueIndex('page_place').on(table.script, table.pageNo)],
+);
+
+/** Answer sheets printed in one file, on a layout of their own. Their scripts are those that point to the layout. */
+export const printing = sqliteTable(
+  'printing',
+  {
+    id: id(),
+    sitting: text().notNull().references(() => sitting.id),
+    layout: text().notNull().references(() => layout.id),
+    paperSize: text({ enum: paperSizeNames }).notNull(),
+    spares: integer().notNull(),
+    state: text({ enum: printingStates }).notNull().default('making'),
+    madeBy: text().notNull().references(() => person.id),
+    madeAt: instant().notNull(),
+    /** Scripts in the file so far, of all of them. */
+    done: integer().notNull().default(0),
+    of: integer().notNull(),
+    blob: text(),
+  },
+  (table) => [index('printing_by_sitting').on(table.sitting), uniqueIndex('printing_of_layout').on(table.layout)],
+);
+
+/** Append-only: whose script is in the file of a printing, as printed. */
+export const printedScript = sqliteTable(
+  'printed_script',
+  {
+    printing: text().notNull().references(() => printing.id),
+    script: text().notNull().references(() => script.id),
+    candidate: text().references(() => candidate.id),
+  },
+  (table) => [primaryKey({ columns: [table.printing, table.script] })],
 );

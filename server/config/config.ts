@@ -10,6 +10,7 @@ const environment = z.object({
   DATA_DIR: z.string().min(1).default('uploads'),
   WEB_DIR: z.string().min(1).default('dist'),
   SESSION_SECRET: z.string().min(32).optional(),
+  SHEET_SECRET: z.string().min(32).optional(),
   SESSION_HOURS: z.coerce.number().positive().max(168).default(12),
   PUBLIC_ORIGIN: z.url().optional(),
   COOKIE_SECURE: z.enum(['true', 'false']).default('false'),
@@ -26,6 +27,8 @@ export interface Config {
   readonly dataDir: string;
   readonly webDir: string;
   readonly sessionSecret: string;
+  /** Keys the check of printed codes: sheets printed under one are not known under another. */
+  readonly sheetSecret: string;
   readonly sessionMs: number;
   readonly publicOrigin: string | null;
   readonly cookieSecure: boolean;
@@ -38,8 +41,8 @@ export interface Config {
 }
 
 /** A secret of this installation, made in the data folder on first start. */
-function installationSecret(dataDir: string): string {
-  const file = join(dataDir, 'session-secret');
+function installationSecret(dataDir: string, name: string): string {
+  const file = join(dataDir, name);
   if (!existsSync(file)) writeFileSync(file, randomBytes(48).toString('base64url'), { mode: 0o600 });
   return readFileSync(file, 'utf8');
 }
@@ -61,7 +64,8 @@ export function readConfig(variables: NodeJS.ProcessEnv = process.env): Config {
     host: env.HOST,
     dataDir,
     webDir: resolve(env.WEB_DIR),
-    sessionSecret: env.SESSION_SECRET ?? installationSecret(dataDir),
+    sessionSecret: env.SESSION_SECRET ?? installationSecret(dataDir, 'session-secret'),
+    sheetSecret: env.SHEET_SECRET ?? installationSecret(dataDir, 'sheet-secret'),
     sessionMs: env.SESSION_HOURS * 3_600_000,
     publicOrigin: env.PUBLIC_ORIGIN ?? null,
     cookieSecure: env.COOKIE_SECURE === 'true',

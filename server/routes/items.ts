@@ -19,5 +19,5 @@ export function itemRoutes(router: Router, context: Context): void {
   route(router, context, orderItems, ({ actor, params, body }) => items.orderItems(context, actor, params.id, body.items));
   route(router, context, workKey, ({ actor, body }) => items.workKey(context, actor, body));
   route(router, context, spotTestContract, ({ actor, params, body }) => spotTest(context, actor, params.id, body));
-  route(router, context, lockContract, ({ actor, params }) => lockPaper(context, actor, params.id));
+  route(router, context, lockContract, ({ actor, params, body }) => lockPaper(context, actor, params.id, body.isForPrinting));
 }

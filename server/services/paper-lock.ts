@@ -22,7 +22,7 @@ export interface LockedPaper {
 }
 
 /** What still keeps a paper from being locked, by item. */
-function lockProblems(db: Database, sittingId: string): Record<string, string> {
+function lockProblems(db: Database, sittingId: string, isForPrinting: boolean): Record<string, string> {
   const items = draftedItems(db, sittingId);
   if (items.length === 0) return { items: 'The paper has no item yet.' };
   const boxes = answerBoxCounts(db, sittingId, 1);
@@ -33,25 +33,25 @@ function lockProblems(db: Database, sittingId: string): Record<string, string> {
     const link = linkProblem({ id: item.id, number: item.number, scheme }, paper);
     if (link) problems[`items.${item.number}`] = `Item ${item.number}: ${link}`;
     else if (wrong) problems[`items.${item.number}`] = `Item ${item.number}: ${wrong.message}`;
-    else if (boxes.get(item.id) !== 1) problems[`items.${item.number}`] = `Item ${item.number} has no answer box on a page.`;
+    else if (!isForPrinting && boxes.get(item.id) !== 1) problems[`items.${item.number}`] = `Item ${item.number} has no answer box on a page.`;
   }
   return problems;
 }
 
 /**
  * Freezes paper and layout: the first scheme version is made of the drafts, and everyone on the class list gets a script with
- * its pages and answers. From here on the scheme changes by amendment only.
+ * its pages and answers. From here on the scheme changes by amendment only. For printed sheets nothing needs to be drawn.
  */
-export function lockPaper(context: Context, actor: Actor, sittingId: string): LockedPaper {
+export function lockPaper(context: Context, actor: Actor, sittingId: string, isForPrinting = false): LockedPaper {
   const { db, clock } = context;
   requireSitting(context, actor, sittingId, ['lead']);
   return inTransaction(db, () => {
     const { sitting } = requireSitting(context, actor, sittingId, ['lead']);
     requireOpenPaper(context, sitting);
-    const problems = lockProblems(db, sittingId);
+    const problems = lockProblems(db, sittingId, isForPrinting);
     const [first] = Object.values(problems);
     if (first !== undefined) throw invalidRequest(first, problems);
-    if (!findLayout(db, sittingId, 1)) throw conflict('The paper has no layout yet.');
+    if (!isForPrinting && !findLayout(db, sittingId, 1)) throw conflict('The paper has no layout yet.');
     const version = uuidv7();
     const lockedAt = clock.now();
     insertSchemeVersion(db, { id: version, sitting: sittingId, ordinal: 1, madeBy: actor.personId, madeAt: lockedAt });

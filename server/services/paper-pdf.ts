@@ -7,7 +7,7 @@ import { marksText } from '../../shared/marking/grains';
 import type { ItemScheme } from '../../shared/marking/scheme';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
-import { fonts, paragraph, type Document, type Part } from './print-paragraph';
+import { fonts, paragraph, type Document, type Part } from '../print/print-paragraph';
 import { schemeInWords } from './scheme-words';
 import { requireSitting } from './sitting-access';
 

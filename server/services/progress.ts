@@ -1,4 +1,5 @@
 import { answerCounts, candidatesByAttendance, itemCount, layoutCounts, pageCounts, readingsTaken } from '../../db/queries/progress';
+import { printedScriptCount } from '../../db/queries/printings';
 import { isPaperLocked } from '../../db/queries/sittings';
 import { heldStates } from '../../shared/contracts/enums';
 import type { ProgressView } from '../../shared/contracts/progress';
@@ -20,6 +21,7 @@ export function progressOf(context: Context, actor: Actor, sittingId: string): P
     isLocked: isPaperLocked(db, sittingId),
     items: itemCount(db, sittingId),
     ...layoutCounts(db, sittingId),
+    sheetsPrinted: printedScriptCount(db, sittingId),
     candidates: candidatesByAttendance(db, sittingId),
     pages: pageCounts(db, sittingId),
     readings: { taken: readingsTaken(db, sittingId), due },

@@ -32,11 +32,12 @@ type LiveReading = ReturnType<typeof liveReadings>[number];
 
 const nobodyToMark = new Set(['absent', 'withdrawn', 'deferred']);
 
-const isNobodyToMark = ({ attendance }: Facts): boolean => attendance !== null && nobodyToMark.has(attendance);
+/** Someone who did not sit, or nobody yet: a spare sheet that is bound to no candidate. */
+const isNobodyToMark = ({ attendance }: Facts): boolean => attendance === null || nobodyToMark.has(attendance);
 
 const isWithdrawn = ({ body: { withdrawn = 'none' } }: SchemeInForce): boolean => withdrawn !== 'none';
 
-/** How many readings the sitting's policy asks of an answer; none without a scan, or for someone who did not sit. */
+/** How many readings the sitting's policy asks of an answer; none without a scan, or where there is nobody to mark. */
 function readingsWanted(facts: Facts): number {
   if (facts.evidence === 'none' || isNobodyToMark(facts)) return 0;
   return facts.secondPolicy === 'all' ? 2 : 1;

@@ -6,6 +6,7 @@ import { layoutRoutes } from './layouts';
 import { ledgerRoutes } from './ledger';
 import { paperFileRoutes } from './paper-file';
 import { progressRoutes } from './progress';
+import { printingRoutes } from './printings';
 import type { RouteContract } from './route';
 import { scanRoutes } from './scans';
 import { serviceRoutes } from './service';
@@ -26,6 +27,7 @@ export const allRoutes: Readonly<Record<string, RouteContract>> = {
   ...itemBankRoutes,
   ...classListRoutes,
   ...layoutRoutes,
+  ...printingRoutes,
   ...scanRoutes,
   ...waitingRoutes,
   ...vettingRoutes,

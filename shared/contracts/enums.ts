@@ -1,3 +1,5 @@
+import type { PaperSize } from '../sheets/geometry';
+
 /** Closed lists of words that the database, the interface and the screens share. */
 
 export const membershipRoles = ['lead', 'reader', 'external'] as const;
@@ -17,6 +19,12 @@ export const itemKinds = ['numeric', 'choice', 'order'] as const;
 
 export const boxUses = ['answer', 'working', 'number'] as const;
 export const scriptOrigins = ['printed', 'spare', 'unprinted', 'by-hand'] as const;
+export type ScriptOrigin = (typeof scriptOrigins)[number];
+
+export const paperSizeNames = ['a4', 'letter'] as const satisfies readonly PaperSize[];
+export const printingStates = ['making', 'made', 'failed'] as const;
+/** Everyone without a page in, or of these only those who have no printed sheet. */
+export const printedFor = ['all', 'without-sheet'] as const;
 
 export const batchStates = ['open', 'done', 'cancelled'] as const;
 /** sending: parts still to come; received: whole and waiting for work; done, refused and duplicate are ends. */
@@ -67,6 +75,7 @@ export const auditActs = [
   'class-list-imported',
   'attendance-changed',
   'layout-changed',
+  'sheets-printed',
   'batch-made',
   'batch-cancelled',
   'file-received',

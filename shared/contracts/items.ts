@@ -263,6 +263,8 @@ export const lockPaper = defineRoute({
   summary: 'Freeze paper and layout: make the first scheme, and scripts, pages and answers for the class list.',
   access: leads,
   params: idParams,
+  /** With printed sheets nothing needs to be drawn: their layout comes with the printing. */
+  body: z.strictObject({ isForPrinting: z.boolean().default(false) }),
   response: z.object({ lockedAt: instant, schemeOrdinal: z.int(), scripts: z.int(), answers: z.int() }),
 });
 

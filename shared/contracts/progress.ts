@@ -15,6 +15,8 @@ export const progressView = z.object({
   /** Items that have their answer box on a page. */
   itemsPlaced: many,
   layoutPages: many,
+  /** Candidates who have a printed sheet. */
+  sheetsPrinted: many,
   candidates: z.record(z.enum(attendances), many),
   /** Pages of candidates who are to be marked. */
   pages: z.object({ due: many, in: many, excused: many, loose: many }),

@@ -70,7 +70,7 @@ const mostWorkingMm = 70;
 /** Descent of a label, the clear paper under it and half the line of the frame. */
 const labelToBoxMm = 0.9 + clearOfTextMm + frameLineMm / 2;
 const stemToLabelMm = 5.2;
-const gapToStemMm = clearOfTextMm + frameLineMm / 2 + stemSizeMm;
+const gapToStemMm = clearOfTextMm + frameLineMm / 2 + stemSizeMm + 1.4;
 const headLabelMm = codeBandMm + 2.6;
 const headBottomMm = headLabelMm + labelToBoxMm + numberBoxHeightMm;
 

@@ -8,6 +8,7 @@ import { allRoutes } from '../../shared/contracts/all-routes';
 import type { GuardRole, RouteContract } from '../../shared/contracts/route';
 import { createBatch } from '../../server/services/batches';
 import { candidatesOf } from '../../server/services/candidates';
+import { printFor } from '../../server/services/printings';
 import { beginUpload } from '../../server/services/uploads';
 import { cast, type CastName } from '../support/cast';
 import { actorOf, buildPaper, itemDraft, layoutFor } from '../support/paper';
@@ -33,8 +34,9 @@ function buildWorld(server: TestServer): World {
   const uploadId = beginUpload(context, actorOf(server, 'readerOne'), batchId, { fileName: 'page.jpg', size: 10 }).id;
   const pageId = uuidv7();
   insertPageImage(context.db, { id: pageId, upload: uploadId, index: 0, sitting: sittingId, state: 'loose' });
+  const printingId = printFor(context, actorOf(server, 'lead'), sittingId, { paperSize: 'a4', spares: 0, for: 'all' }).id;
   return {
-    ids: { courses: courseId, sittings: sittingId, items: items[0] ?? '', answers: answerId, candidates: candidate?.id ?? '', 'desk/leases': leaseId, readings: unknown, rulings: unknown, exports: unknown, batches: batchId, uploads: uploadId, 'page-images': pageId },
+    ids: { courses: courseId, sittings: sittingId, items: items[0] ?? '', answers: answerId, candidates: candidate?.id ?? '', 'desk/leases': leaseId, readings: unknown, rulings: unknown, exports: unknown, batches: batchId, uploads: uploadId, 'page-images': pageId, printings: printingId },
     bodies: {
       signIn: { email: 'nobody@wrenmoor.example', password: 'wrong' },
       makeSitting: { title: 'Another sitting', heldOn: '2026-06-03' },

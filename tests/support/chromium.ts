@@ -1,5 +1,5 @@
-import { spawnSync } from 'node:child_process';
 import { existsSync } from 'node:fs';
+import { installDebian } from './debian';
 
 const places = [process.env.CHROMIUM_PATH, '/usr/bin/chromium', '/usr/bin/chromium-browser'];
 
@@ -9,12 +9,7 @@ export const findChromium = (): string | undefined => places.find((path) => path
 export function ensureChromium(): string {
   const found = findChromium();
   if (found) return found;
-  const canInstall = existsSync('/usr/bin/apt-get') && process.getuid?.() === 0;
-  if (canInstall) {
-    console.log('Chromium is missing: installing the Debian package.');
-    spawnSync('apt-get', ['update'], { stdio: 'inherit' });
-    spawnSync('apt-get', ['install', '-y', '--no-install-recommends', 'chromium'], { stdio: 'inherit', env: { ...process.env, DEBIAN_FRONTEND: 'noninteractive' } });
-  }
+  installDebian(['chromium']);
   const installed = findChromium();
   if (installed) return installed;
   throw new Error('The browser tests need Chromium. Install it (on Debian, as root: apt-get install chromium), or set CHROMIUM_PATH to its program.');

@@ -5,6 +5,7 @@ import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { buildWeb, isWebStale } from '../../server/commands/build-web';
 import { ensureChromium } from './chromium';
+import { ensureSheetReaders } from './debian';
 
 const root = fileURLToPath(new URL('../..', import.meta.url));
 const reports = mkdtempSync(join(tmpdir(), 'meniscus-tests-'));
@@ -32,6 +33,11 @@ function tests(project: string): boolean {
   return ok && report.success && report.numPassedTests > 0;
 }
 
+function apiTests(): boolean {
+  ensureSheetReaders();
+  return tests('api');
+}
+
 async function browserTests(): Promise<boolean> {
   process.env.CHROMIUM_PATH = ensureChromium();
   const webDir = join(root, 'dist');
@@ -49,7 +55,7 @@ async function runAll(): Promise<boolean> {
     step('types: server', 'tsc', ['-p', 'tsconfig.server.json', '--noEmit']),
     step('lint', 'eslint', ['.', '--max-warnings', '0']),
     tests('unit'),
-    tests('api'),
+    apiTests(),
     await browserTests(),
   ];
   return outcomes.every(Boolean);

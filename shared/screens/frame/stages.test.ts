@@ -10,6 +10,7 @@ const locked: ProgressView = {
   items: 2,
   itemsPlaced: 2,
   layoutPages: 1,
+  sheetsPrinted: 0,
   candidates: { expected: 3, present: 0, absent: 0, withdrawn: 0, deferred: 0, late: 0 },
   pages: { due: 3, in: 0, excused: 0, loose: 0 },
   readings: { taken: 0, due: 0 },

@@ -19,6 +19,7 @@ export interface Part {
 }
 
 interface Piece {
+  readonly fount: keyof typeof fonts;
   readonly font: string;
   readonly size: number;
   readonly text: string;
@@ -28,7 +29,7 @@ interface Piece {
 }
 
 /** In sizes of the text: the baseline below the top of a line, the drop of a subscript, the height of a line. */
-const ascent = 0.95;
+export const ascent = 0.95;
 const drop = 0.18;
 const lineHeight = 1.32;
 const scale: Readonly<Record<RunStyle, number>> = { plain: 1, symbol: 1.06, subscript: 0.7 };
@@ -38,11 +39,12 @@ const longestWord = 40;
 
 function piecesOf(document: Document, { fount, size, text }: Part): Piece[] {
   return printRuns(text).flatMap(({ style, text: run }) => {
-    const font = fonts[style === 'symbol' ? 'symbol' : fount];
+    const own = style === 'symbol' ? 'symbol' : fount;
+    const font = fonts[own];
     const set = document.font(font).fontSize(size * scale[style]);
     const baseline = size * (style === 'subscript' ? ascent + drop : ascent);
     const tokens = run.match(new RegExp(`\\n|[^\\S\\n]+|\\S{1,${longestWord}}`, 'g')) ?? [];
-    return tokens.map((token) => ({ font, size: size * scale[style], text: token, baseline, width: token === '\n' ? 0 : set.widthOfString(token) }));
+    return tokens.map((token) => ({ fount: own, font, size: size * scale[style], text: token, baseline, width: token === '\n' ? 0 : set.widthOfString(token) }));
   });
 }
 
@@ -60,30 +62,45 @@ function wordsOf(pieces: readonly Piece[]): Piece[][] {
   return words;
 }
 
-/** Sets a paragraph at the left margin, in lines that break between words only, over as many pages as it needs. */
-export function paragraph(document: Document, ...parts: readonly Part[]): Document {
-  const { left, right, bottom } = document.page.margins;
-  const height = Math.max(...parts.map(({ size }) => size)) * lineHeight;
-  let x = left;
-  let { y } = document;
+/** A piece with its place in a line: `x` from where the line begins. */
+export interface SetPiece extends Piece {
+  readonly x: number;
+}
+
+/** Text in lines no wider than the room, broken between words only. Pieces are placed, not drawn. */
+export function linesOf(document: Document, room: number, parts: readonly Part[]): SetPiece[][] {
+  const lines: SetPiece[][] = [[]];
+  let x = 0;
   const nextLine = (): void => {
-    x = left;
-    y += height;
+    lines.push([]);
+    x = 0;
   };
   for (const word of wordsOf(parts.flatMap((part) => piecesOf(document, part)))) {
     const isBlank = word[0]?.text.trim() === '';
     const width = word.reduce((sum, piece) => sum + piece.width, 0);
-    if (word[0]?.text === '\n' || (!isBlank && x > left && x + width > document.page.width - right)) nextLine();
-    if (word[0]?.text === '\n' || (isBlank && x === left)) continue;
-    if (y + height > document.page.height - bottom) {
-      document.addPage();
-      y = document.page.margins.top;
-    }
+    if (word[0]?.text === '\n' || (!isBlank && x > 0 && x + width > room)) nextLine();
+    if (word[0]?.text === '\n' || (isBlank && x === 0)) continue;
     for (const piece of word) {
-      if (!isBlank) document.font(piece.font).fontSize(piece.size).text(piece.text, x, y, { lineBreak: false, baseline: -piece.baseline });
+      if (!isBlank) lines.at(-1)?.push({ ...piece, x });
       x += piece.width;
     }
   }
+  return lines;
+}
+
+/** Sets a paragraph at the left margin, in lines that break between words only, over as many pages as it needs. */
+export function paragraph(document: Document, ...parts: readonly Part[]): Document {
+  const { left, right, bottom } = document.page.margins;
+  const height = Math.max(...parts.map(({ size }) => size)) * lineHeight;
+  let { y } = document;
+  linesOf(document, document.page.width - left - right, parts).forEach((line, index) => {
+    if (index > 0) y += height;
+    if (line.length > 0 && y + height > document.page.height - bottom) {
+      document.addPage();
+      y = document.page.margins.top;
+    }
+    for (const piece of line) document.font(piece.font).fontSize(piece.size).text(piece.text, left + piece.x, y, { lineBreak: false, baseline: -piece.baseline });
+  });
   document.x = left;
   document.y = y + height;
   return document.font(fonts.text).fontSize(parts[0]?.size ?? 10);
