@@ -67,6 +67,7 @@ export function sheetPreviewFor(context: Context, actor: Actor, sittingId: strin
     away: everyone.filter(({ isAway }) => isAway).length,
     printings: printingsOfSitting(db, sittingId).length,
     problem: planned.ok ? null : planProblem(planned),
+    sample: owner.candidateNumber,
     pages: shown ? shown.sheets.plan.pages.map((page) => pageOf(shown, page)) : [],
   };
 }

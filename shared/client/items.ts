@@ -1,7 +1,7 @@
 import { keepPreviousData, queryOptions, useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import type { getItemBank } from '../contracts/item-bank';
 import type { getItem, ItemDraft, listItems, lockPaper, spotTest, workKey } from '../contracts/items';
-import type { ResponseOf } from '../contracts/route';
+import type { ResponseOf, SentBodyOf } from '../contracts/route';
 import { api, ApiError } from './api';
 import { staleTimes } from './query-client';
 import { progressQueryOptions, sittingQueryOptions } from './sittings';
@@ -115,10 +115,10 @@ export function useOrderItems(sittingId: string) {
 export function useLockPaper(sittingId: string) {
   const client = useQueryClient();
   return useMutation({
-    mutationFn: () => api<ResponseOf<typeof lockPaper>>(`/sittings/${sittingId}/lock`, { method: 'POST' }),
+    mutationFn: (body: SentBodyOf<typeof lockPaper>) => api<ResponseOf<typeof lockPaper>>(`/sittings/${sittingId}/lock`, { method: 'POST', body }),
     onSuccess: () =>
       Promise.all(
-        [itemsQueryOptions(sittingId).queryKey, sittingQueryOptions(sittingId).queryKey, progressQueryOptions(sittingId).queryKey, ['layout', sittingId], ['candidates', sittingId]].map((queryKey) =>
+        [itemsQueryOptions(sittingId).queryKey, sittingQueryOptions(sittingId).queryKey, progressQueryOptions(sittingId).queryKey, ['layout', sittingId], ['candidates', sittingId], ['sheet-preview', sittingId]].map((queryKey) =>
           client.invalidateQueries({ queryKey }),
         ),
       ),

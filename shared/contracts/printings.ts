@@ -57,6 +57,8 @@ export const sheetPreview = z.object({
   printings: z.int(),
   /** Why nothing can be printed, in a sentence; null where it can. */
   problem: z.string().nullable(),
+  /** The candidate number that is shown; null for a spare sheet. */
+  sample: z.string().nullable(),
   pages: z.array(previewPage),
 });
 export type SheetPreview = z.infer<typeof sheetPreview>;

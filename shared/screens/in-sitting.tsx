@@ -20,7 +20,7 @@ interface InSittingProps {
 }
 
 /** On a phone four sections stand at the foot beside the overview, the work before the building. */
-const atFoot: readonly Section[] = ['reading', 'moderation', 'marks', 'scans', 'paper', 'class-list', 'regions'];
+const atFoot: readonly Section[] = ['reading', 'moderation', 'marks', 'scans', 'paper', 'class-list', 'sheets', 'regions'];
 
 const sectionOf = (path: string): Section | null => (path.startsWith('/desk/') ? 'reading' : path.endsWith('/sorting') ? 'scans' : path.endsWith('/vetting') ? 'paper' : (sections.find((section) => path.endsWith(`/${section}`)) ?? null));
 

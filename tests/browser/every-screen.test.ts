@@ -68,7 +68,7 @@ describe('axe finds nothing', () => {
   it.each(variants)('on the screens of a lead, $viewport, $scheme', async ({ viewport, scheme }) => {
     const { page, context } = await openPage(bench, 'lead', viewport, scheme);
     const { open, locked } = world;
-    for (const path of ['', 'settings', `sittings/${locked}`, `sittings/${open}/paper`, `sittings/${open}/vetting`, `sittings/${open}/regions`, `sittings/${locked}/regions`, `sittings/${locked}/class-list`, `sittings/${locked}/scans`, `sittings/${locked}/sorting`, `sittings/${locked}/moderation`, `sittings/${locked}/marks`, 'nowhere']) {
+    for (const path of ['', 'settings', `sittings/${locked}`, `sittings/${open}/paper`, `sittings/${open}/vetting`, `sittings/${open}/regions`, `sittings/${locked}/regions`, `sittings/${locked}/class-list`, `sittings/${locked}/sheets`, `sittings/${open}/sheets`, `sittings/${locked}/scans`, `sittings/${locked}/sorting`, `sittings/${locked}/moderation`, `sittings/${locked}/marks`, 'nowhere']) {
       await page.goto(`${bench.address}/${path}`);
       await settled(page);
       expect(await axeViolations(page), path || 'bench').toEqual([]);

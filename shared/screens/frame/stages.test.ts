@@ -20,18 +20,18 @@ const locked: ProgressView = {
 it('counts a stage as finished only when all of it is, so that the meniscus falls with the work', () => {
   expect(levelOf(undefined)).toBe(0);
   expect(levelOf({ ...locked, isLocked: false })).toBe(0);
-  expect(levelOf(locked)).toBe(3);
+  expect(levelOf(locked)).toBe(4);
   const half = { ...locked, pages: { due: 3, in: 3, excused: 0, loose: 0 }, readings: { taken: 3, due: 3 }, answers: { all: 6, readable: 6, held: 1, scored: 2 } };
-  expect(levelOf(half)).toBe(4.5);
-  expect(levelOf({ ...half, readings: { taken: 6, due: 0 } })).toBeCloseTo(5 + 2 / 6);
-  expect(levelOf({ ...half, readings: { taken: 6, due: 0 }, answers: { all: 6, readable: 6, held: 0, scored: 6 } })).toBe(7);
+  expect(levelOf(half)).toBe(5.5);
+  expect(levelOf({ ...half, readings: { taken: 6, due: 0 } })).toBeCloseTo(6 + 2 / 6);
+  expect(levelOf({ ...half, readings: { taken: 6, due: 0 }, answers: { all: 6, readable: 6, held: 0, scored: 6 } })).toBe(8);
 });
 
 it('leads each role only where it may go', () => {
   const ways = (roles: ('lead' | 'reader' | 'external' | 'officer')[]) => stagesOf({ id: 's', roles }, locked, null).flatMap(({ label, href }) => (href ? [label] : []));
-  expect(ways(['lead'])).toEqual(['Paper', 'Regions', 'Class list', 'Scans', 'Reading', 'Moderation', 'Marks']);
+  expect(ways(['lead'])).toEqual(['Paper', 'Regions', 'Class list', 'Sheets', 'Scans', 'Reading', 'Moderation', 'Marks']);
   expect(ways(['reader'])).toEqual(['Class list', 'Scans', 'Reading']);
-  expect(ways(['external'])).toEqual(['Paper', 'Regions', 'Class list', 'Scans', 'Moderation', 'Marks']);
+  expect(ways(['external'])).toEqual(['Paper', 'Regions', 'Class list', 'Sheets', 'Scans', 'Moderation', 'Marks']);
   expect(ways(['officer'])).toEqual([]);
 });
 

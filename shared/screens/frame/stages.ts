@@ -4,7 +4,7 @@ import type { BuretteStage } from '../../ui/burette';
 import { buretteLevel } from '../../ui/burette-geometry';
 import type { IconName } from '../../ui/icon';
 
-export const sections = ['paper', 'regions', 'class-list', 'scans', 'reading', 'moderation', 'marks'] as const;
+export const sections = ['paper', 'regions', 'class-list', 'sheets', 'scans', 'reading', 'moderation', 'marks'] as const;
 export type Section = (typeof sections)[number];
 type Roles = SittingView['roles'];
 
@@ -42,6 +42,14 @@ const described: Readonly<Record<Section, Described>> = {
     who: ['lead', 'reader', 'external'],
     note: (progress) => `${count(candidatesIn(progress))} candidates`,
     done: (progress) => (candidatesIn(progress) > 0 ? 1 : 0),
+  },
+  sheets: {
+    label: 'Sheets',
+    icon: 'print',
+    who: ['lead', 'external'],
+    note: (progress) => (progress.sheetsPrinted === 0 ? 'none printed' : `${count(progress.sheetsPrinted)} of ${count(candidatesIn(progress))} printed`),
+    // Papers of one's own need no printed sheets: either way it is known where the answers stand.
+    done: ({ itemsPlaced, items }) => (items > 0 && itemsPlaced === items ? 1 : 0),
   },
   scans: {
     label: 'Scans',

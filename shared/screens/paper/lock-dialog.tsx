@@ -23,7 +23,7 @@ export function LockDialog({ sittingId, onClose }: LockDialogProps) {
       testID="lock-dialog"
       actions={
         <>
-          <Button kind="primary" isBusy={lock.isPending} onPress={() => lock.mutate(undefined, { onSuccess: onClose })} testID="confirm-lock">
+          <Button kind="primary" isBusy={lock.isPending} onPress={() => lock.mutate({}, { onSuccess: onClose })} testID="confirm-lock">
             {words.lock.confirm}
           </Button>
           <Button onPress={onClose}>{words.lock.cancel}</Button>
