@@ -28,7 +28,7 @@ export interface SheetOrder {
 const workingLineColour = '#b3bcb9';
 const workingLineWidthMm = 0.18;
 /** What may wait in memory for the disk. */
-const mostWaitingBytes = 1 << 20;
+const mostWaitingBytes = 1 << 18;
 
 function drawFace(document: Document, sheets: Sheets, page: PlannedPage, owner: SheetOwner): void {
   const { words, lines } = pageFace(sheets, page, owner);
@@ -76,17 +76,25 @@ export async function writeSheets(order: SheetOrder, onDone: (done: number) => v
   const document = new PDFDocument({ autoFirstPage: false, bufferPages: false, margin: 0, size: [widthMm * pointsPerMm, heightMm * pointsPerMm], info: { Title: `${order.title}: answer sheets`, Producer: 'Meniscus', Creator: 'Meniscus', CreationDate: at, ModDate: at } });
   const file = createWriteStream(order.path);
   const written = finished(file);
+  // Awaited below; until then a failure waits there instead of ending the process.
+  written.catch(() => undefined);
   document.pipe(file);
-  for (const [index, owner] of order.owners.entries()) {
-    for (const page of sheets.plan.pages) {
-      // Everything below is in millimetres.
-      document.addPage().scale(pointsPerMm);
-      drawFace(document, sheets, page, owner);
-      drawCodes(document, numbers, page.pageNo, owner.script);
+  try {
+    for (const [index, owner] of order.owners.entries()) {
+      for (const page of sheets.plan.pages) {
+        // Everything below is in millimetres.
+        document.addPage().scale(pointsPerMm);
+        drawFace(document, sheets, page, owner);
+        drawCodes(document, numbers, page.pageNo, owner.script);
+      }
+      do await nextTurn();
+      while (!file.destroyed && (file.pending || document.readableLength + file.writableLength > mostWaitingBytes));
+      if (file.destroyed) break;
+      onDone(index + 1);
     }
-    while (document.readableLength + file.writableLength > mostWaitingBytes) await nextTurn();
-    onDone(index + 1);
+    document.end();
+    await written;
+  } finally {
+    file.destroy();
   }
-  document.end();
-  await written;
 }

@@ -32,6 +32,11 @@ export function PaperFiles({ sitting, items, isLead, canChange }: PaperFilesProp
       <ButtonLink isSmall isWide icon="guard" href={`/sittings/${sitting.id}/vetting`} testID="to-vetting">
         {words.vet}
       </ButtonLink>
+      {items > 0 ? (
+        <ButtonLink isSmall isWide icon="page" href={`/sittings/${sitting.id}/sheets`} testID="to-sheets">
+          {w.sheets}
+        </ButtonLink>
+      ) : null}
       <Button isSmall isWide icon="print" onPress={() => open('paper.pdf')} testID="print-paper">
         {w.print}
       </Button>

@@ -6,6 +6,7 @@ const many = (count: number, one: string, more: string): string => `${count.toLo
 export const words = {
   vet: 'Vet the paper',
   files: {
+    sheets: 'Answer sheets',
     print: 'Print view',
     save: 'Save as a file',
     saveQti: 'Save as QTI 3.0',

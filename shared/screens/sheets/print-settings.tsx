@@ -106,7 +106,7 @@ function AmountLines({ sittingId, preview, amount }: { sittingId: string; previe
         {w.head}
       </Text>
       <Text weight={600} isTabular live="polite" testID="sheets-amount" style={{ paddingTop: 6, borderTopWidth: 1, borderColor: colors.hair }}>
-        {[w.candidates(candidates), w.spares(spares), w.pages(pages)].join(', ')}
+        {[candidates > 0 || spares === 0 ? [w.candidates(candidates)] : [], spares > 0 ? [w.spares(spares)] : [], [w.pages(pages)]].flat().join(', ')}
       </Text>
       <Text variant="small" tone="ink2">{`${w.each(pagesEach, preview.items)}. ${w.paper(sheets, preview.paperSize)}.`}</Text>
       {preview.withPagesIn > 0 ? (

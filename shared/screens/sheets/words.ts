@@ -8,7 +8,7 @@ const papers: Readonly<Record<PaperSize, string>> = { a4: 'A4', letter: 'US Lett
 /** The words of the sheets screen. */
 export const words = {
   title: 'Answer sheets',
-  lead: 'One double-sided sheet for each candidate, which the scanner can tell apart.',
+  lead: 'Double-sided sheets for each candidate, which the scanner can tell apart.',
   notAllowed: 'Answer sheets are printed by a lead.',
   papers,
   paperSize: 'Paper',
