@@ -22,13 +22,16 @@ interface PrintSettingsProps {
   readonly onPaperSize: (size: PaperSize) => void;
 }
 
+const isListEmpty = ({ candidates, withPagesIn, away }: SheetPreview): boolean => candidates + withPagesIn + away === 0;
+
 /** What still keeps sheets from being made; null when nothing does, empty where the screen says it elsewhere. */
 function whyNot({ preview, printings }: PrintSettingsProps, { candidates, spares }: Amount, wish: Wish): string | null {
   if (preview.problem !== null) return preview.problem;
   if (!preview.isLocked) return words.open.needed;
   if (sparesOf(wish.spares) === null) return '';
   if (printings.some(({ state }) => state === 'making')) return words.wait;
-  return candidates + spares === 0 ? words.nothing : null;
+  if (candidates + spares > 0) return null;
+  return isListEmpty(preview) ? '' : words.nothing;
 }
 
 /** Paper, for whom, spares, what that comes to, and the button that makes it. */
@@ -119,7 +122,7 @@ function AmountLines({ sittingId, preview, amount }: { sittingId: string; previe
           {w.away(preview.away)}
         </Text>
       ) : null}
-      {preview.candidates + preview.withPagesIn + preview.away === 0 ? (
+      {isListEmpty(preview) ? (
         <View style={{ gap: 8, alignItems: 'flex-start' }}>
           <Text variant="small" tone="iodine">
             {words.nobody}

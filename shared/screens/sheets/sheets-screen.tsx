@@ -83,6 +83,7 @@ function Sheets({ sitting, preview, printings, paperSize, onPaperSize }: SheetsP
       </View>
     );
   }
+  const printed = <PrintingList printings={printings} canDownload={sitting.roles.includes('lead')} />;
   const settings = (
     <ScrollView style={{ flex: 1 }} contentContainerStyle={{ padding: isWide ? 28 : 16, gap: 24 }}>
       <View style={{ gap: 6 }}>
@@ -96,8 +97,9 @@ function Sheets({ sitting, preview, printings, paperSize, onPaperSize }: SheetsP
           {words.preview.show}
         </Button>
       )}
+      {printings.length > 0 ? printed : null}
       {sitting.roles.includes('lead') ? <PrintSettings sittingId={sitting.id} preview={preview} printings={printings} paperSize={paperSize} onPaperSize={onPaperSize} /> : null}
-      <PrintingList printings={printings} canDownload={sitting.roles.includes('lead')} />
+      {printings.length > 0 ? null : printed}
       <Text variant="small" tone="ink2">
         {words.carries}
       </Text>
