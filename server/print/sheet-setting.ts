@@ -12,8 +12,10 @@ export interface PrintedItem {
   readonly marks: string;
 }
 
-/** A document to measure words with; nothing is drawn on it. */
-export const measuringDocument = (): Document => new PDFDocument({ autoFirstPage: false });
+let measuring: Document | undefined;
+
+/** A document to measure words with; nothing is drawn on it. Kept, because reading the fonts takes longer than measuring. */
+export const measuringDocument = (): Document => (measuring ??= new PDFDocument({ autoFirstPage: false }));
 
 export const measureWith =
   (document: Document): Measure =>

@@ -32,7 +32,7 @@ export function rasterise(pdf: string, folder: string): GreyPage[] {
 }
 
 /** What ZBar reads on a page, in ascending order. */
-export const codesOn = ({ path }: GreyPage): string[] => run('zbarimg', ['--nodbus', '--quiet', '--raw', '-S*.disable', '-Sqrcode.enable', path]).trim().split('\n').sort();
+export const codesOn = ({ path }: GreyPage): string[] => run('zbarimg', ['--quiet', '--raw', '-S*.disable', '-Sqrcode.enable', path]).trim().split('\n').sort();
 
 export const textOf = (pdf: string): string => run('pdftotext', ['-layout', pdf, '-']);
 
