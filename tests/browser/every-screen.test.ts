@@ -30,7 +30,7 @@ async function somethingOfEverything(bench: BrowserBench): Promise<{ open: strin
     pair.forEach((text, at) => {
       const reader = at === 0 ? people.readerOne : people.readerTwo;
       const leaseId = inTransaction(context.db, () => giveLease(context, answer?.id ?? '', reader));
-      recordReading(context, { personId: reader, isOfficer: false }, uuidv7(), { answerId: answer?.id ?? '', leaseId, text, openedAt: 1 });
+      recordReading(context, { personId: reader, isOfficer: false }, uuidv7(), { answerId: answer?.id ?? '', leaseId, text, method: [], openedAt: 1 });
     });
   });
   const folder = mkdtempSync(join(tmpdir(), 'meniscus-loose-'));

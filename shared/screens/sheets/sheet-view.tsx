@@ -24,7 +24,7 @@ export function SheetView({ preview }: { preview: SheetPreview }) {
   if (!page) return <Text style={{ padding: 32, maxWidth: 560 }}>{preview.problem}</Text>;
   return (
     <View style={{ flex: 1, minHeight: 0, backgroundColor: colors.mat }}>
-      <ScrollView style={{ flex: 1 }} contentContainerStyle={{ padding: margin, alignItems: 'center' }} onLayout={({ nativeEvent }) => setRoom(nativeEvent.layout.width)}>
+      <ScrollView {...({ tabIndex: 0, role: 'group', 'aria-label': words.preview.of(owner) } as object)} style={{ flex: 1 }} contentContainerStyle={{ padding: margin, alignItems: 'center' }} onLayout={({ nativeEvent }) => setRoom(nativeEvent.layout.width)}>
         {room > 0 ? <SheetPage page={page} widthMm={preview.widthMm} heightMm={preview.heightMm} width={Math.min(room - 2 * margin, widestPx)} label={words.preview.spoken(pageNo, pages, owner)} /> : null}
       </ScrollView>
       <View style={{ flexDirection: 'row', alignItems: 'center', gap: 8, paddingHorizontal: isWide ? 28 : 12, paddingVertical: 6, backgroundColor: colors.paper, borderTopWidth: 1, borderColor: colors.hair }}>
