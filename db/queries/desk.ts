@@ -18,6 +18,9 @@ const readByMe = (db: Database) =>
 const openLease = (db: Database) =>
   db.select({ one: sql`1` }).from(lease).where(and(eq(lease.answer, answer.id), eq(lease.purpose, 'live'), isNull(lease.endedAt)));
 
+/** Answers that are typed from the paper come to nobody's desk. */
+const notByHand = sql`(select ${script.origin} from ${script} where ${script.id} = ${answer.script}) <> 'by-hand'`;
+
 const statements = preparedOnce((db) => ({
   own: db
     .select({ id: lease.id, answer: lease.answer })
@@ -35,6 +38,7 @@ const statements = preparedOnce((db) => ({
         sql`${answer.readingsDue} > 0`,
         notExists(readByMe(db)),
         notExists(openLease(db)),
+        notByHand,
       ),
     )
     .orderBy(asc(answer.shuffle))
@@ -228,7 +232,7 @@ export function readingCounts(db: Database, reader: string, sittingId: string): 
   const toRead = db
     .select({ item: answer.item, n: count() })
     .from(answer)
-    .where(and(eq(answer.sitting, sittingId), sql`${answer.readingsDue} > 0`, notExists(readByMe(db))))
+    .where(and(eq(answer.sitting, sittingId), sql`${answer.readingsDue} > 0`, notExists(readByMe(db)), notByHand))
     .groupBy(answer.item)
     .prepare()
     .all({ reader });

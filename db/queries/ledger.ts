@@ -37,7 +37,7 @@ function findFilter(find: string | undefined): SQL | undefined {
 }
 
 const scopeOf = (question: LedgerQuestion): SQL | undefined =>
-  and(eq(answer.sitting, question.sitting), isNotNull(script.candidate), question.item === undefined ? undefined : eq(answer.item, question.item), findFilter(question.find));
+  and(eq(answer.sitting, question.sitting), isNotNull(script.candidate), isNull(script.voidReason), question.item === undefined ? undefined : eq(answer.item, question.item), findFilter(question.find));
 
 function orderOf({ sort, direction }: LedgerQuestion): SQL[] {
   const turn = direction === 'up' ? asc : desc;

@@ -1,4 +1,4 @@
-import { and, asc, eq, inArray, isNotNull, isNull, sql } from 'drizzle-orm';
+import { and, asc, eq, inArray, isNull, sql } from 'drizzle-orm';
 import type { Attendance } from '../../shared/contracts/enums';
 import type { Database } from '../client';
 import { answer, batch, box, candidate, crop, layoutPage, page, pageImage, reading, readingEnd, ruling, rulingEnd, script, upload } from '../schema';
@@ -90,7 +90,7 @@ export const placesOfSitting = (db: Database, sittingId: string) =>
 
 export const setPlaceImage = (db: Database, pageId: string, image: string | null): void => void db.update(page).set({ image }).where(eq(page.id, pageId)).run();
 
-/** The boxes of one page of a layout, and its size in millimetres. */
+/** The boxes of one page of a layout, that of the candidate's number among them, and its size in millimetres. */
 export function pageLayout(db: Database, layoutId: string, pageNo: number) {
   const size = db
     .select({ widthMm: layoutPage.widthMm, heightMm: layoutPage.heightMm })
@@ -100,7 +100,7 @@ export function pageLayout(db: Database, layoutId: string, pageNo: number) {
   const boxes = db
     .select({ id: box.id, item: box.item, use: box.use, x: box.x, y: box.y, w: box.w, h: box.h })
     .from(box)
-    .where(and(eq(box.layout, layoutId), eq(box.pageNo, pageNo), isNotNull(box.item)))
+    .where(and(eq(box.layout, layoutId), eq(box.pageNo, pageNo)))
     .orderBy(asc(box.id))
     .all();
   return size ? { ...size, boxes } : undefined;

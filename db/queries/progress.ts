@@ -78,6 +78,6 @@ export function answerCounts(db: Database, sittingId: string, held: readonly (ty
     })
     .from(answer)
     .innerJoin(script, eq(script.id, answer.script))
-    .where(and(eq(answer.sitting, sittingId), isNotNull(script.candidate)))
+    .where(and(eq(answer.sitting, sittingId), isNotNull(script.candidate), isNull(script.voidReason)))
     .get();
 }

@@ -33,6 +33,7 @@ const statements = preparedOnce((db) => ({
       waitsFor: answer.waitsFor,
       sortValue: answer.sortValue,
       attendance: candidate.attendance,
+      origin: script.origin,
       secondPolicy: sitting.secondPolicy,
       schemeVersion: sitting.schemeVersion,
     })

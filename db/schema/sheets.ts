@@ -1,9 +1,9 @@
 import { sql } from 'drizzle-orm';
 import { index, integer, primaryKey, real, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core';
-import { boxUses, paperSizeNames, printingStates, scriptOrigins } from '../../shared/contracts/enums';
+import { bindingActs, boxUses, paperSizeNames, printingStates, scriptOrigins } from '../../shared/contracts/enums';
 import { id, instant, rev } from './columns';
-import { person } from './people';
 import { item } from './papers';
+import { person } from './people';
 import { candidate, sitting } from './sittings';
 
 /** Where on the pages the answers stand. A layout that pages arrived for is never changed: a new one gets the next ordinal. */
@@ -65,6 +65,61 @@ export const script = sqliteTable(
     uniqueIndex('script_number').on(table.sitting, table.number),
     uniqueIndex('script_one_live_per_candidate').on(table.candidate).where(sql`"void_reason" is null and "merged_into" is null`),
   ],
+);
+
+/** Append-only: who a script belonged to before and after, and why; a script is bound, swapped, voided for another or made by hand. */
+export const scriptBinding = sqliteTable(
+  'script_binding',
+  {
+    id: id(),
+    script: text().notNull().references(() => script.id),
+    was: text().references(() => candidate.id),
+    candidate: text().references(() => candidate.id),
+    act: text({ enum: bindingActs }).notNull(),
+    reason: text().notNull(),
+    by: text().notNull().references(() => person.id),
+    at: instant().notNull(),
+  },
+  (table) => [index('script_binding_by_script').on(table.script)],
+);
+
+/** The cut-out of the box in which a candidate writes the own number, on page 1. */
+export const numberStrip = sqliteTable('number_strip', {
+  script: text().primaryKey().references(() => script.id),
+  pageImage: text().notNull(),
+  blob: text().notNull(),
+  widthPx: integer().notNull(),
+  heightPx: integer().notNull(),
+});
+
+/** Append-only: what one person read on a strip, without the printed number in sight; null where nothing is written. */
+export const numberReading = sqliteTable(
+  'number_reading',
+  {
+    id: id(),
+    script: text().notNull().references(() => script.id),
+    /** The image it was read from: another image asks again. */
+    pageImage: text().notNull(),
+    reader: text().notNull().references(() => person.id),
+    text: text(),
+    at: instant().notNull(),
+  },
+  (table) => [index('number_reading_by_script').on(table.script)],
+);
+
+/** Append-only: a lead looked at a number that differs and says that the sheet stays with its candidate. */
+export const numberSettled = sqliteTable(
+  'number_settled',
+  {
+    id: id(),
+    script: text().notNull().references(() => script.id),
+    pageImage: text().notNull(),
+    candidate: text().references(() => candidate.id),
+    reason: text().notNull(),
+    by: text().notNull().references(() => person.id),
+    at: instant().notNull(),
+  },
+  (table) => [index('number_settled_by_script').on(table.script)],
 );
 
 /** The place of a page, there before any image: due, in or excused, never guessed. */

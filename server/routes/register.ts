@@ -7,6 +7,7 @@ import { itemRoutes } from './items';
 import { layoutRoutes } from './layouts';
 import { ledgerRoutes } from './ledger';
 import { paperFileRoutes } from './paper-file';
+import { peopleAndPaperRoutes } from './people-and-paper';
 import { printingRoutes } from './printings';
 import { scanRoutes } from './scans';
 import { serviceRoutes } from './service';
@@ -22,6 +23,7 @@ export function registerRoutes(router: Router, context: Context, passport: AppPa
   ledgerRoutes(router, context);
   sittingRoutes(router, context);
   layoutRoutes(router, context);
+  peopleAndPaperRoutes(router, context);
   printingRoutes(router, context);
   itemRoutes(router, context);
   classListRoutes(router, context);

@@ -1,6 +1,7 @@
 import { v7 as uuidv7 } from 'uuid';
 import { insertBlob } from '../../db/queries/blobs';
 import { answersOfScript, pageLayout, saveCrop, setEvidence, setPlaceImage, type PagePlace } from '../../db/queries/page-images';
+import { saveStrip } from '../../db/queries/people-and-paper';
 import type { Context } from '../context';
 import type { PictureResult, PictureTask } from '../ingest/picture-worker';
 import { settleAnswers } from './settle';
@@ -58,6 +59,7 @@ export function fillPlace(context: Pick<Context, 'db' | 'clock'>, place: PagePla
   const readable = new Set<string>();
   for (const { box, blob, widthPx, heightPx } of crops) {
     const region = layout?.boxes.find(({ id }) => id === box);
+    if (region?.use === 'number') saveStrip(db, { script: place.script, pageImage: imageId, blob, widthPx, heightPx });
     const answer = region?.item ? answers.get(region.item) : undefined;
     if (!region || answer === undefined) continue;
     saveCrop(db, { id: uuidv7(), answer, box, pageImage: imageId, blob, widthPx, heightPx });

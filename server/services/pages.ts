@@ -2,6 +2,7 @@ import { inTransaction } from '../../db/client';
 import { mediaTypeOfBlob } from '../../db/queries/blobs';
 import { withdrawLeases, endReading } from '../../db/queries/desk';
 import { actsFromImage, cropOfBox, dropCrops, findPageImage, hasAnswerCrop, loosePages, placeById, placeOf, placesOfSitting, setEvidence, setPlaceImage, updatePageImage, type PageImageRow, type PagePlace } from '../../db/queries/page-images';
+import { dropStrip } from '../../db/queries/people-and-paper';
 import type { LoosePage, PageImageView, PagePlaceView } from '../../shared/contracts/scans';
 import type { GuardRole } from '../../shared/contracts/route';
 import type { Actor } from '../auth/access';
@@ -116,6 +117,7 @@ function emptyPlace(context: Context, image: PageImageRow): void {
   const { db, clock } = context;
   if (image.page === null) return;
   setPlaceImage(db, image.page, null);
+  dropStrip(db, image.id);
   const answers = dropCrops(db, image.id);
   for (const answer of answers) {
     withdrawLeases(db, answer, clock.now());

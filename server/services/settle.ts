@@ -40,7 +40,8 @@ const isWithdrawn = ({ body: { withdrawn = 'none' } }: SchemeInForce): boolean =
 /** How many readings the sitting's policy asks of an answer; none without a scan, or where there is nobody to mark. */
 function readingsWanted(facts: Facts): number {
   if (facts.evidence === 'none' || isNobodyToMark(facts)) return 0;
-  return facts.secondPolicy === 'all' ? 2 : 1;
+  // Without a picture nobody can look again, so two people type a script by hand.
+  return facts.secondPolicy === 'all' || facts.origin === 'by-hand' ? 2 : 1;
 }
 
 const givenOf = (row: { text: string | null; code: LiveReading['code'] }): Given =>

@@ -6,6 +6,7 @@ import { layoutRoutes } from './layouts';
 import { ledgerRoutes } from './ledger';
 import { paperFileRoutes } from './paper-file';
 import { progressRoutes } from './progress';
+import { peopleAndPaperRoutes } from './people-and-paper';
 import { printingRoutes } from './printings';
 import type { RouteContract } from './route';
 import { scanRoutes } from './scans';
@@ -27,6 +28,7 @@ export const allRoutes: Readonly<Record<string, RouteContract>> = {
   ...itemBankRoutes,
   ...classListRoutes,
   ...layoutRoutes,
+  ...peopleAndPaperRoutes,
   ...printingRoutes,
   ...scanRoutes,
   ...waitingRoutes,

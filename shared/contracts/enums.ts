@@ -18,6 +18,7 @@ export type Attendance = (typeof attendances)[number];
 export const itemKinds = ['numeric', 'choice', 'order'] as const;
 
 export const boxUses = ['answer', 'working', 'number'] as const;
+export const bindingActs = ['bound', 'swapped', 'replaced', 'by-hand'] as const;
 export const scriptOrigins = ['printed', 'spare', 'unprinted', 'by-hand'] as const;
 export type ScriptOrigin = (typeof scriptOrigins)[number];
 
@@ -80,6 +81,11 @@ export const auditActs = [
   'batch-cancelled',
   'file-received',
   'file-refused',
+  'script-bound',
+  'scripts-swapped',
+  'script-by-hand',
+  'number-read',
+  'number-settled',
   'page-placed',
   'page-turned',
   'page-discarded',

@@ -3,6 +3,7 @@ import { v7 as uuidv7 } from 'uuid';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { insertLease } from '../../db/queries/desk';
 import { insertPageImage } from '../../db/queries/page-images';
+import { scriptOfCandidate } from '../../db/queries/people-and-paper';
 import { answersOfSitting } from '../../db/queries/settling';
 import { allRoutes } from '../../shared/contracts/all-routes';
 import type { GuardRole, RouteContract } from '../../shared/contracts/route';
@@ -30,13 +31,14 @@ function buildWorld(server: TestServer): World {
   insertLease(context.db, { id: leaseId, answer: answerId, reader: people.readerOne, takenAt: now, expiresAt: now + 60_000 });
   const [candidate] = candidatesOf(context, actorOf(server, 'lead'), sittingId);
   const unknown = uuidv7();
+  const scriptId = scriptOfCandidate(context.db, candidate?.id ?? '')?.id ?? '';
   const batchId = createBatch(context, actorOf(server, 'readerOne'), sittingId, 'A').id;
   const uploadId = beginUpload(context, actorOf(server, 'readerOne'), batchId, { fileName: 'page.jpg', size: 10 }).id;
   const pageId = uuidv7();
   insertPageImage(context.db, { id: pageId, upload: uploadId, index: 0, sitting: sittingId, state: 'loose' });
   const printingId = printFor(context, actorOf(server, 'lead'), sittingId, { paperSize: 'a4', spares: 0, for: 'all' }).id;
   return {
-    ids: { courses: courseId, sittings: sittingId, items: items[0] ?? '', answers: answerId, candidates: candidate?.id ?? '', 'desk/leases': leaseId, readings: unknown, rulings: unknown, exports: unknown, batches: batchId, uploads: uploadId, 'page-images': pageId, printings: printingId },
+    ids: { courses: courseId, sittings: sittingId, items: items[0] ?? '', answers: answerId, candidates: candidate?.id ?? '', 'desk/leases': leaseId, readings: unknown, rulings: unknown, exports: unknown, batches: batchId, uploads: uploadId, 'page-images': pageId, printings: printingId, scripts: scriptId },
     bodies: {
       signIn: { email: 'nobody@wrenmoor.example', password: 'wrong' },
       makeSitting: { title: 'Another sitting', heldOn: '2026-06-03' },
@@ -64,6 +66,12 @@ function buildWorld(server: TestServer): World {
       placePage: { candidateId: candidate?.id ?? '', pageNo: 1 },
       turnPage: { by: 1 },
       loosenPage: { reopen: false },
+      readNumber: { scriptId, text: 'W4071' },
+      bindScript: { candidateId: candidate?.id ?? '', seen: null, reason: 'a spare sheet' },
+      swapScripts: { withScriptId: scriptId, seen: candidate?.id ?? '', seenOther: candidate?.id ?? '', reason: 'exchanged' },
+      settleNumber: { seen: candidate?.id ?? null, reason: 'the same hand' },
+      makeByHand: { reason: 'large print' },
+      typeByHand: { readings: [{ id: unknown, itemId: items[0] ?? '', text: '6.10' }], openedAt: now },
     },
   };
 }
@@ -78,7 +86,7 @@ const addressOf = (contract: RouteContract, ids: World['ids']): string =>
 /** Routes whose thing is one's own, or not made here: to anybody else it is not there, whatever the role. */
 const ownOnly = new Set(['endLease', 'recordReading', 'takeBackReading', 'takeBackRuling', 'getExportFile', 'getCrop', 'changeBatch', 'checkKey', 'vetItem']);
 /** Nothing was uploaded here yet, so those let in find nothing. */
-const notThereYet = new Set(['getSample', 'getPageImageFile', 'placePage', 'turnPage']);
+const notThereYet = new Set(['getSample', 'getPageImageFile', 'placePage', 'turnPage', 'getNumberStrip', 'readNumber', 'getByHand', 'typeByHand']);
 /** Bytes in, so that the guard runs after the transport; tested beside their resource. */
 const takesBytes = (contract: RouteContract) => contract.accepts !== undefined;
 

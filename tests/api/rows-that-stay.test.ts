@@ -24,7 +24,7 @@ describe('rows that stay', () => {
       expect(() => client.exec(`delete from ${table}`), table).toThrow('append-only');
     }
     const guards = client.prepare("select count(*) as n from sqlite_master where type = 'trigger'").get() as { n: number };
-    expect(guards.n).toBe(28);
+    expect(guards.n).toBe(34);
   });
 
   it('chains every entry of the trail to the one before, without a gap', () => {
