@@ -8,14 +8,16 @@ import {
   thirdReadingOf,
 } from '../../db/queries/answers';
 import { readingsOfAnswers, uncoveredBy } from '../../db/queries/ledger';
-import { standingRuling } from '../../db/queries/settling';
+import { answersOfScript, standingRuling } from '../../db/queries/settling';
 import { absolute, exactDecimals, fromFractionText, subtract, toDecimals } from '../../shared/chemistry/exact';
 import { work } from '../../shared/chemistry/work';
 import type { AnswerView } from '../../shared/contracts/ledger';
 import { completeScheme } from '../../shared/marking/complete-scheme';
 import { reasonInWords } from '../../shared/marking/reasons';
+import { isWaiting } from '../../shared/marking/mark-paper';
 import { scaleOf } from '../../shared/marking/scale';
 import { isConcordant } from '../../shared/marking/settlement';
+import { struckIds } from '../../shared/marking/struck';
 import type { GuardRole } from '../../shared/contracts/route';
 import { itemLabel } from '../../shared/marking/item-label';
 import type { Actor } from '../auth/access';
@@ -66,7 +68,7 @@ function rulingView(context: Context, actor: Actor, answerId: string): AnswerVie
   const ruling = standingRuling(context.db, answerId);
   if (!ruling) return null;
   const { id, kind, text, code, grains, method, reason, at } = ruling;
-  return { id, kind, text, code, grains, method: idsOf(method), reason, isOwn: ruling.by === actor.personId, at };
+  return { id, kind, text, code, grains, method: struckIds(method), reason, isOwn: ruling.by === actor.personId, at };
 }
 
 function scoreView(context: Context, head: AnswerHead): AnswerView['score'] {
@@ -76,20 +78,27 @@ function scoreView(context: Context, head: AnswerHead): AnswerView['score'] {
   return { grains: found.grains, why, schemeOrdinal: found.ordinal };
 }
 
-const idsOf = (method: string): string[] => (method === '' ? [] : method.split(','));
+interface Worth {
+  readonly grains: number | null;
+  /** The number of the earlier item that the mark would wait for. */
+  readonly waitsFor: number | null;
+}
 
 /** What a reading of this answer would get, beside the rest of the paper as it stands. */
-function grainsOf(db: Database, { head, scheme, plan }: AnswerAccess, reading: Pick<Reading, 'canonical' | 'text' | 'code' | 'method'>): number | null {
-  const { context } = answerContext(db, plan, head, reading.method);
+function worthOf(db: Database, access: AnswerAccess, reading: Pick<Reading, 'canonical' | 'text' | 'code' | 'method'>): Worth {
+  const { head, scheme, plan } = access;
+  const { context, facts } = answerContext(db, plan, head, reading.method);
   const given = reading.code === null ? { text: reading.text ?? '' } : { code: reading.code };
-  return verdictFor(db, scheme, { canonical: reading.canonical, given, context }).grains;
+  const verdict = verdictFor(db, scheme, { canonical: reading.canonical, given, context });
+  if (!isWaiting(scheme.body, verdict, facts)) return { grains: verdict.grains, waitsFor: null };
+  return { grains: null, waitsFor: followsView(db, access).find(({ canonical }) => canonical === null)?.itemNumber ?? null };
 }
 
 function mineView(context: Context, actor: Actor, access: AnswerAccess): AnswerView['mine'] {
   const { head } = access;
   const third = thirdReadingOf(context.db, head.id, actor.personId);
   if (!third) return null;
-  return { id: third.id, text: third.text, code: third.code, method: idsOf(third.method), grains: grainsOf(context.db, access, third) };
+  return { id: third.id, text: third.text, code: third.code, method: struckIds(third.method), ...worthOf(context.db, access, third) };
 }
 
 /** Why this person may not settle the answer: who read it cannot. */
@@ -103,7 +112,11 @@ function followsView(db: Database, { head, scheme, plan }: AnswerAccess): Answer
   const link = completeScheme(scheme.body).followThrough;
   if (!link) return [];
   const { facts } = answerContext(db, plan, head, '');
-  const numbered = (id: string, canonical: string | null) => ({ itemNumber: (plan.items.get(id)?.at ?? 0) + 1, canonical });
+  const answers = new Map(answersOfScript(db, head.script).map(({ item, id }) => [item, id]));
+  const numbered = (id: string, canonical: string | null) => {
+    const source = plan.items.get(id);
+    return { itemNumber: (source?.at ?? 0) + 1, label: source ? itemLabel(source.body) : '', answerId: answers.get(id) ?? null, canonical };
+  };
   return [numbered(link.from, facts.followed), ...(link.second ? [numbered(link.second.from, facts.second)] : [])];
 }
 
@@ -146,9 +159,9 @@ export function answerView(context: Context, actor: Actor, answerId: string): An
       id: reading.id,
       reader: nameOf(reading.reader),
       given: shownGiven(reading, head.state, covered),
-      grains: covered ? null : grainsOf(db, found, reading),
+      grains: covered ? null : worthOf(db, found, reading).grains,
       note: covered ? null : reading.note,
-      method: covered ? [] : idsOf(reading.method),
+      method: covered ? [] : struckIds(reading.method),
       recordedAt: reading.recordedAt,
       isAsMine: covered || !third ? null : isConcordant(third, reading),
     })),

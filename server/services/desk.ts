@@ -18,6 +18,7 @@ import {
 } from '../../db/queries/desk';
 import type { DeskItem, DeskLease, RecentReading } from '../../shared/contracts/desk';
 import { completeScheme } from '../../shared/marking/complete-scheme';
+import { struckIds } from '../../shared/marking/struck';
 import { itemLabel } from '../../shared/marking/item-label';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
@@ -86,7 +87,7 @@ export function endLease(context: Context, actor: Actor, leaseId: string): void 
 /** The last own readings in a sitting, newest first. */
 export function recentReadingsOf(context: Context, actor: Actor, sittingId: string, itemId: string | undefined): RecentReading[] {
   requireSitting(context, actor, sittingId, readerRoles);
-  return recentReadings(context.db, actor.personId, sittingId, itemId, 20).map((row) => ({ ...row, candidateNumber: row.candidateNumber ?? '' }));
+  return recentReadings(context.db, actor.personId, sittingId, itemId, 20).map((row) => ({ ...row, candidateNumber: row.candidateNumber ?? '', method: struckIds(row.method) }));
 }
 
 /** What there is to read for this reader; nothing that decides a mark. */
@@ -102,6 +103,7 @@ export function deskStanding(context: Context, actor: Actor, sittingId: string) 
     kind: body.kind,
     units: [...body.units],
     methodMarks: completeScheme(body).methodMarks.map(({ id, text }) => ({ id, text })),
+    typesLast: { twoAnswers: body.twoAnswers === 'last', crossedOut: body.crossedOut === 'last' },
     ...(counts.get(id) ?? { read: 0, toRead: 0 }),
   }));
   return {

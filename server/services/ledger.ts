@@ -18,8 +18,16 @@ type Reading = ReturnType<typeof readingsOfAnswers>[number];
 
 const held = new Set<string>(heldStates);
 
+/** Two readings that are uncovered, agree in value and form, and differ in what was struck. */
+const differsInMethodOnly = (readings: readonly Reading[]): boolean => {
+  const [first, ...others] = readings;
+  return first !== undefined && others.length > 0 && others.every(({ canonical }) => canonical === first.canonical) && others.some(({ method }) => method !== first.method);
+};
+
 /** Short words for the Why column. */
-function whyOf(row: Row): string {
+function whyOf(row: Row, readings: readonly Reading[], covered: boolean): string {
+  if (row.state === 'discordant' && !covered && differsInMethodOnly(readings)) return 'only the method marks differ';
+  if (row.state === 'ruled' && row.waitsFor !== null) return `ruled, waits for item ${row.waitsFor}`;
   if (row.state === 'ruled') return row.rule && row.numbers ? `ruled, ${reasonInWords({ grains: row.grains, rule: row.rule, numbers: row.numbers }).head}` : 'a mark ruled by hand';
   if (row.state === 'one-reading' && row.readingsDue > 0) return 'another reading is due';
   if (row.waitsFor !== null) return `waits for item ${row.waitsFor}`;
@@ -28,6 +36,7 @@ function whyOf(row: Row): string {
 
 function rowView(row: Row, readings: readonly Reading[], uncovered: boolean, scheme: { body: ItemScheme; label: string }): LedgerRow {
   const covered = isCovered(row.state, row.readingsDue, uncovered);
+  const isNumeric = scheme.body.kind === 'numeric';
   const { key, lo, hi } = scaleOf(scheme.body);
   return {
     answerId: row.answerId,
@@ -38,10 +47,11 @@ function rowView(row: Row, readings: readonly Reading[], uncovered: boolean, sch
     isCovered: covered,
     readingsDue: row.readingsDue,
     readings: readings.map((reading) => shownGiven(reading, row.state, covered)),
-    value: scheme.body.kind === 'numeric' ? row.sortValue : null,
-    key: key.at,
+    value: isNumeric ? row.sortValue : null,
+    key: isNumeric ? key.at : null,
     span: Math.max(key.at - lo, hi - key.at),
-    why: whyOf(row),
+    why: whyOf(row, readings, covered),
+    waitsFor: row.waitsFor,
     grains: row.grains,
     maxGrains: row.maxGrains,
     isRuled: row.state === 'ruled',

@@ -3,6 +3,7 @@ import { answersOfScript, schemesOfVersion } from '../../db/queries/settling';
 import { completeScheme } from '../../shared/marking/complete-scheme';
 import { contextFor, type PaperFacts } from '../../shared/marking/context';
 import type { ItemScheme, MarkingContext } from '../../shared/marking/scheme';
+import { struckIds } from '../../shared/marking/struck';
 
 export interface SchemeInForce {
   readonly hash: string;
@@ -79,7 +80,7 @@ const nothingElse = { followed: null, second: null, isUnitCharged: false, isSign
 export function answerContext(db: Database, plan: PaperPlan, { script, item }: { readonly script: string; readonly item: string }, method: string): AnswerContext {
   const planned = plan.items.get(item);
   if (!planned) throw new Error(`Item ${item} is not on the paper.`);
-  const struck = method === '' ? [] : method.split(',');
+  const struck = struckIds(method);
   if (plan.isPlain) {
     const facts = { ...nothingElse, struck };
     return { facts, context: contextFor(planned.body, facts), open: [] };

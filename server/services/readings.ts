@@ -7,6 +7,7 @@ import { codeCanonical } from '../../shared/marking/canonical';
 import { grammarVersion } from '../../shared/marking/read-answer';
 import { readTyped } from '../../shared/marking/read-typed';
 import type { Code, ItemScheme } from '../../shared/marking/scheme';
+import { struckIds } from '../../shared/marking/struck';
 import { isConcordant } from '../../shared/marking/settlement';
 import { requireCourseRole, type Actor, type CourseAccess } from '../auth/access';
 import type { Context } from '../context';
@@ -59,7 +60,8 @@ function isRepeat(context: Context, actor: Actor, id: string, sent: SentReading)
   const known = findReading(context.db, id);
   if (!known) return false;
   if (known.reader !== actor.personId) throw notFound();
-  const same = known.answer === sent.answerId && known.text === (sent.text ?? null) && known.code === (sent.code ?? null) && known.method.split(',').filter((id) => id !== '').sort().join() === [...sent.method].sort().join();
+  const isSameMethod = struckIds(known.method).sort().join() === [...new Set(sent.method)].sort().join();
+  const same = known.answer === sent.answerId && known.text === (sent.text ?? null) && known.code === (sent.code ?? null) && isSameMethod;
   if (!same) throw conflict('Another reading was stored under this id. Yours was not stored.', { text: known.text, code: known.code });
   return true;
 }

@@ -68,8 +68,8 @@ function deviceStore(personId: string): ReadingStore {
   };
 }
 
-const sendReading = async ({ id, answerId, leaseId, text, code, note, openedAt }: KeptReading): Promise<void> => {
-  await api(`/readings/${id}`, { method: 'PUT', body: { answerId, leaseId, openedAt, ...(text === undefined ? {} : { text }), ...(code === undefined ? {} : { code }), ...(note === undefined ? {} : { note }) } });
+const sendReading = async ({ id, answerId, leaseId, text, code, note, method = [], openedAt }: KeptReading): Promise<void> => {
+  await api(`/readings/${id}`, { method: 'PUT', body: { answerId, leaseId, method, openedAt, ...(text === undefined ? {} : { text }), ...(code === undefined ? {} : { code }), ...(note === undefined ? {} : { note }) } });
 };
 
 /** Until the pause is over or the connection returns, whichever is first. */

@@ -64,7 +64,7 @@ function keepAnswer(client: QueryClient, answer: AnswerView): void {
 export function useThirdReading(answerId: string) {
   const client = useQueryClient();
   return useMutation({
-    mutationFn: ({ id, ...body }: { id: string; text?: string; code?: string; openedAt: number }) => api<AnswerView>(`/answers/${answerId}/third-reading/${id}`, { method: 'PUT', body }),
+    mutationFn: ({ id, ...body }: { id: string; text?: string; code?: string; method: readonly string[]; openedAt: number }) => api<AnswerView>(`/answers/${answerId}/third-reading/${id}`, { method: 'PUT', body }),
     onSuccess: (answer) => keepAnswer(client, answer),
   });
 }

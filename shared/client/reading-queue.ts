@@ -12,6 +12,8 @@ export interface KeptReading {
   readonly text?: string;
   readonly code?: Code;
   readonly note?: string;
+  /** Ids of the method marks struck; readings kept before there were any name none. */
+  readonly method?: readonly string[];
   readonly openedAt: number;
   readonly keptAt: number;
   /** What the server said when it would not take it. */

@@ -87,6 +87,8 @@ export const recentReading = z.object({
   candidateNumber: z.string(),
   text: z.string().nullable(),
   code: code.nullable(),
+  /** Ids of the method marks struck. */
+  method: z.array(z.string()),
   note: z.string().nullable(),
   recordedAt: instant,
 });
@@ -113,6 +115,8 @@ export const deskItem = z.object({
   units: z.array(z.string()),
   /** Criteria to strike from the working, in words; never what they are worth. */
   methodMarks: z.array(z.object({ id: z.string(), text: z.string() })),
+  /** Where the last answer written counts, it is typed: of two left standing, of one crossed out with nothing in its place. */
+  typesLast: z.object({ twoAnswers: z.boolean(), crossedOut: z.boolean() }),
   /** Read by this reader, and still to be read by this reader. */
   read: z.int(),
   toRead: z.int(),

@@ -20,12 +20,14 @@ export const ledgerRow = z.object({
   isCovered: z.boolean(),
   readingsDue: z.int(),
   readings: z.array(shownGiven),
-  /** The value that stands and the key, for the hairline scale; null where there is none to show. */
+  /** The value that stands and the key, for the hairline scale; null where there is none to show. Printed numbers have no scale. */
   value: z.number().nullable(),
-  key: z.number(),
+  key: z.number().nullable(),
   /** Half the width of the hairline scale of this item. */
   span: z.number(),
   why: z.string(),
+  /** The number of the earlier item that the mark waits for. */
+  waitsFor: z.int().nullable(),
   grains: grains.nullable(),
   maxGrains: grains,
   isRuled: z.boolean(),
@@ -63,7 +65,7 @@ const shownReading = z.object({
   /** A pseudonym, steady within the sitting: `reader 2`. */
   reader: z.string(),
   given: shownGiven,
-  /** What the scheme in force gives for it; null where it is covered, or where the scheme leaves it to a person. */
+  /** What the scheme in force gives for it; null where it is covered, waits for an earlier item, or where the scheme leaves it to a person. */
   grains: grains.nullable(),
   note: z.string().nullable(),
   /** Ids of the method marks struck; empty where it is covered. */
@@ -89,7 +91,7 @@ export const answerView = z.object({
   /** The number of the earlier item that the mark waits for. */
   waitsFor: z.int().nullable(),
   /** The own values that it follows from, as settled. */
-  follows: z.array(z.object({ itemNumber: z.int(), canonical: z.string().nullable() })),
+  follows: z.array(z.object({ itemNumber: z.int(), label: z.string(), answerId: uuid.nullable(), canonical: z.string().nullable() })),
   isCovered: z.boolean(),
   /** Why this person cannot type a third reading here, or null. */
   cannotSettle: z.string().nullable(),
@@ -98,7 +100,7 @@ export const answerView = z.object({
   pageImageRev: z.int(),
   pageNo: z.int().nullable(),
   readings: z.array(shownReading),
-  mine: z.object({ id: uuid, text: z.string().nullable(), code: code.nullable(), method: z.array(z.string()), grains: grains.nullable() }).nullable(),
+  mine: z.object({ id: uuid, text: z.string().nullable(), code: code.nullable(), method: z.array(z.string()), grains: grains.nullable(), waitsFor: z.int().nullable() }).nullable(),
   /** The exact distance between two readings that differ, once uncovered. */
   gap: z.string().nullable(),
   ruling: z
@@ -121,7 +123,7 @@ export const answerView = z.object({
     key: z.string(),
     quantity: z.string(),
     convention: z.string(),
-    /** Data for the scale and the worked key, as the item editor draws them. */
+    /** Data for the scale and the worked key, as the item editor draws them; null where there is none. */
     scale: z.unknown(),
     derivation: z.unknown(),
   }),

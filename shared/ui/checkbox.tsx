@@ -4,7 +4,7 @@ import Svg, { Path } from 'react-native-svg';
 import { Pressable } from './pressable';
 import { Text } from './text';
 import { useColors } from './theme';
-import { radius, size } from './tokens';
+import { radius, size, type TypeStyle } from './tokens';
 import { useIsWide } from './use-breakpoint';
 
 interface CheckboxProps {
@@ -16,11 +16,15 @@ interface CheckboxProps {
   readonly label?: string | undefined;
   readonly isLabelHidden?: boolean | undefined;
   readonly isClosed?: boolean | undefined;
+  /** The box under the thumb, at the other end of the line. */
+  readonly isBoxLast?: boolean | undefined;
+  readonly variant?: TypeStyle | undefined;
+  readonly lines?: number | undefined;
   readonly testID?: string | undefined;
 }
 
 /** A thing that holds or not; the whole line can be pressed. */
-export function Checkbox({ children, isChecked, onChange, help, label, isLabelHidden = false, isClosed = false, testID }: CheckboxProps) {
+export function Checkbox({ children, isChecked, onChange, help, label, isLabelHidden = false, isClosed = false, isBoxLast = false, variant = 'body', lines, testID }: CheckboxProps) {
   const colors = useColors();
   const isWide = useIsWide();
   const below = useId();
@@ -39,7 +43,7 @@ export function Checkbox({ children, isChecked, onChange, help, label, isLabelHi
           onChange(!isChecked);
         }}
         testID={testID}
-        style={() => ({ minHeight: isWide ? size.touchWide : size.touch, minWidth: isWide ? size.touchWide : size.touch, flexDirection: 'row', alignItems: 'center', gap: 10, borderRadius: radius.keycap })}
+        style={() => ({ minHeight: isWide ? size.touchWide : size.touch, minWidth: isWide ? size.touchWide : size.touch, flexDirection: isBoxLast ? 'row-reverse' : 'row', alignItems: 'center', gap: 10, borderRadius: radius.keycap })}
       >
         <View
           aria-hidden
@@ -62,7 +66,7 @@ export function Checkbox({ children, isChecked, onChange, help, label, isLabelHi
           ) : null}
         </View>
         {isLabelHidden ? null : (
-          <Text tone={isClosed ? 'ink3' : 'ink'} style={{ flexShrink: 1 }}>
+          <Text variant={variant} lines={lines} tone={isClosed ? 'ink3' : 'ink'} style={isBoxLast ? { flex: 1 } : { flexShrink: 1 }}>
             {children}
           </Text>
         )}

@@ -8,6 +8,8 @@ export interface MarkStandProps extends Omit<TubeProps, 'height'> {
   readonly gotText: string;
   readonly ofText: string;
   readonly scale?: 'row' | 'desk' | 'total' | undefined;
+  /** Why no mark stands yet, of a held tube. */
+  readonly heldWord?: 'held' | 'waits' | undefined;
   /** Spoken after the mark, such as `slip a`. */
   readonly spokenAfter?: string | undefined;
 }
@@ -16,15 +18,15 @@ const heights = { row: size.tubeS, desk: size.tubeM, total: size.tubeL } as cons
 const variants = { row: 'body', desk: 'title', total: 'total' } as const;
 const asides = { row: 'small', desk: 'body', total: 'title' } as const;
 
-function spoken({ state, gotText, ofText, stopper, spokenAfter }: MarkStandProps): string {
-  const mark = state === 'held' ? 'held' : state === 'unread' ? 'not read' : `${gotText} of ${ofText} marks`;
+function spoken({ state, gotText, ofText, stopper, spokenAfter, heldWord = 'held' }: MarkStandProps): string {
+  const mark = state === 'held' ? heldWord : state === 'unread' ? 'not read' : `${gotText} of ${ofText} marks`;
   const parts = [mark, state === 'ruled' ? 'ruled' : '', stopper === 'in' ? 'released' : stopper === 'out' ? 'disputed' : '', spokenAfter ?? ''];
   return parts.filter((part) => part !== '').join(', ');
 }
 
 /** A tube with its numeral: the only way a mark may stand. */
 export function MarkStand(props: MarkStandProps) {
-  const { gotText, ofText, scale = 'row', spokenAfter: _spoken, ...tube } = props;
+  const { gotText, ofText, scale = 'row', spokenAfter: _spoken, heldWord = 'held', ...tube } = props;
   const isMark = tube.state === 'given' || tube.state === 'ruled';
   return (
     <View role="img" aria-label={spoken(props)} style={{ flexDirection: 'row', alignItems: 'center', gap: scale === 'row' ? 7 : 12 }}>
@@ -36,7 +38,7 @@ export function MarkStand(props: MarkStandProps) {
         </Text>
       ) : (
         <Text variant={tube.state === 'held' ? 'small' : 'body'} weight={600} tone={tube.state === 'held' ? 'iodine' : 'ink2'}>
-          {tube.state === 'held' ? 'held' : '–'}
+          {tube.state === 'held' ? heldWord : '–'}
         </Text>
       )}
     </View>

@@ -30,22 +30,27 @@ interface PadProps {
   readonly onEmpty: () => void;
   /** Two above and one below the key of signs; the last is the one that goes on. */
   readonly actions: readonly [PadAction, PadAction, PadAction];
-  /** Behind one key: comma, slash, plus, e, ×10 and the unit. */
+  /** Behind one key: comma, slash, plus, e, ×10 and the unit; with none there is no such key. */
   readonly signs: readonly PadSign[];
+  /** Digits and a space, and nothing else. */
+  readonly isWhole?: boolean | undefined;
   readonly side?: 'right' | 'left' | undefined;
 }
 
-const digits = [['1', '2', '3'], ['4', '5', '6'], ['7', '8', '9'], ['.', '0', '−']] as const;
+const digits = [['1', '2', '3'], ['4', '5', '6'], ['7', '8', '9']] as const;
+const lastRow = ['.', '0', '−'] as const;
+const space: PadSign = { label: 'space', text: ' ' };
 const spokenOf: Readonly<Record<string, string>> = { '.': 'point', '−': 'minus' };
 const gap = 7;
 
 /** The keypad of a phone: four rows of digits, the action keys under the thumb at the right or left. */
-export function Pad({ field, onType, onDelete, onEmpty, actions, signs, side = 'right' }: PadProps) {
+export function Pad({ field, onType, onDelete, onEmpty, actions, signs, isWhole = false, side = 'right' }: PadProps) {
   const colors = useColors();
   const [areSignsOpen, setSignsOpen] = useState(false);
   const [first, second, last] = actions;
   const direction = side === 'right' ? 'row' : 'row-reverse';
-  const rows: readonly (readonly PadSign[])[] = areSignsOpen ? inThrees(signs) : digits.map((row) => row.map((label) => ({ label, spoken: spokenOf[label] })));
+  const signed = (row: readonly string[]): PadSign[] => row.map((label) => ({ label, spoken: spokenOf[label] }));
+  const rows: readonly (readonly PadSign[])[] = areSignsOpen ? inThrees(signs) : [...digits.map(signed), isWhole ? [space, ...signed(['0'])] : signed(lastRow)];
   const type = (sign: PadSign) => {
     onType(sign.text ?? sign.label);
     setSignsOpen(false);
@@ -66,7 +71,7 @@ export function Pad({ field, onType, onDelete, onEmpty, actions, signs, side = '
           {rows.map((row, index) => (
             <View key={index} style={{ flexDirection: 'row', gap, height: size.padKey }}>
               {row.map((sign) => (
-                <PadKey key={sign.label} label={sign.spoken ?? sign.label} onPress={() => type(sign)} text={sign.label} isSmall={areSignsOpen && sign.label.length > 2} />
+                <PadKey key={sign.label} label={sign.spoken ?? sign.label} onPress={() => type(sign)} text={sign.label} isSmall={sign.label.length > 2} />
               ))}
               {Array.from({ length: 3 - row.length }, (_, empty) => (
                 <View key={empty} style={{ flex: 1 }} />
@@ -78,10 +83,12 @@ export function Pad({ field, onType, onDelete, onEmpty, actions, signs, side = '
           {[first, second].map(({ label, onPress, isClosed, testID }) => (
             <PadKey key={label} label={label} onPress={onPress} kind="function" words={label} isClosed={isClosed} testID={testID} />
           ))}
-          <PadKey label={areSignsOpen ? 'Digits 0–9' : 'Other signs, ,/+e'} onPress={() => setSignsOpen(!areSignsOpen)} kind="function" isExpanded={areSignsOpen} words={areSignsOpen ? '0–9' : ',/+e'} isMeasured>
-            <Icon name={areSignsOpen ? 'down' : 'up'} size={16} />
-          </PadKey>
-          <PadKey label={last.label} onPress={last.onPress} kind={last.isPrimary === false ? 'function' : 'primary'} words={last.label} isClosed={last.isClosed} testID={last.testID} />
+          {signs.length === 0 ? null : (
+            <PadKey label={areSignsOpen ? 'Digits 0–9' : 'Other signs, ,/+e'} onPress={() => setSignsOpen(!areSignsOpen)} kind="function" isExpanded={areSignsOpen} words={areSignsOpen ? '0–9' : ',/+e'} isMeasured>
+              <Icon name={areSignsOpen ? 'down' : 'up'} size={16} />
+            </PadKey>
+          )}
+          <PadKey label={last.label} onPress={last.onPress} kind={last.isPrimary === false ? 'function' : 'primary'} words={last.label} isClosed={last.isClosed} height={signs.length === 0 ? size.padKey * 2 + gap : size.padKey} testID={last.testID} />
         </View>
       </View>
     </View>

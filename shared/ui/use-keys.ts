@@ -10,6 +10,8 @@ interface KeyOptions {
   readonly isOff?: boolean;
   /** The commands belong to the dialog that is open; otherwise an open dialog silences them. */
   readonly isInDialog?: boolean;
+  /** The next key is a command whatever the field of commands holds: the second of two that belong together. */
+  readonly isOverTyped?: boolean;
 }
 
 function placeOf(target: EventTarget | null): KeyPlace {
@@ -31,7 +33,7 @@ function isForControl(target: EventTarget | null, command: string): boolean {
  * Keys that act on the whole screen: a map from the key's name (`B`, `Shift+Z`, `Enter`, `PageUp`, `/`, `?`) to what it does.
  * A field marked with `takesCommands` gives up its letters while it is empty; every other field keeps them.
  */
-export function useKeys(map: KeyMap, { letters: asked, isOff = false, isInDialog = false }: KeyOptions = {}): void {
+export function useKeys(map: KeyMap, { letters: asked, isOff = false, isInDialog = false, isOverTyped = false }: KeyOptions = {}): void {
   const [preferred] = usePreference('letters');
   const letters = asked ?? preferred;
   const latest = useRef(map);
@@ -43,7 +45,8 @@ export function useKeys(map: KeyMap, { letters: asked, isOff = false, isInDialog
     const hear = (event: KeyboardEvent) => {
       const isUnderDialog = document.querySelector('dialog[open]') !== null;
       if (event.defaultPrevented || isUnderDialog !== isInDialog || document.querySelector(':popover-open')) return;
-      const command = commandOf(event, placeOf(event.target), letters);
+      const place = placeOf(event.target);
+      const command = commandOf(event, isOverTyped && place.kind === 'commands' ? { ...place, isEmpty: true } : place, letters);
       if (command === null || isForControl(event.target, command)) return;
       const act = latest.current[command];
       if (!act) return;
@@ -54,5 +57,5 @@ export function useKeys(map: KeyMap, { letters: asked, isOff = false, isInDialog
     // NOTE text fields of React Native for the web keep their key presses to themselves, so the window listens on the way down.
     window.addEventListener('keydown', hear, true);
     return () => window.removeEventListener('keydown', hear, true);
-  }, [letters, isOff, isInDialog]);
+  }, [letters, isOff, isInDialog, isOverTyped]);
 }

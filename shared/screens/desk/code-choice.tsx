@@ -19,14 +19,17 @@ interface CodeChoiceProps {
   readonly onChoose: (code: Code) => void;
   readonly onRecord: () => void;
   readonly onCancel: () => void;
+  /** What this item wants of such an answer instead of a code; empty where it wants nothing else. */
+  readonly hint: string;
 }
 
 /** On wide, in place of the words under the scan: one of four, by its number or a press, then recorded. */
-export function CodeChoice({ chosen, onChoose, onRecord, onCancel }: CodeChoiceProps) {
+export function CodeChoice({ chosen, onChoose, onRecord, onCancel, hint }: CodeChoiceProps) {
   const colors = useColors();
   return (
     <View style={{ gap: 8 }} testID="code-choice">
       <Text weight={600}>{words.otherTitle}</Text>
+      <CodeHint>{hint}</CodeHint>
       <View role="radiogroup" aria-label={words.otherTitle} style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 8 }}>
         {rareCodes.map((code, index) => (
           <Pressable
@@ -55,21 +58,32 @@ export function CodeChoice({ chosen, onChoose, onRecord, onCancel }: CodeChoiceP
   );
 }
 
+function CodeHint({ children }: { children: string }) {
+  if (children === '') return null;
+  return (
+    <Text variant="small" tone="ink2" testID="code-hint">
+      {children}
+    </Text>
+  );
+}
+
 interface CodeSheetProps {
   readonly onCode: (code: Code) => void;
   readonly onNote: () => void;
   readonly onTakeBack: (() => void) | null;
   readonly takeBackLabel: string;
   readonly onClose: () => void;
+  readonly hint: string;
 }
 
 const onSheet: readonly Code[] = ['cannot-read', ...rareCodes, 'ask-the-lead'];
 
 /** On a phone, over the pad: the six codes beside blank; a press records. Note and taking back are here too. */
-export function CodeSheet({ onCode, onNote, onTakeBack, takeBackLabel, onClose }: CodeSheetProps) {
+export function CodeSheet({ onCode, onNote, onTakeBack, takeBackLabel, onClose, hint }: CodeSheetProps) {
   return (
     <SheetOver title={words.other} onClose={onClose} testID="code-sheet">
       <View style={{ gap: 8 }}>
+        <CodeHint>{hint}</CodeHint>
         {onSheet.map((code) => (
           <Button key={code} isWide onPress={() => onCode(code)} testID={`code-${code}`}>
             {capital(codeWords[code])}

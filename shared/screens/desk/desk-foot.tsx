@@ -13,6 +13,8 @@ import { usePreference } from '../../ui/preferences';
 import { useIsWide } from '../../ui/use-breakpoint';
 import { useKeys } from '../../ui/use-keys';
 import { Vessel } from '../../ui/vessel';
+import { MethodTicks } from '../method-ticks';
+import type { MethodDraft } from '../use-method-marks';
 import { CodeChoice } from './code-choice';
 import { withNextUnit } from './unit-key';
 import { words } from './words';
@@ -23,6 +25,7 @@ export interface DeskFootProps {
   readonly onText: (text: string) => void;
   readonly fieldRef: Ref<TextInput>;
   readonly note: string;
+  readonly method: MethodDraft;
   readonly isChoosingCode: boolean;
   readonly chosenCode: Code | null;
   readonly onChooseCode: (code: Code) => void;
@@ -31,6 +34,13 @@ export interface DeskFootProps {
   readonly onRecord: () => void;
   readonly onCode: (code: Code) => void;
 }
+
+/** What is to be typed for an item of this kind. */
+const toType = {
+  numeric: [words.typeIt, words.typeItHelp],
+  choice: [words.typeChoice, words.typeChoiceHelp],
+  order: [words.typeOrder, words.typeOrderHelp],
+} as const;
 
 /** What was understood, in one line; a refusal names its place. */
 function Line({ text, form, note }: { text: string; form: AnswerForm; note: string }) {
@@ -52,7 +62,7 @@ function Line({ text, form, note }: { text: string; form: AnswerForm; note: stri
       </View>
     );
   }
-  const [lead, tail] = back.kind === 'value' ? [words.understood, back.form] : back.kind === 'waiting' ? [words.goOn, ''] : [words.typeIt, words.typeItHelp];
+  const [lead, tail] = back.kind === 'value' ? [words.understood, back.form] : back.kind === 'waiting' ? [words.goOn, ''] : toType[form.kind];
   const value =
     back.kind === 'value' ? (
       <Text variant={isWide ? 'readingM' : 'reading'} weight={500}>
@@ -113,7 +123,7 @@ function Acts({ canRecord, isEmpty, onRecord, onCode, onOther }: ActsProps) {
 
 /** The lower half of the desk: field, what was understood, and the acts; on a phone the pad. */
 export function DeskFoot(props: DeskFootProps) {
-  const { item, text, onText, fieldRef, note, onRecord, onCode } = props;
+  const { item, text, onText, fieldRef, note, method, onRecord, onCode } = props;
   const colors = useColors();
   const isWide = useIsWide();
   const isRoomy = useWindowDimensions().width >= roomy;
@@ -122,7 +132,8 @@ export function DeskFoot(props: DeskFootProps) {
   const putUnit = () => onText(withNextUnit(text, item.units));
   useKeys(item.units.length === 0 ? {} : { ArrowUp: putUnit });
   const canRecord = understood(text, item).kind === 'value';
-  const aside = item.units.length === 0 ? words.noUnit : words.unit(item.units);
+  const isPrinted = item.kind !== 'numeric';
+  const aside = isPrinted ? words.printedAside : item.units.length === 0 ? words.noUnit : words.unit(item.units);
   const field = (
     <Vessel
       label={words.reading}
@@ -140,12 +151,17 @@ export function DeskFoot(props: DeskFootProps) {
     />
   );
   if (!isWide) {
-    const signs: PadSign[] = [{ label: ',' }, { label: '/' }, { label: '+' }, { label: 'e' }, { label: '×10', text: 'x10^' }, ...item.units.map((unit): PadSign => ({ label: unit, text: ` ${unit}` }))];
+    const signs: PadSign[] = isPrinted ? [] : [{ label: ',' }, { label: '/' }, { label: '+' }, { label: 'e' }, { label: '×10', text: 'x10^' }, ...item.units.map((unit): PadSign => ({ label: unit, text: ` ${unit}` }))];
     return (
       <View>
         <View style={{ minHeight: 40, justifyContent: 'center', paddingHorizontal: 16, paddingVertical: 6, backgroundColor: colors.paper, borderTopWidth: 1, borderColor: colors.hair }}>
           <Line text={text} form={item} note={note} />
         </View>
+        {item.methodMarks.length === 0 ? null : (
+          <View style={{ paddingHorizontal: 16, paddingBottom: 4, backgroundColor: colors.paper }}>
+            <MethodTicks marks={item.methodMarks} draft={method} layout="pad" side={side} />
+          </View>
+        )}
         <Pad
           field={field}
           side={side}
@@ -153,6 +169,7 @@ export function DeskFoot(props: DeskFootProps) {
           onDelete={() => onText(text.slice(0, -1))}
           onEmpty={() => onText('')}
           signs={signs}
+          isWhole={isPrinted}
           actions={[
             { label: words.blank, onPress: () => onCode('blank'), isClosed: !isEmpty, testID: 'code-blank' },
             { label: words.other, onPress: props.onOther, isClosed: !isEmpty, testID: 'other' },
@@ -178,7 +195,7 @@ export function DeskFoot(props: DeskFootProps) {
         {props.isChoosingCode ? (
           // In place of the acts: Enter is said once.
           <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: isRoomy ? actsWidth.roomy + 28 : actsWidth.narrow + 20, minWidth: 0, paddingTop: 22 }}>
-            <CodeChoice chosen={props.chosenCode} onChoose={props.onChooseCode} onRecord={onRecord} onCancel={props.onCancelOther} />
+            <CodeChoice chosen={props.chosenCode} onChoose={props.onChooseCode} onRecord={onRecord} onCancel={props.onCancelOther} hint={words.typesLast(item.typesLast)} />
           </View>
         ) : (
           <>
@@ -189,9 +206,15 @@ export function DeskFoot(props: DeskFootProps) {
           </>
         )}
       </View>
+      {item.methodMarks.length === 0 ? null : (
+        <View style={{ paddingHorizontal: isRoomy ? 40 : 24, paddingBottom: 10, backgroundColor: colors.paper }}>
+          <MethodTicks marks={item.methodMarks} draft={method} layout="line" />
+        </View>
+      )}
       <KeyStrip
         hints={[
           { keys: ['0–9'], does: 'types' },
+          ...(item.methodMarks.length === 0 ? [] : [{ keys: ['↓'], does: 'strikes a method mark' }]),
           { keys: ['U'], does: 'takes the last one back' },
           { keys: ['N'], does: 'note' },
         ]}

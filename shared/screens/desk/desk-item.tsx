@@ -9,7 +9,9 @@ import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
 import { useIsWide } from '../../ui/use-breakpoint';
 import { useKeys } from '../../ui/use-keys';
+import { struckWords } from '../method-words';
 import { PageOnMat } from '../page-on-mat';
+import { useMethodMarks } from '../use-method-marks';
 import { CodeSheet, rareCodes } from './code-choice';
 import { DeskFoot } from './desk-foot';
 import { DeskHead } from './desk-head';
@@ -50,6 +52,7 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
   const [picture, setPicture] = useState(view);
   const [open, setOpen] = useState<Open>(null);
   const [code, setCode] = useState<Code | null>(null);
+  const method = useMethodMarks(item.methodMarks);
   const field = useRef<TextInput>(null);
   const isRecording = useRef(false);
   const { shown } = work;
@@ -65,25 +68,35 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
     field.current?.focus();
   }, [answerId]);
 
+  const clear = () => {
+    setText('');
+    method.reset([]);
+  };
   const say = (said: Said) => {
     if (!canType || isRecording.current) return;
     isRecording.current = true;
+    const { struck } = method;
     // The field is free at once: what is typed from here on belongs to the next answer.
-    setText('');
+    clear();
     setNote('');
-    void work.record(note === '' ? said : { ...said, note }).then((isKept) => {
+    void work.record({ ...said, ...(note === '' ? {} : { note }), ...(item.methodMarks.length === 0 ? {} : { method: struck }) }).then((isKept) => {
       isRecording.current = false;
       field.current?.focus();
       if (isKept) return;
       setText(said.text ?? '');
       setNote(note);
+      method.reset(struck);
     });
   };
   const look = (step: 1 | -1) => {
-    setText('');
+    clear();
     work.look(step);
   };
-  const takeBack = () => void work.takeBackLast().then((isBack) => isBack && setText(''));
+  const takeBack = () => void work.takeBackLast().then((isBack) => isBack && clear());
+  const type = (typed: string) => {
+    setText(typed);
+    method.end();
+  };
   const sayCode = (chosen: Code) => {
     setOpen(null);
     if (text === '') say({ code: chosen });
@@ -113,7 +126,8 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
       X: () => sayCode('cannot-read'),
       S: () => sayCode('ask-the-lead'),
       W: () => (open === 'other' ? close() : setOpen('other')),
-      ...(open === 'other' ? Object.fromEntries(rareCodes.map((rare, index) => [String(index + 1), () => setCode(rare)])) : {}),
+      ...(item.methodMarks.length > 0 && canType ? { M: method.begin, ArrowDown: method.begin } : {}),
+      ...(open === 'other' && !method.isNumbering ? Object.fromEntries(rareCodes.map((rare, index) => [String(index + 1), () => setCode(rare)])) : {}),
       U: takeBack,
       N: () => setOpen('note'),
       T: turn,
@@ -124,9 +138,11 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
       PageDown: () => look(-1),
       '?': () => setOpen('keys'),
       Escape: () => {
-        if (open !== null) close();
+        if (method.isNumbering) method.end();
+        else if (open !== null) close();
         else if (picture.isWhole) whole();
         else if (text !== '') setText('');
+        else if (method.struck.length > 0) method.reset([]);
         else router.push('/');
       },
     },
@@ -152,7 +168,7 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
               <DeskTools lease={lease} isWhole={picture.isWhole} zoom={picture.zoom} onTurn={turn} onCloser={() => zoom(1.5)} onFarther={() => zoom(1 / 1.5)} onWhole={whole} />
               {shown.kind === 'done' ? (
                 <View style={{ minHeight: isWide ? 240 : 168, gap: 12, padding: isWide ? 40 : 16, borderTopWidth: 1, borderColor: colors.hair }}>
-                  <Text variant="head">{words.lookBack(lease.candidateNumber, saidText(shown.done.said))}</Text>
+                  <Text variant="head">{words.lookBack(lease.candidateNumber, saidText(shown.done.said), struckWords(shown.done.said.method ?? [], item.methodMarks))}</Text>
                   <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 10 }}>
                     <Button keyCap="U" icon="takeBack" onPress={takeBack}>
                       {words.takeBack(lease.candidateNumber)}
@@ -166,9 +182,10 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
                 <DeskFoot
                   item={item}
                   text={text}
-                  onText={setText}
+                  onText={type}
                   fieldRef={field}
                   note={note}
+                  method={method}
                   isChoosingCode={open === 'other'}
                   chosenCode={code}
                   onChooseCode={setCode}
@@ -185,7 +202,7 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
         </View>
         {isWide ? (
           <View style={{ width: 250, padding: 18, borderLeftWidth: 1, borderColor: colors.hair }}>
-            <JustRead sittingId={sittingId} itemId={item.id} done={work.done} queue={work.justDone} onTakeBack={takeBack} />
+            <JustRead sittingId={sittingId} item={item} done={work.done} queue={work.justDone} onTakeBack={takeBack} />
           </View>
         ) : null}
       </View>
@@ -203,6 +220,7 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
           }
           takeBackLabel={words.takeBack(last?.lease.candidateNumber ?? '')}
           onClose={close}
+          hint={words.typesLast(item.typesLast)}
         />
       ) : null}
       {open === 'note' ? (

@@ -1,9 +1,11 @@
 import { View } from 'react-native';
 import { useRecent } from '../../client/desk';
 import type { QueueView } from '../../client/reading-queue';
+import type { DeskItem } from '../../contracts/desk';
 import { Button } from '../../ui/button';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
+import { struckWords } from '../method-words';
 import { clockTime } from '../times';
 import { saidText } from './use-desk-work';
 import { words } from './words';
@@ -11,7 +13,7 @@ import type { DoneAnswer } from './work-list';
 
 interface JustReadProps {
   readonly sittingId: string;
-  readonly itemId: string;
+  readonly item: DeskItem;
   readonly done: readonly DoneAnswer[];
   readonly queue: QueueView;
   readonly onTakeBack: () => void;
@@ -20,16 +22,16 @@ interface JustReadProps {
 const rows = 8;
 
 /** The last readings of this item, those of this page first, with a way to take the last one back. */
-export function JustRead({ sittingId, itemId, done, queue, onTakeBack }: JustReadProps) {
+export function JustRead({ sittingId, item, done, queue, onTakeBack }: JustReadProps) {
   const colors = useColors();
-  const recent = useRecent(sittingId, itemId);
+  const recent = useRecent(sittingId, item.id);
   const refused = new Set(queue.refused.map(({ id }) => id));
   const unsent = new Set(queue.waiting.map(({ id }) => id));
   const here = [...done].reverse().map(({ readingId, lease, said, at }) => ({ id: readingId, number: lease.candidateNumber, said, at }));
   const ids = new Set(here.map(({ id }) => id));
   const before = (recent.data?.readings ?? [])
     .filter(({ id }) => !ids.has(id))
-    .map(({ id, candidateNumber, text, code, recordedAt }) => ({ id, number: candidateNumber, said: { ...(text === null ? {} : { text }), ...(code === null ? {} : { code }) }, at: recordedAt }));
+    .map(({ id, candidateNumber, text, code, method, recordedAt }) => ({ id, number: candidateNumber, said: { method, ...(text === null ? {} : { text }), ...(code === null ? {} : { code }) }, at: recordedAt }));
   const list = [...here, ...before].slice(0, rows);
   const last = list.find(({ id }) => !refused.has(id));
   return (
@@ -48,9 +50,16 @@ export function JustRead({ sittingId, itemId, done, queue, onTakeBack }: JustRea
               <Text variant="readingS" style={{ width: 62 }}>
                 {number}
               </Text>
-              <Text variant={said.code === undefined ? 'reading' : 'small'} align="right" lines={1} style={{ flex: 1 }}>
-                {saidText(said)}
-              </Text>
+              <View style={{ flex: 1, minWidth: 0 }}>
+                <Text variant={said.code === undefined ? 'reading' : 'small'} align="right" lines={1}>
+                  {saidText(said)}
+                </Text>
+                {item.methodMarks.length === 0 ? null : (
+                  <Text variant="micro" tone="ink2" align="right">
+                    {struckWords(said.method ?? [], item.methodMarks)}
+                  </Text>
+                )}
+              </View>
               <Text variant="label" weight={400} tone="ink2" align="right" style={{ width: 46 }}>
                 {refused.has(id) ? words.notStored : unsent.has(id) ? words.waiting : clockTime(at)}
               </Text>

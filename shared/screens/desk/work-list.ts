@@ -5,6 +5,8 @@ export interface Said {
   readonly text?: string;
   readonly code?: Code;
   readonly note?: string;
+  /** Ids of the method marks struck; only of an item that has some. */
+  readonly method?: readonly string[];
 }
 
 /** An answer that was read on this page, with what was said. */

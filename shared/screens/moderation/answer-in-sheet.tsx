@@ -10,6 +10,8 @@ import { AnswerMore, type MoreTab } from './answer-more';
 import { AnswerScale } from './answer-scale';
 import type { AnswerSheetProps } from './answer-sheet';
 import { Crops } from './crops';
+import { Follows } from './follows';
+import { MethodCompare } from './method-compare';
 import { ReadingsList } from './readings-list';
 import { eitherWay, saidOf } from './ruling';
 import { RulingForm } from './ruling-form';
@@ -18,7 +20,7 @@ import { ThirdReading } from './third-reading';
 import { words } from './words';
 
 /** What the sheet holds once the answer has come, in the order in which a person decides. */
-export function AnswerInSheet({ answer, canRule, moves, last, onClose, onNextHeld, onRuled }: AnswerSheetProps & { answer: AnswerView }) {
+export function AnswerInSheet({ answer, canRule, moves, last, onClose, onNextHeld, onOther, onRuled }: AnswerSheetProps & { answer: AnswerView }) {
   const isInDialog = !useIsWide();
   const [isReading, setReading] = useState(answer.mine === null);
   const [typed, setTyped] = useState('');
@@ -27,7 +29,7 @@ export function AnswerInSheet({ answer, canRule, moves, last, onClose, onNextHel
   const { mine, ruling } = answer;
   const maySettle = canRule && answer.cannotSettle === null && answer.crops.length > 0;
   const isHeld = heldStates.some((state) => state === answer.state);
-  const isMineRuled = mine !== null && ruling?.isOwn === true && ruling.kind !== 'mark' && saidOf(mine) === saidOf(ruling);
+  const isMineRuled = mine !== null && ruling?.isOwn === true && ruling.kind !== 'mark' && saidOf(mine, answer.methodMarks) === saidOf(ruling, answer.methodMarks);
   const onTakeBack = canRule && ruling?.isOwn ? () => last.takeBack(answer) : null;
   const takeBackAny = onTakeBack ?? last.onTakeBack;
   useKeys(
@@ -35,7 +37,7 @@ export function AnswerInSheet({ answer, canRule, moves, last, onClose, onNextHel
       // What is typed keeps the keys that move within a text, and the row that it was typed for.
       ...(typed === '' ? moves : {}),
       H: () => setTab('history'),
-      D: () => setTab('derivation'),
+      ...(answer.scheme.derivation ? { D: () => setTab('derivation') } : {}),
       P: () => setTab('page'),
       Escape: () => (typed === '' ? onClose() : setTyped('')),
       ...(takeBackAny ? { U: takeBackAny } : {}),
@@ -46,6 +48,7 @@ export function AnswerInSheet({ answer, canRule, moves, last, onClose, onNextHel
     <>
       {answer.isCovered ? null : <AnswerScale answer={answer} />}
       <ReadingsList answer={answer} />
+      {answer.isCovered ? null : <MethodCompare answer={answer} />}
       {eitherWay(answer) === null ? null : (
         <Text variant="small" tone="ink2">
           {eitherWay(answer)}
@@ -63,6 +66,7 @@ export function AnswerInSheet({ answer, canRule, moves, last, onClose, onNextHel
       <Crops answer={answer} />
       <View style={{ padding: 20, gap: 18 }}>
         {isHeld ? null : <Standing answer={answer} onTakeBack={onTakeBack} isBusy={last.isBusy} host={standing} />}
+        <Follows answer={answer} onOther={onOther} />
         {!maySettle ? (
           <>
             <Text variant="small" tone="ink2">

@@ -27,7 +27,7 @@ interface AnswerMoreProps {
 export function AnswerMore({ answer, tab, onTab }: AnswerMoreProps) {
   return (
     <View style={{ gap: 12 }}>
-      <Tabs id="answer-more" label={words.sheet.tabsLabel} tabs={moreTabs.map((key) => ({ key, label: words.sheet.tabs[key] }))} chosen={tab} onChoose={onTab} isSmall />
+      <Tabs id="answer-more" label={words.sheet.tabsLabel} tabs={moreTabs.filter((key) => key !== 'derivation' || Boolean(answer.scheme.derivation)).map((key) => ({ key, label: words.sheet.tabs[key] }))} chosen={tab} onChoose={onTab} isSmall />
       <TabPanel id="answer-more" chosen={tab}>
         {tab === 'history' ? <History answerId={answer.answerId} /> : null}
         {tab === 'derivation' && answer.scheme.derivation ? <WorkedDerivation derivation={answer.scheme.derivation as DerivationData} quantity={answer.scheme.quantity} /> : null}

@@ -13,12 +13,13 @@ function placeOf(text: string | null | undefined, form: AnswerForm): number | nu
   return read.ok ? toApproximate(read.value) : null;
 }
 
-/** The scale of the item with the readings under it and the distance between them; the own reading as the drop. */
+/** The scale of the item with the readings under it and the distance between them; the own reading as the drop. Printed numbers have none. */
 export function AnswerScale({ answer }: { answer: AnswerView }) {
-  const data = answer.scheme.scale as ScaleData;
+  const data = answer.scheme.scale as ScaleData | null;
   const [first = null, second = null] = answer.readings.map(({ given }) => placeOf(given?.text, answer));
   const mine = placeOf(answer.mine?.text, answer);
   const pair = first !== null && second !== null && answer.gap !== null && first !== second ? { first, second, gap: words.sheet.apart(answer.gap) } : undefined;
+  if (data === null) return null;
   const columns = pair === undefined ? [first, second].filter((at): at is number => at !== null).slice(0, 1).map((at) => ({ at, count: 1 })) : undefined;
   return (
     <Scale

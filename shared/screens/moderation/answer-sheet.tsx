@@ -29,6 +29,8 @@ export interface AnswerSheetProps {
   readonly onPrevious: () => void;
   readonly onNext: () => void;
   readonly onNextHeld: (() => void) | null;
+  /** Another answer, wherever it stands in the list. */
+  readonly onOther: (answerId: string) => void;
   readonly onRuled: (answer: AnswerView, what: string) => void;
 }
 

@@ -54,11 +54,14 @@ function Given({ row, at }: { row: LedgerRow; at: number }) {
 
 export function RowMark({ row }: { row: LedgerRow }) {
   const of = row.maxGrains / GRAINS_PER_MARK;
-  const state = row.grains !== null ? (row.isRuled ? 'ruled' : 'given') : isHeld(row) ? 'held' : 'unread';
-  return <MarkStand state={state} got={(row.grains ?? 0) / GRAINS_PER_MARK} of={of} gotText={marksText(row.grains ?? 0)} ofText={marksText(row.maxGrains)} />;
+  const waits = row.waitsFor !== null && !isHeld(row);
+  const state = row.grains !== null ? (row.isRuled ? 'ruled' : 'given') : isHeld(row) || waits ? 'held' : 'unread';
+  return <MarkStand state={state} heldWord={waits ? 'waits' : 'held'} got={(row.grains ?? 0) / GRAINS_PER_MARK} of={of} gotText={marksText(row.grains ?? 0)} ofText={marksText(row.maxGrains)} />;
 }
 
+/** Printed numbers lie on no scale. */
 function RowScale({ row, width }: { row: LedgerRow; width?: number }) {
+  if (row.key === null) return null;
   const at = row.value === null ? {} : row.isRuled ? { ruled: row.value } : { readings: [row.value] };
   return <ScaleRow keyAt={row.key} reach={row.span} of={row.maxGrains / GRAINS_PER_MARK} width={width} {...at} />;
 }

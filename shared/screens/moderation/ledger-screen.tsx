@@ -104,13 +104,14 @@ export function LedgerScreen({ sittingId }: { sittingId: string }) {
         answerId={place.id}
         rev={here?.answerId === place.id ? here.rev : 0}
         canRule={canRule}
-        heldCount={countOfHeld(held, place.at)}
+        heldCount={here?.answerId === place.id ? countOfHeld(held, place.at) : null}
         moves={moves}
         last={last}
         onClose={() => setOpen(false)}
         onPrevious={step(-1)}
         onNext={step(1)}
         onNextHeld={held.some((row) => row !== place.at) ? goHeld(1) : null}
+        onOther={(id) => setPlace({ at: place.at, id })}
         onRuled={ruled}
       />
     ) : null;

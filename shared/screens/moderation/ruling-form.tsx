@@ -51,7 +51,7 @@ export function RulingForm({ answer, isInDialog, onRuled, onSee, onAgain, childr
     if (!mine || rule.isPending || (asksReason && reason.trim().length < 3) || (hand && grains === null)) return;
     const why = reason.trim() === '' ? {} : { reason: reason.trim() };
     const body: RulingBody = hand ? { kind: 'mark', marks: marks.trim(), ...why } : mine.code !== null ? { kind: 'code', code: mine.code, method: mine.method, ...why } : { kind: 'value', text: mine.text ?? '', method: mine.method, ...why };
-    const what = hand ? marksWords(grains ?? 0) : saidOf(mine);
+    const what = hand ? marksWords(grains ?? 0) : saidOf(mine, answer.methodMarks);
     rule.mutate(
       { rev: answer.rev, body, once: once.current },
       {
@@ -75,7 +75,7 @@ export function RulingForm({ answer, isInDialog, onRuled, onSee, onAgain, childr
     <View style={{ gap: 14 }}>
       <View style={{ flexDirection: 'row', alignItems: 'center', gap: 12 }}>
         <Text style={{ flex: 1 }} weight={500}>
-          {words.sheet.yours(saidOf(mine))}
+          {words.sheet.yours(saidOf(mine, answer.methodMarks))}
         </Text>
         {mine.grains === null ? null : (
           <MarkStand state="given" scale="desk" got={mine.grains / GRAINS_PER_MARK} of={answer.maxGrains / GRAINS_PER_MARK} gotText={marksText(mine.grains)} ofText={marksText(answer.maxGrains)} />

@@ -1,20 +1,32 @@
 import { describe, expect, it } from 'vitest';
 import type { AnswerView } from '../../contracts/ledger';
-import { agoWords, conflictWords, eitherWay, marksWords, needsReason, ruledWords, ruleWords } from './ruling';
+import { agoWords, conflictWords, differInMethodOnly, eitherWay, marksWords, needsReason, ruledWords, ruleWords, saidOf } from './ruling';
 
-const reading = (isAsMine: boolean, grains: number | null = 0) => ({ id: 'r', reader: 'reader 1', given: null, grains, note: null, recordedAt: 0, isAsMine });
-const ruling = { id: 'u', kind: 'value', text: '6.10', code: null, grains: null, reason: null, isOwn: false, at: 0 } as const;
-const held = { state: 'discordant', ruling: null, maxGrains: 3600, score: null, mine: { id: 'm', text: '6.10', code: null, grains: 3600 } } as unknown as AnswerView;
+const reading = (isAsMine: boolean, grains: number | null = 0) => ({ id: 'r', reader: 'reader 1', given: null, grains, note: null, method: [], recordedAt: 0, isAsMine });
+const ruling = { id: 'u', kind: 'value', text: '6.10', code: null, grains: null, method: [], reason: null, isOwn: false, at: 0 } as const;
+const mine = { id: 'm', text: '6.10', code: null, method: [], grains: 3600, waitsFor: null };
+const held = { state: 'discordant', ruling: null, maxGrains: 3600, score: null, methodMarks: [], mine } as unknown as AnswerView;
 
 describe('what the button says', () => {
   it('names the value and the mark', () => {
     expect(ruleWords(held)).toBe('Rule 6.10, 3 marks');
-    expect(ruleWords({ mine: { id: 'm', text: null, code: 'blank', grains: 0 } })).toBe('Rule blank, 0 marks');
+    expect(ruleWords({ methodMarks: [], mine: { ...mine, text: null, code: 'blank', grains: 0 } })).toBe('Rule blank, 0 marks');
   });
 
   it('names nothing where the scheme leaves the mark to a person', () => {
-    expect(ruleWords({ mine: { id: 'm', text: null, code: 'elsewhere', grains: null } })).toBeNull();
-    expect(ruleWords({ mine: null })).toBeNull();
+    expect(ruleWords({ methodMarks: [], mine: { ...mine, text: null, code: 'elsewhere', grains: null } })).toBeNull();
+    expect(ruleWords({ methodMarks: [], mine: null })).toBeNull();
+  });
+
+  const methodMarks = [{ id: 'a', text: 'groups', grains: 600 }, { id: 'b', text: 'sum', grains: 600 }];
+
+  it('names the method marks struck', () => {
+    expect(ruleWords({ methodMarks, mine: { ...mine, method: ['b'] } })).toBe('Rule 6.10 with method 2, 3 marks');
+    expect(saidOf({ text: null, code: 'blank', method: [] }, methodMarks)).toBe('blank with no method mark');
+  });
+
+  it('promises no mark that waits for an earlier item', () => {
+    expect(ruleWords({ methodMarks: [], mine: { ...mine, grains: null, waitsFor: 2 } })).toBe('Rule 6.10; its mark waits for item 2');
   });
 
   it('counts one mark as one', () => {
@@ -49,5 +61,19 @@ describe('two values with one mark', () => {
     expect(eitherWay({ state: 'discordant', maxGrains: 3600, readings: [reading(false, 0), reading(false, 3600)] })).toBeNull();
     expect(eitherWay({ state: 'discordant', maxGrains: 3600, readings: [reading(false, null), reading(false, null)] })).toBeNull();
     expect(eitherWay({ state: 'concordant', maxGrains: 3600, readings: [reading(false, 0), reading(false, 0)] })).toBeNull();
+  });
+});
+
+describe('readings that differ in the method marks alone', () => {
+  const read = (text: string, method: string[]) => ({ ...reading(false), given: { text, code: null }, method });
+  const numeric = { kind: 'numeric', units: [] } as const;
+  it('are told from those that differ in value or form', () => {
+    expect(differInMethodOnly({ ...numeric, readings: [read('6,1', ['a']), read('6.1', [])] })).toBe(true);
+    expect(differInMethodOnly({ ...numeric, readings: [read('6.10', ['a']), read('6.1', [])] })).toBe(false);
+    expect(differInMethodOnly({ ...numeric, readings: [read('6.1', ['a', 'b']), read('6.1', ['b', 'a'])] })).toBe(false);
+  });
+  it('not while one is covered, nor of one alone', () => {
+    expect(differInMethodOnly({ ...numeric, readings: [reading(false), read('6.1', ['a'])] })).toBe(false);
+    expect(differInMethodOnly({ ...numeric, readings: [read('6.1', ['a'])] })).toBe(false);
   });
 });

@@ -1,12 +1,20 @@
 import { heldStates } from '../../contracts/enums';
 import type { AnswerView } from '../../contracts/ledger';
 import { marksText } from '../../marking/grains';
+import { readTyped, type AnswerForm } from '../../marking/read-typed';
 import { codeWords } from '../desk/words';
+import { struckWords, type MethodMarkRow } from '../method-words';
 
 type Mine = NonNullable<AnswerView['mine']>;
 type Ruling = NonNullable<AnswerView['ruling']>;
 
-export const saidOf = ({ text, code }: Pick<Mine, 'text' | 'code'>): string => (code === null ? (text ?? '') : codeWords[code]);
+type SaidWithMethod = Pick<Mine, 'text' | 'code'> & { readonly method?: readonly string[] };
+
+/** "6.10", "blank", and of an item with method marks "6.10 with method 1 and 3". */
+export function saidOf({ text, code, method = [] }: SaidWithMethod, marks: readonly MethodMarkRow[] = []): string {
+  const said = code === null ? (text ?? '') : codeWords[code];
+  return marks.length === 0 ? said : `${said} with ${struckWords(method, marks)}`;
+}
 
 /** "1 mark", "2.5 marks", "0 marks". */
 export const marksWords = (grains: number): string => `${marksText(grains)} ${marksText(grains) === '1' ? 'mark' : 'marks'}`;
@@ -17,16 +25,17 @@ const isHeld = ({ state }: Pick<AnswerView, 'state'>): boolean => heldStates.som
 export const needsReason = (answer: AnswerView): boolean => answer.ruling !== null || !isHeld(answer) || !answer.readings.some(({ isAsMine }) => isAsMine === true);
 
 /** What the button says it will do; null where my reading gives no mark by the scheme and a mark has to be ruled. */
-export function ruleWords({ mine }: Pick<AnswerView, 'mine'>): string | null {
-  if (mine === null || mine.grains === null) return null;
-  return `Rule ${saidOf(mine)}, ${marksWords(mine.grains)}`;
+export function ruleWords({ mine, methodMarks }: Pick<AnswerView, 'mine' | 'methodMarks'>): string | null {
+  if (mine === null) return null;
+  if (mine.waitsFor !== null) return `Rule ${saidOf(mine, methodMarks)}; its mark waits for item ${mine.waitsFor}`;
+  return mine.grains === null ? null : `Rule ${saidOf(mine, methodMarks)}, ${marksWords(mine.grains)}`;
 }
 
 /** What a ruling says, with the mark that stands by it: "6.10, 3 marks", or the mark alone where one was ruled by hand. */
-export function ruledWords(ruling: Pick<Ruling, 'kind' | 'text' | 'code' | 'grains'>, standing: number | null): string {
+export function ruledWords(ruling: Pick<Ruling, 'kind' | 'text' | 'code' | 'grains' | 'method'>, standing: number | null, marks: readonly MethodMarkRow[] = []): string {
   const grains = ruling.grains ?? standing;
   const mark = grains === null ? '' : marksWords(grains);
-  return ruling.kind === 'mark' ? mark : [saidOf(ruling), mark].filter((part) => part !== '').join(', ');
+  return ruling.kind === 'mark' ? mark : [saidOf(ruling, marks), mark].filter((part) => part !== '').join(', ');
 }
 
 /** "a minute ago", "12 minutes ago", "2 hours ago": how long somebody else's ruling has stood. */
@@ -41,9 +50,9 @@ export function agoWords(ms: number): string {
 
 /** What stands now that somebody else was first; null where the change was not a ruling. */
 export function conflictWords(current: AnswerView, now: number): string | null {
-  const { ruling, score } = current;
+  const { ruling, score, methodMarks } = current;
   if (ruling === null) return null;
-  return `Someone ruled this ${agoWords(now - ruling.at)}: ${ruledWords(ruling, score?.grains ?? null)}. Yours was not stored.`;
+  return `Someone ruled this ${agoWords(now - ruling.at)}: ${ruledWords(ruling, score?.grains ?? null, methodMarks)}. Yours was not stored.`;
 }
 
 /** "Either way 0 of 3": two readings that differ and give the same mark. Null where they do not, or are kept back. */
@@ -51,4 +60,18 @@ export function eitherWay({ state, readings, maxGrains }: Pick<AnswerView, 'stat
   const [first, ...others] = readings.map(({ grains }) => grains);
   if (state !== 'discordant' || first === undefined || first === null || others.length === 0 || others.some((grains) => grains !== first)) return null;
   return `Either way ${marksText(first)} of ${marksText(maxGrains)}.`;
+}
+
+const formOf = ({ text, code }: { readonly text: string | null; readonly code: string | null }, form: AnswerForm): string => {
+  if (code !== null) return `@${code}`;
+  const read = readTyped(text ?? '', form);
+  return read.ok ? read.canonical : '';
+};
+
+/** Whether two uncovered readings agree in value and form, and differ in the method marks struck alone. */
+export function differInMethodOnly(answer: Pick<AnswerView, 'readings' | 'kind' | 'units'>): boolean {
+  const shown = answer.readings.flatMap(({ given, method }) => (given === null ? [] : [{ form: formOf(given, answer), method: [...method].sort().join() }]));
+  const [first, ...others] = shown;
+  if (first === undefined || shown.length < answer.readings.length) return false;
+  return others.every(({ form }) => form === first.form) && others.some(({ method }) => method !== first.method);
 }

@@ -11,7 +11,10 @@ import { useIsPhone } from '../../ui/use-breakpoint';
 import { useKeys } from '../../ui/use-keys';
 import { Vessel } from '../../ui/vessel';
 import { rareCodes } from '../desk/code-choice';
-import { codeWords } from '../desk/words';
+import { codeWords, words as deskWords } from '../desk/words';
+import { MethodTicks } from '../method-ticks';
+import { useMethodMarks } from '../use-method-marks';
+import { marksWords } from './ruling';
 import { words } from './words';
 
 const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
@@ -32,11 +35,12 @@ export function ThirdReading({ answer, text, onText, isInDialog, onDone }: Third
   const [openedAt] = useState(() => Date.now());
   const [isRare, setRare] = useState(false);
   const field = useRef<TextInput>(null);
+  const method = useMethodMarks(answer.methodMarks, isInDialog);
   const back = understood(text, answer);
   useEffect(() => field.current?.focus(), []);
   const give = (given: { text: string } | { code: Code }) => {
     if (send.isPending) return;
-    send.mutate({ id: uuidv7(), openedAt, ...given }, {
+    send.mutate({ id: uuidv7(), openedAt, method: method.struck, ...given }, {
       onSuccess: () => {
         onText('');
         onDone();
@@ -55,14 +59,21 @@ export function ThirdReading({ answer, text, onText, isInDialog, onDone }: Third
       X: code('cannot-read'),
       S: code('ask-the-lead'),
       W: () => setRare(!isRare),
-      ...(isRare ? Object.fromEntries(rareWithLead.map((rare, index) => [String(index + 1), code(rare)])) : {}),
+      ...(answer.methodMarks.length === 0 ? {} : { M: method.begin, ...(text === '' ? {} : { ArrowDown: method.begin }) }),
+      ...(method.isNumbering ? { Escape: method.end } : {}),
+      ...(isRare && !method.isNumbering ? Object.fromEntries(rareWithLead.map((rare, index) => [String(index + 1), code(rare)])) : {}),
     },
     { isInDialog },
   );
-  const help = back.kind === 'value' ? `Understood as ${back.value}. ${back.form}` : words.sheet.fromImage;
+  const type = (typed: string) => {
+    onText(typed);
+    method.end();
+  };
+  const help = back.kind === 'value' ? `Understood as ${back.value}. ${back.form}` : answer.kind === 'choice' ? deskWords.typeChoiceHelp : answer.kind === 'order' ? deskWords.typeOrderHelp : words.sheet.fromImage;
   return (
     <View style={{ gap: 10 }}>
-      <Vessel label={words.sheet.read} value={text} onChange={onText} help={help} error={back.kind === 'refused' ? back.message : undefined} variant="readingM" height={52} maxLength={64} takesCommands isFocusedFirst={!isPhone} inputRef={field} testID="third-reading" />
+      <Vessel label={words.sheet.read} value={text} onChange={type} help={help} error={back.kind === 'refused' ? back.message : undefined} variant="readingM" height={52} maxLength={64} takesCommands isFocusedFirst={!isPhone} inputRef={field} testID="third-reading" />
+      <MethodTicks marks={answer.methodMarks.map(({ grains, ...mark }) => ({ ...mark, worth: marksWords(grains) }))} draft={method} layout="list" />
       {text === '' ? (
         <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 8 }}>
           <Button isSmall keyCap="B" onPress={code('blank')} testID="third-blank">
