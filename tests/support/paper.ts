@@ -44,8 +44,11 @@ export interface BuiltPaper {
   readonly items: readonly string[];
 }
 
+/** An item as it is, or by the ids of those before it, from which it may follow. */
+export type WantedItem = ItemDraft | ((earlier: readonly string[]) => ItemDraft);
+
 interface Wanted {
-  readonly drafts?: readonly ItemDraft[];
+  readonly drafts?: readonly WantedItem[];
   readonly candidates?: readonly string[];
   readonly locked?: boolean;
 }
@@ -55,7 +58,8 @@ export function buildPaper(server: TestServer, { drafts = [itemDraft(), itemDraf
   const { context } = server;
   const lead = actorOf(server, 'lead');
   const sitting = createSitting(context, lead, server.courseId, { title: 'Paper 2, spring sitting', heldOn: '2026-05-06', secondPolicy: 'none', totalRounding: 'none' });
-  const items = drafts.map((draft) => createItem(context, lead, sitting.id, draft).id);
+  const items: string[] = [];
+  for (const draft of drafts) items.push(createItem(context, lead, sitting.id, typeof draft === 'function' ? draft(items) : draft).id);
   saveLayout(context, lead, sitting.id, 0, layoutFor(items));
   if (candidates.length > 0) importClassList(context, lead, sitting.id, candidates.join('\n'));
   if (locked) lockPaper(context, lead, sitting.id);
