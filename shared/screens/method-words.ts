@@ -6,7 +6,8 @@ export interface MethodMarkRow {
 
 export const methodWords = {
   title: 'Method marks',
-  itsNumber: (count: number) => `Type its number, 1 to ${count}.`,
+  which: (count: number) => `Which, 1 to ${count}?`,
+  texts: 'Texts',
 } as const;
 
 /** "method 1 and 3" by the numbers of the marks that were struck, "no method mark", or nothing for an item without any. */

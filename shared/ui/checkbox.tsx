@@ -18,13 +18,14 @@ interface CheckboxProps {
   readonly isClosed?: boolean | undefined;
   /** The box under the thumb, at the other end of the line. */
   readonly isBoxLast?: boolean | undefined;
+  readonly gap?: number | undefined;
   readonly variant?: TypeStyle | undefined;
   readonly lines?: number | undefined;
   readonly testID?: string | undefined;
 }
 
 /** A thing that holds or not; the whole line can be pressed. */
-export function Checkbox({ children, isChecked, onChange, help, label, isLabelHidden = false, isClosed = false, isBoxLast = false, variant = 'body', lines, testID }: CheckboxProps) {
+export function Checkbox({ children, isChecked, onChange, help, label, isLabelHidden = false, isClosed = false, isBoxLast = false, gap = 10, variant = 'body', lines, testID }: CheckboxProps) {
   const colors = useColors();
   const isWide = useIsWide();
   const below = useId();
@@ -43,7 +44,7 @@ export function Checkbox({ children, isChecked, onChange, help, label, isLabelHi
           onChange(!isChecked);
         }}
         testID={testID}
-        style={() => ({ minHeight: isWide ? size.touchWide : size.touch, minWidth: isWide ? size.touchWide : size.touch, flexDirection: isBoxLast ? 'row-reverse' : 'row', alignItems: 'center', gap: 10, borderRadius: radius.keycap })}
+        style={() => ({ minHeight: isWide ? size.touchWide : size.touch, minWidth: isWide ? size.touchWide : size.touch, flexDirection: isBoxLast ? 'row-reverse' : 'row', alignItems: 'center', gap, borderRadius: radius.keycap })}
       >
         <View
           aria-hidden

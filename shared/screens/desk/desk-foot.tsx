@@ -13,7 +13,7 @@ import { usePreference } from '../../ui/preferences';
 import { useIsWide } from '../../ui/use-breakpoint';
 import { useKeys } from '../../ui/use-keys';
 import { Vessel } from '../../ui/vessel';
-import { MethodTicks } from '../method-ticks';
+import { MethodTicks, PadTicks } from '../method-ticks';
 import type { MethodDraft } from '../use-method-marks';
 import { CodeChoice } from './code-choice';
 import { withNextUnit } from './unit-key';
@@ -159,7 +159,7 @@ export function DeskFoot(props: DeskFootProps) {
         </View>
         {item.methodMarks.length === 0 ? null : (
           <View style={{ paddingHorizontal: 16, paddingBottom: 4, backgroundColor: colors.paper }}>
-            <MethodTicks marks={item.methodMarks} draft={method} layout="pad" side={side} />
+            <PadTicks marks={item.methodMarks} draft={method} side={side} />
           </View>
         )}
         <Pad
@@ -208,7 +208,7 @@ export function DeskFoot(props: DeskFootProps) {
       </View>
       {item.methodMarks.length === 0 ? null : (
         <View style={{ paddingHorizontal: isRoomy ? 40 : 24, paddingBottom: 10, backgroundColor: colors.paper }}>
-          <MethodTicks marks={item.methodMarks} draft={method} layout="line" />
+          <MethodTicks marks={item.methodMarks} draft={method} layout="line" keyCap="↓" />
         </View>
       )}
       <KeyStrip

@@ -73,7 +73,7 @@ export function ThirdReading({ answer, text, onText, isInDialog, onDone }: Third
   return (
     <View style={{ gap: 10 }}>
       <Vessel label={words.sheet.read} value={text} onChange={type} help={help} error={back.kind === 'refused' ? back.message : undefined} variant="readingM" height={52} maxLength={64} takesCommands isFocusedFirst={!isPhone} inputRef={field} testID="third-reading" />
-      <MethodTicks marks={answer.methodMarks.map(({ grains, ...mark }) => ({ ...mark, worth: marksWords(grains) }))} draft={method} layout="list" />
+      <MethodTicks marks={answer.methodMarks.map(({ grains, ...mark }) => ({ ...mark, worth: marksWords(grains) }))} draft={method} layout="list" keyCap={text === '' ? 'M' : '↓'} />
       {text === '' ? (
         <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 8 }}>
           <Button isSmall keyCap="B" onPress={code('blank')} testID="third-blank">
