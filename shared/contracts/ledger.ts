@@ -145,6 +145,8 @@ export const historyAct = z.object({
   who: z.string(),
   act: z.enum(['read', 'read-again', 'taken-back', 'surplus', 'ruled', 'ruling-ended', 'scored']),
   given: shownGiven,
+  /** Ids of the method marks struck; empty where it is covered. */
+  method: z.array(z.string()),
   isCovered: z.boolean(),
   grains: grains.nullable(),
   reason: z.string().nullable(),

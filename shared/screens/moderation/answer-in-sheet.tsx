@@ -66,7 +66,7 @@ export function AnswerInSheet({ answer, canRule, moves, last, onClose, onNextHel
       <Crops answer={answer} />
       <View style={{ padding: 20, gap: 18 }}>
         {isHeld ? null : <Standing answer={answer} onTakeBack={onTakeBack} isBusy={last.isBusy} host={standing} />}
-        <Follows answer={answer} onOther={onOther} />
+        {answer.isCovered ? null : <Follows answer={answer} onOther={onOther} />}
         {!maySettle ? (
           <>
             <Text variant="small" tone="ink2">

@@ -7,11 +7,11 @@ import { Cover } from '../../ui/cover';
 import { TabPanel, Tabs } from '../../ui/tabs';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
-import { codeWords } from '../desk/words';
 import { PageOnMat } from '../page-on-mat';
 import { QueryState } from '../query-state';
 import { momentText } from '../times';
 import { WorkedDerivation } from '../worked-derivation';
+import { saidOf } from './ruling';
 import { words } from './words';
 
 export const moreTabs = ['history', 'derivation', 'page'] as const;
@@ -29,7 +29,7 @@ export function AnswerMore({ answer, tab, onTab }: AnswerMoreProps) {
     <View style={{ gap: 12 }}>
       <Tabs id="answer-more" label={words.sheet.tabsLabel} tabs={moreTabs.filter((key) => key !== 'derivation' || Boolean(answer.scheme.derivation)).map((key) => ({ key, label: words.sheet.tabs[key] }))} chosen={tab} onChoose={onTab} isSmall />
       <TabPanel id="answer-more" chosen={tab}>
-        {tab === 'history' ? <History answerId={answer.answerId} /> : null}
+        {tab === 'history' ? <History answer={answer} /> : null}
         {tab === 'derivation' && answer.scheme.derivation ? <WorkedDerivation derivation={answer.scheme.derivation as DerivationData} quantity={answer.scheme.quantity} /> : null}
         {tab === 'page' && answer.pageImageId ? (
           <View style={{ height: 560 }}>
@@ -41,14 +41,14 @@ export function AnswerMore({ answer, tab, onTab }: AnswerMoreProps) {
   );
 }
 
-function History({ answerId }: { answerId: string }) {
-  const history = useAnswerHistory(answerId, true);
+function History({ answer }: { answer: AnswerView }) {
+  const history = useAnswerHistory(answer.answerId, true);
   return (
     <QueryState query={history} fetching="Fetching the history" failed="The history did not come.">
       {({ acts }) => (
         <View role="list" style={{ gap: 2 }}>
           {acts.map((act, index) => (
-            <Act key={index} act={act} />
+            <Act key={index} act={act} methodMarks={answer.methodMarks} />
           ))}
         </View>
       )}
@@ -56,9 +56,9 @@ function History({ answerId }: { answerId: string }) {
   );
 }
 
-function Act({ act }: { act: HistoryAct }) {
+function Act({ act, methodMarks }: { act: HistoryAct; methodMarks: AnswerView['methodMarks'] }) {
   const colors = useColors();
-  const said = act.given === null ? '' : act.given.code === null ? (act.given.text ?? '') : codeWords[act.given.code];
+  const said = act.given === null ? '' : saidOf({ ...act.given, method: act.method }, act.isCovered ? [] : methodMarks);
   const mark = act.grains === null ? '' : `, ${marksText(act.grains)} marks`;
   const scheme = act.act === 'scored' && act.schemeOrdinal !== null ? `, ${words.sheet.scheme(act.schemeOrdinal)}` : '';
   const head = act.act === 'scored' ? words.acts.scored : `${act.who} ${words.acts[act.act]}`;

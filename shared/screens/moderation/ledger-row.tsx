@@ -17,8 +17,8 @@ export type ColumnKey = keyof typeof words.columns;
 export const rooms: Readonly<Record<ColumnKey, ColumnRoom>> = {
   candidate: { width: 84 },
   item: { width: 96 },
-  first: { width: 84, align: 'right' },
-  second: { width: 84, align: 'right' },
+  first: { width: 92, align: 'right' },
+  second: { width: 92, align: 'right' },
   pair: { width: 172 },
   scale: { width: 142 },
   why: { grow: 1 },
@@ -26,6 +26,9 @@ export const rooms: Readonly<Record<ColumnKey, ColumnRoom>> = {
 };
 
 const isHeld = ({ state }: LedgerRow): boolean => state === 'discordant' || state === 'cannot-read' || state === 'set-aside';
+
+/** As many characters as a column shows at the size of a reading. */
+const longest = 8;
 
 /** One reading of a row: its text, its code, a cover, or that it is due. */
 function Given({ row, at }: { row: LedgerRow; at: number }) {
@@ -45,9 +48,12 @@ function Given({ row, at }: { row: LedgerRow; at: number }) {
       </Text>
     );
   }
+  const text = given.text ?? '';
+  // With a unit or a power of ten it is too long for one line of its column, and a reading is never cut.
+  const isLong = text.length > longest;
   return (
-    <Text variant="reading" lines={1}>
-      {given.text ?? ''}
+    <Text variant={isLong ? 'grad' : 'reading'} lines={isLong ? 2 : 1} align="right">
+      {text}
     </Text>
   );
 }

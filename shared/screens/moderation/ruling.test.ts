@@ -22,7 +22,8 @@ describe('what the button says', () => {
 
   it('names the method marks struck', () => {
     expect(ruleWords({ methodMarks, mine: { ...mine, method: ['b'] } })).toBe('Rule 6.10 with method 2, 3 marks');
-    expect(saidOf({ text: null, code: 'blank', method: [] }, methodMarks)).toBe('blank with no method mark');
+    expect(['a', null].map((id) => saidOf({ text: null, code: 'blank', method: id === null ? [] : [id] }, methodMarks))).toEqual(['blank with method 1', 'blank']);
+    expect(saidOf({ text: '6.1', code: null, method: [] }, methodMarks)).toBe('6.1 with no method mark');
   });
 
   it('promises no mark that waits for an earlier item', () => {

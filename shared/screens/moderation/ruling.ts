@@ -10,10 +10,10 @@ type Ruling = NonNullable<AnswerView['ruling']>;
 
 type SaidWithMethod = Pick<Mine, 'text' | 'code'> & { readonly method?: readonly string[] };
 
-/** "6.10", "blank", and of an item with method marks "6.10 with method 1 and 3". */
+/** "6.10", "blank", and of an item with method marks "6.10 with method 1 and 3"; none struck is said of a value only. */
 export function saidOf({ text, code, method = [] }: SaidWithMethod, marks: readonly MethodMarkRow[] = []): string {
   const said = code === null ? (text ?? '') : codeWords[code];
-  return marks.length === 0 ? said : `${said} with ${struckWords(method, marks)}`;
+  return marks.length === 0 || (code !== null && method.length === 0) ? said : `${said} with ${struckWords(method, marks)}`;
 }
 
 /** "1 mark", "2.5 marks", "0 marks". */
