@@ -16,8 +16,8 @@ interface MarksProps {
 interface MethodTicksProps extends MarksProps {
   /** Side by side under the field, or one under the other in a sheet. */
   readonly layout: 'line' | 'list';
-  /** What begins to strike one from the keyboard just now. */
-  readonly keyCap: string;
+  /** What begins to strike one from the keyboard just now; left out where a title stands over them already. */
+  readonly keyCap?: string;
 }
 
 /** The criteria of an item, each struck or not. */
@@ -26,12 +26,14 @@ export function MethodTicks({ marks, draft, layout, keyCap }: MethodTicksProps) 
   const isLine = layout === 'line';
   return (
     <View role="group" aria-label={methodWords.title} testID="method-marks" style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center', columnGap: 24 }}>
-      <View style={{ flexDirection: 'row', alignItems: 'center', gap: 8, minHeight: 32, minWidth: 132, ...(isLine ? {} : { flexBasis: '100%' }) }}>
-        <Text variant="label" tone={draft.isNumbering ? 'manganate' : 'ink'} live="polite">
-          {draft.isNumbering ? methodWords.which(marks.length) : methodWords.title}
-        </Text>
-        <KeyCap>{keyCap}</KeyCap>
-      </View>
+      {keyCap === undefined ? null : (
+        <View style={{ flexDirection: 'row', alignItems: 'center', gap: 8, minHeight: 32, minWidth: 132, ...(isLine ? {} : { flexBasis: '100%' }) }}>
+          <Text variant="label" tone={draft.isNumbering ? 'manganate' : 'ink'} live="polite">
+            {draft.isNumbering ? methodWords.which(marks.length) : methodWords.title}
+          </Text>
+          <KeyCap>{keyCap}</KeyCap>
+        </View>
+      )}
       {marks.map(({ id, text, worth }, index) => (
         <View key={id} style={isLine ? { maxWidth: 420 } : { flexBasis: '100%' }}>
           <Checkbox isChecked={draft.struck.includes(id)} onChange={() => draft.strike(id)} label={worth === undefined ? text : `${text}, ${worth}`} lines={isLine ? 2 : undefined} testID={`method-${index + 1}`}>
@@ -81,7 +83,7 @@ export function PadTicks({ marks, draft, side }: MarksProps & { readonly side: '
       ) : null}
       {isOpen ? (
         <SheetOver title={methodWords.title} onClose={() => setOpen(false)} testID="method-sheet">
-          <MethodTicks marks={marks} draft={draft} layout="list" keyCap="M" />
+          <MethodTicks marks={marks} draft={draft} layout="list" />
         </SheetOver>
       ) : null}
     </View>

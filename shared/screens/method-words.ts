@@ -7,7 +7,7 @@ export interface MethodMarkRow {
 export const methodWords = {
   title: 'Method marks',
   which: (count: number) => `Which, 1 to ${count}?`,
-  texts: 'Texts',
+  texts: 'Wording',
 } as const;
 
 /** "method 1 and 3" by the numbers of the marks that were struck, "no method mark", or nothing for an item without any. */
