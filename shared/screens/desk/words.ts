@@ -112,7 +112,7 @@ export const keyGroups = [
       { keys: ['X'], does: 'can’t read, and next' },
       { keys: ['S'], does: 'set aside: ask the lead' },
       { keys: ['W', '1–4', 'Enter'], does: 'crossed out, two answers, elsewhere, wrong page' },
-      { keys: ['M', '1–6'], does: 'strike a method mark, as with ↓' },
+      { keys: ['M', '1–6'], does: 'strike a method mark, as with the arrow down' },
       { keys: ['N'], does: 'note' },
     ],
   },

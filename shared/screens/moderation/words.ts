@@ -166,7 +166,7 @@ export const keyGroups = [
       { keys: ['0–9'], does: 'your own reading, in the field of the sheet' },
       { keys: ['B', 'X', 'S'], does: 'blank, can’t read, leave to another lead: while the field is empty' },
       { keys: ['W', '1–4'], does: 'crossed out, two answers, elsewhere, wrong page' },
-      { keys: ['M', '1–6'], does: 'strike a method mark, or take it off; once something is typed ↓ instead of M' },
+      { keys: ['M', '1–6'], does: 'strike a method mark, or take it off; once something is typed, the arrow down instead of M' },
       { keys: ['Enter'], does: 'record your reading, then rule as the button says' },
       { keys: ['R'], does: 'reason' },
       { keys: ['U'], does: 'take back your last ruling' },
