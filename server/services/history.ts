@@ -7,7 +7,7 @@ import type { Context } from '../context';
 import { pseudonyms, requireAnswer } from './answers';
 import { isCovered, shownGiven } from './covers';
 
-const plain = { given: null, method: [], isCovered: false, grains: null, reason: null, schemeOrdinal: null } as const;
+const plain = { given: null, method: [] as string[], isCovered: false, grains: null, reason: null, schemeOrdinal: null };
 
 /** What happened to one answer, oldest first. Covered readings are covered here as well. */
 export function answerHistory(context: Context, actor: Actor, answerId: string): HistoryAct[] {

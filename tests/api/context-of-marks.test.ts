@@ -13,6 +13,7 @@ import { startTestServer, type TestServer } from '../support/test-server';
 interface Sent {
   readonly text?: string;
   readonly code?: string;
+  readonly note?: string;
   readonly method?: readonly string[];
 }
 
