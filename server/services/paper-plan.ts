@@ -63,8 +63,12 @@ export function itemsAffected(plan: PaperPlan, itemIds: readonly string[]): stri
 
 type ScriptAnswer = ReturnType<typeof answersOfScript>[number];
 
-/** A settled form; a mark that was ruled without a value says that none is carried on. */
-const settledOf = (answer: ScriptAnswer | undefined): string | null => answer?.settledCanonical ?? (answer?.state === 'ruled' ? '@' : null);
+/** A settled form; a mark that was ruled without a value says that none is carried on, and so does an item that was withdrawn unread. */
+function settledOf(plan: PaperPlan, answer: ScriptAnswer | undefined): string | null {
+  if (!answer) return null;
+  const { withdrawn = 'none' } = plan.items.get(answer.item)?.body ?? {};
+  return answer.settledCanonical ?? (answer.state === 'ruled' || withdrawn !== 'none' ? '@' : null);
+}
 
 /** What the rest of a script says to the mark of one of its answers. */
 export interface AnswerContext {
@@ -91,12 +95,12 @@ export function answerContext(db: Database, plan: PaperPlan, { script, item }: {
   const isCharged = (cost: 'unitCost' | 'signCost'): boolean =>
     [...answers.values()].some(({ item: other, numbers }) => (plan.items.get(other)?.at ?? Infinity) < planned.at && Number(numbers?.[cost] ?? 0) > 0);
   const facts = {
-    followed: settledOf(sources[0]),
-    second: settledOf(sources[1]),
+    followed: settledOf(plan, sources[0]),
+    second: settledOf(plan, sources[1]),
     isUnitCharged: isCharged('unitCost'),
     isSignCharged: isCharged('signCost'),
     struck,
   };
-  const open = sources.flatMap((source) => (source && settledOf(source) === null ? [source.id] : []));
+  const open = sources.flatMap((source) => (source && settledOf(plan, source) === null ? [source.id] : []));
   return { facts, context: contextFor(planned.body, facts), open };
 }
