@@ -15,7 +15,7 @@ const looks = (scripts: number): number[] => Array.from({ length: scripts }, (_,
 /** Every item of a paper, looked at while reading goes on until its alarm is raised. */
 export function alarmsOf(paper: SimulatedPaper, limits?: AlarmLimits): readonly ItemAlarm[] {
   const rights = paper.scripts.map((script) => paper.items.map((item, at) => shareOf(script[at] ?? null, item)));
-  const columns = paper.items.map((item, at) => readingsOf(paper, rights, at));
+  const columns = paper.items.map((_, at) => readingsOf(paper, rights, at));
   const facilities = new Map(looks(paper.scripts.length).map((n) => [n, columns.map((column) => mean(column.slice(0, n).map(({ share }) => share)))]));
   return paper.items.map((item, at) => {
     const readings = columns[at] ?? [];
