@@ -50,7 +50,7 @@ export function averageRunLength(question: PauseQuestion): number {
 const BLOCK = 100;
 
 /** A chance that no figure would show; leaving such places out keeps the chain from crawling through denormal numbers. */
-const NEVER = 1e-22;
+const NEVER = 1e-18;
 
 /** Ways the misses can lie in the window of known answers, short of a pause, and which follows a match or a miss; -1 is a pause. */
 interface Windows {
@@ -91,31 +91,38 @@ type Step = () => number;
 
 /** Chances of each window and count, short of a pause; what is gone has been paused. */
 function chainOf({ errorRate, knownShare, rule = PAUSE_RULE }: PauseQuestion): Step {
-  const windows = windowsOf(rule);
+  const { afterMatch, afterMiss } = windowsOf(rule);
   const { limit } = rule;
-  let now = new Float64Array(windows.afterMatch.length * limit);
+  const counts = Array.from({ length: limit }, (_, count) => count);
+  const up = Int32Array.from(counts, (count) => nextCount(count, true, rule));
+  const down = Int32Array.from(counts, (count) => nextCount(count, false, rule));
+  const [missKnown, matchKnown] = [errorRate * knownShare, (1 - errorRate) * knownShare];
+  const [missPair, matchPair] = [errorRate * (1 - knownShare), (1 - errorRate) * (1 - knownShare)];
+  let now = new Float64Array(afterMatch.length * limit);
   let next = new Float64Array(now.length);
   now[0] = 1;
-  // A place and its chance; what it returns is 0 for a pause.
-  const put = (way: number, count: number, chance: number): number => {
-    if (way < 0 || count >= limit) return 0;
-    next[way * limit + count]! += chance;
-    return chance;
-  };
-  // NOTE: tens of thousands of places a step; a loop by index is several times faster than forEach.
+  // NOTE: tens of thousands of places a step; loops by index are several times faster than forEach.
   return () => {
-    let reading = 0;
+    let paused = 0;
+    let before = 0;
     next.fill(0);
-    for (let at = 0; at < now.length; at += 1) {
-      const chance = now[at]!;
-      if (chance < NEVER) continue;
-      const way = Math.floor(at / limit);
-      const miss = nextCount(at % limit, true, rule);
-      const match = nextCount(at % limit, false, rule);
-      reading += put(windows.afterMiss[way]!, miss, chance * errorRate * knownShare) + put(windows.afterMatch[way]!, match, chance * (1 - errorRate) * knownShare);
-      reading += put(way, miss, chance * errorRate * (1 - knownShare)) + put(way, match, chance * (1 - errorRate) * (1 - knownShare));
+    for (let way = 0; way < afterMatch.length; way += 1) {
+      const [own, match, miss] = [way * limit, afterMatch[way]! * limit, afterMiss[way]! * limit];
+      for (let count = 0; count < limit; count += 1) {
+        const chance = now[own + count]!;
+        if (chance < NEVER) continue;
+        const more = up[count]!;
+        const less = down[count]!;
+        before += chance;
+        next[own + less]! += chance * matchPair;
+        next[match + less]! += chance * matchKnown;
+        if (more < limit) next[own + more]! += chance * missPair;
+        else paused += chance * missPair;
+        if (more < limit && miss >= 0) next[miss + more]! += chance * missKnown;
+        else paused += chance * missKnown;
+      }
     }
     [now, next] = [next, now];
-    return reading;
+    return before - paused;
   };
 }
