@@ -50,6 +50,13 @@ describe('each ground, with its evidence', () => {
     expect(names(readings.map((one) => ({ ...one, rest: 1 - (one.rest ?? 0) })))).toEqual([]);
   });
 
+  it('a correlation that only just lies below 0 is no ground: with so few it might be above', () => {
+    // By hand, from the table 10 10 / 9 11: r = -20 / sqrt(20 x 20 x 19 x 21) = -0.050.
+    const restOf = (at: number, isKey: boolean): number => (at < (isKey ? 10 : 9) ? 0.5 : 0.6);
+    const readings = [...times(20, (at) => key({ rest: restOf(at, true) })), ...times(20, (at) => read(`${at}.00`, { rest: restOf(at, false) }))];
+    expect(names(readings)).toEqual([]);
+  });
+
   it('facility: 1 of 40 where the others have 0.6 in the middle', () => {
     const readings = [key({ rest: null }), ...times(39, (at) => read(`${at}.00`, { rest: null }))];
     expect(names(readings, [0.5, 0.6, 0.8])).toEqual(['facility']);
