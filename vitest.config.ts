@@ -3,7 +3,7 @@ import { defineConfig } from 'vitest/config';
 export default defineConfig({
   test: {
     projects: [
-      { test: { name: 'unit', include: ['shared/**/*.test.ts', 'db/**/*.test.ts', 'server/**/*.test.ts'], testTimeout: 30_000 } },
+      { test: { name: 'unit', include: ['shared/**/*.test.ts', 'db/**/*.test.ts', 'server/**/*.test.ts', 'tests/simulations/**/*.test.ts'], testTimeout: 30_000 } },
       { test: { name: 'api', include: ['tests/api/**/*.test.ts'], testTimeout: 60_000, hookTimeout: 60_000 } },
       {
         test: {
