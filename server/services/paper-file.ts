@@ -1,9 +1,10 @@
+import { createHash } from 'node:crypto';
 import { inTransaction, type Database } from '../../db/client';
 import { updateSitting } from '../../db/queries/courses';
 import { boxesOfLayout, findLayout, layoutPages } from '../../db/queries/layouts';
 import { draftedItems } from '../../db/queries/papers';
 import type { SentBox } from '../../shared/contracts/layouts';
-import { paperSchemaPath, type PaperFile } from '../../shared/contracts/paper-file';
+import { paperSchemaPath, type FileItem, type PaperFile } from '../../shared/contracts/paper-file';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
 import { conflict, invalidRequest } from '../errors';
@@ -30,6 +31,11 @@ function fileOf(db: Database, sittingId: string, title: string): PaperFile {
   };
 }
 
+/** Names a paper by all that its file says, so that an edit of any item or region is noticed. */
+export const paperMark = (file: PaperFile): string => createHash('sha256').update(JSON.stringify(file)).digest('hex').slice(0, 32);
+
+export const paperMarkOf = (context: Context, sittingId: string, title: string): string => paperMark(fileOf(context.db, sittingId, title));
+
 export function paperFileFor(context: Context, actor: Actor, sittingId: string): PaperFile {
   const { sitting } = requireSitting(context, actor, sittingId, ['lead', 'external']);
   return fileOf(context.db, sittingId, sitting.title);
@@ -51,18 +57,30 @@ const boxesFor = ({ boxes }: PaperFile, ids: readonly string[]): SentBox[] =>
     return { ...box, item: id };
   });
 
+/** Throws unless the paper is open and still what the lead saw of it. */
+export function requireSeenPaper(context: Context, actor: Actor, sittingId: string, mark: string): void {
+  const { sitting } = requireSitting(context, actor, sittingId, ['lead']);
+  requireOpenPaper(context, sitting);
+  const file = fileOf(context.db, sittingId, sitting.title);
+  if (paperMark(file) !== mark) throw conflict('Someone changed this paper meanwhile. The file was not taken.', file);
+}
+
+/** The items of a paper give way to others, in their order; the boxes of those that go, go too. Inside a transaction. */
+export function replaceItems(context: Context, actor: Actor, sittingId: string, items: readonly FileItem[]): string[] {
+  for (const { item } of draftedItems(context.db, sittingId).reverse()) removeItem(context, actor, item.id, item.rev);
+  const ids: string[] = [];
+  for (const item of items) ids.push(createItem(context, actor, sittingId, draftOfFileItem(item, (place) => ids[place - 1] ?? '')).id);
+  return ids;
+}
+
 /** Replaces items and regions of an open paper by those of a file, all or nothing; keys are worked here. */
-export function takePaperFile(context: Context, actor: Actor, sittingId: string, rev: number, file: PaperFile): PaperFile {
+export function takePaperFile(context: Context, actor: Actor, sittingId: string, mark: string, file: PaperFile): PaperFile {
   const { db } = context;
   requireSitting(context, actor, sittingId, ['lead']);
   inTransaction(db, () => {
-    const { sitting } = requireSitting(context, actor, sittingId, ['lead']);
-    requireOpenPaper(context, sitting);
-    if (sitting.rev !== rev) throw conflict('Someone changed this sitting meanwhile. The file was not taken.', fileOf(db, sittingId, sitting.title));
+    requireSeenPaper(context, actor, sittingId, mark);
     requireSoundItems(file);
-    for (const { item } of draftedItems(db, sittingId).reverse()) removeItem(context, actor, item.id, item.rev);
-    const ids: string[] = [];
-    for (const item of file.items) ids.push(createItem(context, actor, sittingId, draftOfFileItem(item, (place) => ids[place - 1] ?? '')).id);
+    const ids = replaceItems(context, actor, sittingId, file.items);
     const layout = findLayout(db, sittingId, drawnOrdinal);
     if (layout || file.pages.length > 0 || file.boxes.length > 0) saveLayout(context, actor, sittingId, layout?.rev ?? 0, { pages: file.pages, boxes: boxesFor(file, ids) });
     updateSitting(db, sittingId, {});

@@ -3,6 +3,7 @@ import { create } from 'xmlbuilder2';
 import { draftedItems } from '../../db/queries/papers';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
+import { carriedOf } from './qti-carried';
 import { qtiItem, type PackedItem } from './qti-item';
 import { requireSitting } from './sitting-access';
 
@@ -28,13 +29,15 @@ function manifest(identifier: string, items: readonly PackedItem[]): string {
   return document.end({ prettyPrint: true });
 }
 
-/** The numeric items of a paper as a QTI 3.0 package (1EdTech): a manifest and one file an item, keys and tolerances in it. */
+/** The items of a paper as a QTI 3.0 package (1EdTech): a manifest and one file an item, keys and tolerances in it. */
 export function paperQti(context: Context, actor: Actor, sittingId: string): { fileName: string; bytes: Buffer } {
   const { sitting } = requireSitting(context, actor, sittingId, ['lead']);
   const paper = `paper-${sitting.printNumber}`;
   const items = draftedItems(context.db, sittingId)
-    .filter(({ scheme }) => scheme.kind === 'numeric')
-    .map(({ item, scheme }): PackedItem => ({ identifier: `${paper}-item-${item.number}`, number: item.number, prompt: item.prompt, scheme }));
+    .flatMap(({ item, scheme }): PackedItem[] => {
+      const carried = carriedOf(scheme, item.prompt);
+      return carried ? [{ identifier: `${paper}-item-${item.number}`, number: item.number, prompt: item.prompt, ...carried }] : [];
+    });
   const files = { 'imsmanifest.xml': strToU8(manifest(paper, items)), ...Object.fromEntries(items.map((item) => [pathOf(item), strToU8(qtiItem(item))])) };
   return { fileName: `${paper}.qti.zip`, bytes: Buffer.from(zipSync(files, { mtime: context.clock.now() })) };
 }

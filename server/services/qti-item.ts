@@ -4,7 +4,10 @@ import { ratio, toDecimals } from '../../shared/chemistry/exact';
 import { GRAINS_PER_MARK } from '../../shared/marking/grains';
 import { itemLabel } from '../../shared/marking/item-label';
 import type { ItemScheme } from '../../shared/marking/scheme';
+import type { QtiLeavesOut } from '../../shared/marking/qti-leaves-out';
+import { carriedAttribute, type Carried } from './qti-carried';
 import { claimsOf, type Claim } from './qti-claims';
+import { declarePrinted, printedClaims, printedCondition, printedInteraction } from './qti-printed';
 
 /** Namespace and schema of QTI 3.0 items, and those of its packages: 1EdTech, examples of QTI 3.0. */
 const itemSpace = 'http://www.imsglobal.org/xsd/imsqtiasi_v3p0';
@@ -36,26 +39,57 @@ const score = (parent: XMLBuilder, grains: number): void => void baseValue(paren
 
 function processing(item: XMLBuilder, scheme: ItemScheme): void {
   const chain = item.ele('qti-response-processing').ele('qti-response-condition');
-  claimsOf(scheme).forEach((claim, index) => {
+  const { printed } = scheme;
+  const branches = printed
+    ? printedClaims(scheme, printed).map((claim) => ({ grains: claim.grains, test: (branch: XMLBuilder) => printedCondition(branch, claim, scheme, printed) }))
+    : claimsOf(scheme).map((claim) => ({ grains: claim.grains, test: (branch: XMLBuilder) => condition(branch, claim) }));
+  branches.forEach(({ grains, test }, index) => {
     const branch = chain.ele(index === 0 ? 'qti-response-if' : 'qti-response-else-if');
-    condition(branch, claim);
-    score(branch, claim.grains);
+    test(branch);
+    score(branch, grains);
   });
   score(chain.ele('qti-response-else'), 0);
 }
 
-export interface PackedItem {
+export interface PackedItem extends Carried {
   readonly identifier: string;
   readonly number: number;
   readonly prompt: string;
-  readonly scheme: ItemScheme;
+}
+
+const leftOutWords: Readonly<Record<QtiLeavesOut, string>> = {
+  'follow-through': 'marks for a value worked from the own answer to an earlier item',
+  'method-marks': 'method marks, which a reader gives',
+  'unit-cost': 'what a unit costs once a paper',
+  'sign-cost': 'what a sign costs once a paper',
+};
+
+function declare(item: XMLBuilder, scheme: ItemScheme): void {
+  const most = marksDecimal(scheme.maxGrains);
+  if (scheme.printed) declarePrinted(item, scheme, scheme.printed);
+  else item.ele('qti-response-declaration', { identifier: 'RESPONSE', cardinality: 'single', 'base-type': 'float' }).ele('qti-correct-response').ele('qti-value').txt(scheme.key.text);
+  item.ele('qti-outcome-declaration', { identifier: 'SCORE', cardinality: 'single', 'base-type': 'float', 'normal-minimum': '0', 'normal-maximum': most });
+  item.ele('qti-outcome-declaration', { identifier: 'MAXSCORE', cardinality: 'single', 'base-type': 'float' }).ele('qti-default-value').ele('qti-value').txt(most);
+}
+
+function interaction(body: XMLBuilder, { scheme, draft }: PackedItem): void {
+  const carried = { [carriedAttribute]: JSON.stringify({ ...draft, prompt: draft.prompt === null ? null : '' }) };
+  if (scheme.printed) {
+    printedInteraction(body, scheme, scheme.printed, carried);
+    return;
+  }
+  const [unit] = scheme.units;
+  const answer = body.ele('p');
+  answer.ele('qti-text-entry-interaction', { 'response-identifier': 'RESPONSE', 'expected-length': '12', ...carried });
+  if (unit !== undefined) answer.txt(` ${unit}`);
 }
 
 /**
- * One numeric item as a QTI 3.0 assessment item with a text entry. A float has no trailing zeros, so places that were written
- * or left out decide nothing here: 6.1 and 6.10 are one number.
+ * One item as a QTI 3.0 assessment item: a text entry, a choice or an order. A float has no trailing zeros, so places that were
+ * written or left out decide nothing here: 6.1 and 6.10 are one number. What is left out stands in a comment.
  */
-export function qtiItem({ identifier, number, prompt, scheme }: PackedItem): string {
+export function qtiItem(packed: PackedItem): string {
+  const { identifier, number, prompt, scheme, leftOut } = packed;
   const document = create({ version: '1.0', encoding: 'UTF-8', invalidCharReplacement: '' });
   const item = document.ele(itemSpace, 'qti-assessment-item', {
     identifier,
@@ -65,15 +99,11 @@ export function qtiItem({ identifier, number, prompt, scheme }: PackedItem): str
     'xml:lang': 'en-GB',
   });
   item.att(instanceSpace, 'xsi:schemaLocation', `${itemSpace} ${itemSchema}`);
-  item.ele('qti-response-declaration', { identifier: 'RESPONSE', cardinality: 'single', 'base-type': 'float' }).ele('qti-correct-response').ele('qti-value').txt(scheme.key.text);
-  item.ele('qti-outcome-declaration', { identifier: 'SCORE', cardinality: 'single', 'base-type': 'float', 'normal-minimum': '0', 'normal-maximum': marksDecimal(scheme.maxGrains) });
-  item.ele('qti-outcome-declaration', { identifier: 'MAXSCORE', cardinality: 'single', 'base-type': 'float' }).ele('qti-default-value').ele('qti-value').txt(marksDecimal(scheme.maxGrains));
+  if (leftOut.length > 0) item.com(` Left out: ${leftOut.map((part) => leftOutWords[part]).join('; ')}. `);
+  declare(item, scheme);
   const body = item.ele('qti-item-body');
   body.ele('p').txt(prompt);
-  const [unit] = scheme.units;
-  const answer = body.ele('p');
-  answer.ele('qti-text-entry-interaction', { 'response-identifier': 'RESPONSE', 'expected-length': '12' });
-  if (unit !== undefined) answer.txt(` ${unit}`);
+  interaction(body, packed);
   processing(item, scheme);
   return document.end({ prettyPrint: true });
 }

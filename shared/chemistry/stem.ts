@@ -12,7 +12,8 @@ const precision = (decimals: number, figures: number | null): string => {
   return decimals === 0 ? 'to the nearest whole number' : `to ${counted(decimals, 'decimal')}`;
 };
 
-const electronOf = ({ symbol, charge, electron, configuration }: ElectronAsked): string => {
+/** One electron in words, with its configuration where one was typed: "a 2p electron of an O atom". Ours, no source; no units. */
+export const electronText = ({ symbol, charge, electron, configuration }: ElectronAsked): string => {
   const typed = configuration === undefined || configuration.trim() === '' ? '' : ` with the configuration ${configuration.trim()}`;
   return `a ${electron} electron of ${withArticle(symbol, charge)}${typed}`;
 };
@@ -29,12 +30,12 @@ const quantityOf = ({ quantity }: Pick<AskedInput, 'quantity'>): string => quant
 
 function wanted(asked: AskedInput): string {
   const { quantity, other, symbol, charge, radiusAngstrom, countsItself } = asked;
-  if (quantity === 'difference' && other) return `Z_eff for ${electronOf(asked)} less Z_eff for ${electronOf(other)}`;
+  if (quantity === 'difference' && other) return `Z_eff for ${electronText(asked)} less Z_eff for ${electronText(other)}`;
   if (quantity === 'electronegativity') {
     const itself = countsItself === undefined ? '' : `, the electron itself ${countsItself ? 'counted' : 'not counted'}`;
     return `the Allred-Rochow electronegativity of ${speciesText(symbol, charge)} from Z_eff for a ${asked.electron} electron${itself}, with r = ${radiusAngstrom ?? ''} Å`;
   }
-  return `${quantityOf(asked)} for ${electronOf(asked)}`;
+  return `${quantityOf(asked)} for ${electronText(asked)}`;
 }
 
 /**
@@ -54,7 +55,7 @@ const questions: Readonly<Record<ChoiceKind, (quantity: string) => string>> = {
 /** The same for a choice or an order, the options numbered: "By Slater’s rules, which of these has the greatest value of Z_eff? Write its number. 1: a 2p electron of an O atom; 2: a 2p electron of an F atom." */
 export function proposedChoiceStem({ kind, quantity, convention, options }: ChoiceAsked): string {
   const question = questions[kind](quantityOf({ quantity }).replace(/^the /, ''));
-  const listed = options.map((option, index) => `${index + 1}: ${electronOf(option)}`).join('; ');
+  const listed = options.map((option, index) => `${index + 1}: ${electronText(option)}`).join('; ');
   const capital = question.charAt(0).toUpperCase() + question.slice(1);
   return `${opening(convention, question, capital)} ${listed}.`;
 }

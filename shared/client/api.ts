@@ -30,7 +30,10 @@ interface Sent {
   readonly method?: 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE';
   readonly body?: unknown;
   readonly form?: FormData;
-  readonly rev?: number;
+  /** Bytes of a file as they are, with their media type. */
+  readonly file?: { readonly bytes: Blob; readonly type: string };
+  /** What the write saw: a rev, or the tag that a paper came with. */
+  readonly rev?: number | string;
   readonly idempotencyKey?: string;
   readonly signal?: AbortSignal | null;
 }
@@ -49,15 +52,22 @@ export async function api<Answer>(path: string, sent: Sent = {}): Promise<Answer
   return (await response.json()) as Answer;
 }
 
+/** The same with the ETag it came with, for a write that has to name what it saw. */
+export async function apiTagged<Answer>(path: string): Promise<{ readonly answer: Answer; readonly tag: string }> {
+  const response = await answered(path, {});
+  return { answer: (await response.json()) as Answer, tag: response.headers.get('ETag') ?? '' };
+}
+
 /** The same for a file. */
 export const apiBlob = async (path: string): Promise<Blob> => (await answered(path, {})).blob();
 
 async function answered(path: string, sent: Sent): Promise<Response> {
   const headers: Record<string, string> = {};
   if (sent.body !== undefined) headers['Content-Type'] = 'application/json';
+  if (sent.file !== undefined) headers['Content-Type'] = sent.file.type;
   if (sent.rev !== undefined) headers['If-Match'] = String(sent.rev);
   if (sent.idempotencyKey !== undefined) headers['Idempotency-Key'] = sent.idempotencyKey;
-  const body = sent.form ?? (sent.body === undefined ? undefined : JSON.stringify(sent.body));
+  const body = sent.form ?? sent.file?.bytes ?? (sent.body === undefined ? undefined : JSON.stringify(sent.body));
   let response: Response;
   try {
     response = await fetch(apiUrl(path), {

@@ -2,7 +2,7 @@ import { keepPreviousData, queryOptions, useMutation, useQuery, useQueryClient }
 import type { getItemBank } from '../contracts/item-bank';
 import type { getItem, ItemDraft, listItems, lockPaper, spotTest, workKey } from '../contracts/items';
 import type { ResponseOf, SentBodyOf } from '../contracts/route';
-import { api, ApiError } from './api';
+import { api } from './api';
 import { staleTimes } from './query-client';
 import { progressQueryOptions, sittingQueryOptions } from './sittings';
 
@@ -122,24 +122,5 @@ export function useLockPaper(sittingId: string) {
           client.invalidateQueries({ queryKey }),
         ),
       ),
-  });
-}
-
-/** Replaces the paper by what a file holds. Throws before sending when the file is no JSON. */
-export function useTakePaperFile(sittingId: string) {
-  const client = useQueryClient();
-  return useMutation({
-    mutationFn: async ({ rev, file }: { rev: number; file: File }) => {
-      let body: unknown;
-      try {
-        body = JSON.parse(await file.text());
-      } catch {
-        throw new ApiError('invalid_request', 'This file is not JSON. Choose one that was saved here.');
-      }
-      return api<unknown>(`/sittings/${sittingId}/paper.json`, { method: 'PUT', rev, body });
-    },
-    onSettled: () => {
-      for (const queryKey of [itemsQueryOptions(sittingId).queryKey, ['layout', sittingId], progressQueryOptions(sittingId).queryKey, sittingQueryOptions(sittingId).queryKey]) void client.invalidateQueries({ queryKey });
-    },
   });
 }

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { boxUses } from './enums';
+import { boxUses, itemKinds } from './enums';
 import { itemDraft } from './items';
 import { idParams } from './parts';
 import { defineRoute } from './route';
@@ -40,7 +40,7 @@ export const getPaperFile = defineRoute({
 export const putPaperFile = defineRoute({
   method: 'put',
   path: '/sittings/:id/paper.json',
-  summary: 'Replace the items and regions of an open paper by those of a file. Names the rev of the sitting it saw; nothing changes when anything is wrong.',
+  summary: 'Replace the items and regions of an open paper by those of a file. Names the ETag that paper.json came with, in If-Match; nothing changes when anything is wrong.',
   access: { who: 'course', roles: ['lead'] },
   params: idParams,
   body: paperFile,
@@ -67,10 +67,38 @@ export const getPaperPdf = defineRoute({
 export const getPaperQti = defineRoute({
   method: 'get',
   path: '/sittings/:id/paper.qti.zip',
-  summary: 'The numeric items as a QTI 3.0 package: a manifest and one text entry item a file, with keys and tolerances.',
+  summary: 'The items as a QTI 3.0 package: a manifest and one file an item, text entry, choice or order, with keys and what scores by them.',
   access: { who: 'course', roles: ['lead'] },
   params: idParams,
   bytes: 'application/zip',
 });
 
-export const paperFileRoutes = { getPaperFile, putPaperFile, getPaperSchema, getPaperPdf, getPaperQti };
+/** What a QTI package would bring, and what of it is refused, by file and item. */
+export const qtiReading = z.object({
+  items: z.array(z.object({ file: z.string(), identifier: z.string(), label: z.string(), kind: z.enum(itemKinds), marks: z.string(), prompt: z.string(), isOwn: z.boolean() })),
+  refused: z.array(z.object({ file: z.string(), identifier: z.string(), message: z.string() })),
+});
+export type QtiReading = z.infer<typeof qtiReading>;
+
+export const previewPaperQti = defineRoute({
+  method: 'post',
+  path: '/sittings/:id/paper.qti.zip/preview',
+  summary: 'What a QTI 3.0 package would bring, and the mark of the paper that would give way. Stores nothing.',
+  access: { who: 'course', roles: ['lead'] },
+  params: idParams,
+  accepts: 'application/zip',
+  response: qtiReading.extend({ mark: z.string() }),
+});
+
+export const putPaperQti = defineRoute({
+  method: 'put',
+  path: '/sittings/:id/paper.qti.zip',
+  summary: 'Replace the items of an open paper by those of a QTI 3.0 package; their boxes go. Names the mark of the paper in If-Match. Nothing changes when any item is refused, unless `rest` asks to take the others.',
+  access: { who: 'course', roles: ['lead'] },
+  params: idParams,
+  query: z.object({ rest: z.enum(['none', 'take']).default('none') }),
+  accepts: 'application/zip',
+  response: qtiReading,
+});
+
+export const paperFileRoutes = { getPaperFile, putPaperFile, getPaperSchema, getPaperPdf, getPaperQti, previewPaperQti, putPaperQti };

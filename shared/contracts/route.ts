@@ -31,7 +31,7 @@ export interface RouteContract<
   /** Media type of an answer that is not JSON. */
   readonly bytes?: string;
   /** Media type of a request that is not JSON. */
-  readonly accepts?: 'multipart/form-data';
+  readonly accepts?: 'multipart/form-data' | 'application/zip';
   /** 200 unless said; 204 where nothing is sent back. */
   readonly status?: 200 | 201 | 202 | 204;
 }

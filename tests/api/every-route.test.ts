@@ -1,3 +1,4 @@
+import { strToU8, zipSync } from 'fflate';
 import type { Agent } from 'supertest';
 import { v7 as uuidv7 } from 'uuid';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
@@ -88,7 +89,7 @@ const ownOnly = new Set(['endLease', 'recordReading', 'takeBackReading', 'takeBa
 /** Nothing was uploaded here yet, so those let in find nothing. */
 const notThereYet = new Set(['getSample', 'getPageImageFile', 'placePage', 'turnPage', 'getNumberStrip', 'readNumber', 'getByHand', 'typeByHand']);
 /** Bytes in, so that the guard runs after the transport; tested beside their resource. */
-const takesBytes = (contract: RouteContract) => contract.accepts !== undefined;
+const takesBytes = (contract: RouteContract) => contract.accepts === 'multipart/form-data';
 
 const rolesOf = (name: CastName): readonly GuardRole[] => [...cast[name].roles, ...('isOfficer' in cast[name] ? (['officer'] as const) : [])];
 
@@ -113,6 +114,7 @@ describe('every route answers every role as its contract says', () => {
     const sent = agent[contract.method](addressOf(contract, world.ids)).set('If-Match', '1');
     const queries: Record<string, object> = { getRecentReadings: { sitting: world.ids.sittings }, getDeskStanding: { sitting: world.ids.sittings }, getCrop: { box: uuidv7() } };
     const query = queries[id] ?? {};
+    if (contract.accepts === 'application/zip') return sent.query(query).set('Content-Type', contract.accepts).send(Buffer.from(zipSync({ 'imsmanifest.xml': strToU8('<manifest/>') })));
     return sent.query(query).send((world.bodies[id] ?? {}) as object);
   };
 

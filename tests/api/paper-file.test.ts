@@ -1,7 +1,8 @@
 import { PDFDocument } from 'pdf-lib';
 import type { Agent } from 'supertest';
+import { v7 as uuidv7 } from 'uuid';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { auditEntry } from '../../db/schema';
+import { auditEntry, membership } from '../../db/schema';
 import type { PaperFile } from '../../shared/contracts/paper-file';
 import { buildPaper, itemDraft } from '../support/paper';
 import { startTestServer, type TestServer } from '../support/test-server';
@@ -20,8 +21,8 @@ describe('a paper as a file', () => {
     itemDraft('Mg', '2p', { asked: { symbol: 'Mg', charge: 2, electron: '2p', quantity: 'sigma', convention: 'slater' }, prompt: 'Find σ by Slater’s rules, to two decimals.' }),
   ];
   const fileOf = async (sittingId: string) => (await lead.get(`/api/sittings/${sittingId}/paper.json`).expect(200)).body as PaperFile;
-  const revOf = async (sittingId: string) => String(((await lead.get(`/api/sittings/${sittingId}`)).body as { rev: number }).rev);
-  const put = async (sittingId: string, file: unknown) => lead.put(`/api/sittings/${sittingId}/paper.json`).set('If-Match', await revOf(sittingId)).send(file as object);
+  const tagOf = async (sittingId: string) => (await lead.get(`/api/sittings/${sittingId}/paper.json`)).headers.etag ?? '';
+  const put = async (sittingId: string, file: unknown) => lead.put(`/api/sittings/${sittingId}/paper.json`).set('If-Match', await tagOf(sittingId)).send(file as object);
 
   it('goes out and comes in as it was, keys worked anew', async () => {
     const from = buildPaper(server, { drafts, locked: false });
@@ -54,14 +55,29 @@ describe('a paper as a file', () => {
   it('is not taken over a file that another lead took meanwhile, and leaves its acts in the trail', async () => {
     const { sittingId } = buildPaper(server, { locked: false });
     const file = await fileOf(sittingId);
-    const seen = await revOf(sittingId);
-    await lead.put(`/api/sittings/${sittingId}/paper.json`).set('If-Match', seen).send(file).expect(200);
+    const seen = await tagOf(sittingId);
+    await lead.put(`/api/sittings/${sittingId}/paper.json`).set('If-Match', seen).send({ ...file, items: [itemDraft('Fe', '4s'), itemDraft()] }).expect(200);
     const late = await lead.put(`/api/sittings/${sittingId}/paper.json`).set('If-Match', seen).send({ ...file, items: [] }).expect(409);
-    expect((late.body as { error: { current: unknown } }).error.current).toEqual(file);
+    expect((late.body as { error: { current: unknown } }).error.current).toMatchObject({ items: [itemDraft('Fe', '4s'), itemDraft()] });
     await lead.put(`/api/sittings/${sittingId}/paper.json`).send(file).expect(400);
     const acts = server.context.db.select().from(auditEntry).all().filter(({ sitting }) => sitting === sittingId).map(({ act }) => act);
     expect(acts.filter((act) => act === 'item-removed')).toHaveLength(2);
     expect(acts.at(-1)).toBe('layout-changed');
+  });
+
+  it('is not taken over an edit of one item that another lead made since it was read', async () => {
+    const { sittingId, items } = buildPaper(server, { locked: false });
+    const file = await fileOf(sittingId);
+    const seen = await tagOf(sittingId);
+    server.context.db.insert(membership).values({ id: uuidv7(), person: server.people.readerTwo, course: server.courseId, role: 'lead', from: 0 }).run();
+    const other = await server.signInAs('readerTwo');
+    const { rev } = (await other.get(`/api/items/${items[0]}`).expect(200)).body as { rev: number };
+    await other.put(`/api/items/${items[0]}`).set('If-Match', String(rev)).send(itemDraft('Cl', '3p', { marks: '5' })).expect(200);
+    const late = await lead.put(`/api/sittings/${sittingId}/paper.json`).set('If-Match', seen).send(file).expect(409);
+    expect(late.body).toMatchObject({ error: { message: 'Someone changed this paper meanwhile. The file was not taken.', current: { items: [{ marks: '5' }, {}] } } });
+    expect((await fileOf(sittingId)).items[0]).toMatchObject({ marks: '5' });
+    await lead.put(`/api/sittings/${sittingId}/paper.json`).set('If-Match', await tagOf(sittingId)).send(file).expect(200);
+    await lead.put(`/api/sittings/${sittingId}/paper.json`).set('If-Match', 'then?').send(file).expect(400);
   });
 
   it('is not taken by a locked paper', async () => {
@@ -98,7 +114,7 @@ describe('a paper as a file', () => {
       for (const [name, look, write] of [['readerOne', 403, 403], ['external', 200, 403], ['officer', 403, 403], ['outsider', 404, 404]] as const) {
         const agent = await server.signInAs(name);
         for (const kind of ['json', 'pdf']) await agent.get(`/api/sittings/${sittingId}/paper.${kind}`).expect(look);
-        await agent.put(`/api/sittings/${sittingId}/paper.json`).set('If-Match', '1').send({ ...file, items: [], boxes: [] }).expect(write);
+        await agent.put(`/api/sittings/${sittingId}/paper.json`).set('If-Match', 'a1').send({ ...file, items: [], boxes: [] }).expect(write);
       }
       expect(await fileOf(sittingId)).toEqual(file);
     });

@@ -6,7 +6,7 @@ import type { ItemDraft } from '../../shared/contracts/items';
 import { GRAINS_PER_MARK } from '../../shared/marking/grains';
 import { markAnswer } from '../../shared/marking/verdict';
 import { buildPaper, itemDraft } from '../support/paper';
-import { first, parsed, qtiScore, under } from '../support/qti-score';
+import { first, parsed, qtiScore, qtiScoreOf, under } from '../support/qti-score';
 import { startTestServer, type TestServer } from '../support/test-server';
 
 /** Structure from memory of 1EdTech's information models for items and packages, QTI 3.0; no claim of conformance. */
@@ -87,6 +87,53 @@ describe('a paper as a package of items', () => {
       expect(scores).toEqual(marks);
       expect(new Set(scores.map(([, score]) => score)).size).toBeGreaterThan(1);
     });
+  });
+
+  describe('choices and orders', () => {
+    const shown = (kind: 'choice' | 'order', changes: Partial<ItemDraft> = {}): ItemDraft =>
+      itemDraft('', '', {
+        kind,
+        asked: { symbol: '', charge: 0, electron: '', quantity: 'zeff', convention: 'slater' },
+        printed: { question: kind === 'choice' ? 'greatest' : 'increasing', options: ['O', 'F', 'N', 'C'].map((symbol) => ({ symbol, charge: 0, electron: '2p' })), partMarks: kind === 'order' ? [{ inPlace: 1, marks: '1/3' }, { inPlace: 2, marks: '1' }] : [] },
+        decimals: 0,
+        roundings: { downToDecimals: null, truncation: false },
+        ...changes,
+      });
+    const other = (value: string) => [{ name: 'as read out', convention: null, value, marks: '2', reason: 'said in the hall' }];
+
+    it('ask by a choice of one or an order of all, correct answer declared', async () => {
+      const { sittingId } = buildPaper(server, { drafts: [shown('choice'), shown('order')] });
+      const files = await filesOf(sittingId);
+      // Slater's rules (1930): 2p of C 3.25, N 3.90, O 4.55, F 5.20; the options are O, F, N, C.
+      expect(first(parsed(itemFile(files, 1)), 'qti-response-declaration')).toMatchObject({ '@cardinality': 'single', '@base-type': 'identifier', 'qti-correct-response': { 'qti-value': 'option-2' } });
+      expect(first(parsed(itemFile(files, 1)), 'qti-choice-interaction')).toMatchObject({ '@response-identifier': 'RESPONSE', '@max-choices': '1', '@shuffle': 'false' });
+      expect(first(parsed(itemFile(files, 2)), 'qti-response-declaration')).toMatchObject({ '@cardinality': 'ordered', 'qti-correct-response': { 'qti-value': ['option-4', 'option-3', 'option-1', 'option-2'] } });
+      expect(under(first(parsed(itemFile(files, 2)), 'qti-order-interaction'), 'qti-simple-choice')).toMatchObject([{ '@identifier': 'option-1', '#': 'a 2p electron of an O atom' }, {}, {}, {}]);
+    });
+
+    it('score every answer that can be given as the paper does, part marks included', async () => {
+      const { sittingId } = buildPaper(server, { drafts: [shown('choice', { alternatives: other('1') }), shown('order', { alternatives: other('4 3 2 1') })] });
+      const files = await filesOf(sittingId);
+      const orders = (left: string[]): string[][] => (left.length === 0 ? [[]] : left.flatMap((one) => orders(left.filter((rest) => rest !== one)).map((rest) => [one, ...rest])));
+      const answers = [['1', '2', '3', '4'].map((one) => [one]), orders(['1', '2', '3', '4'])];
+      draftedItems(server.context.db, sittingId).forEach(({ scheme }, index) => {
+        const given = answers[index] ?? [];
+        const scores = given.map((numbers) => [numbers.join(' '), qtiScoreOf(itemFile(files, index + 1), numbers.map((number) => `option-${number}`))]);
+        const marks = given.map((numbers) => [numbers.join(' '), Number(((markAnswer(scheme, { text: numbers.join(' ') }, {}).grains ?? 0) / GRAINS_PER_MARK).toFixed(6))]);
+        expect(scores).toEqual(marks);
+        expect(new Set(scores.map(([, score]) => score)).size).toBe(index === 0 ? 3 : 5);
+      });
+    });
+  });
+
+  it('says in the item what it leaves out, and is worth what its value alone gives', async () => {
+    const chained = itemDraft('Cl', '3p', { ...energy, methodMarks: [{ id: 'a', text: 'shells -- written out', marks: '1' }], unitCost: '1/2', signCost: '1/2' });
+    const { sittingId } = buildPaper(server, { drafts: [itemDraft(), chained] });
+    const files = await filesOf(sittingId);
+    expect(itemFile(files, 1)).not.toContain('Left out');
+    expect(itemFile(files, 2)).toContain('<!-- Left out: method marks, which a reader gives; what a unit costs once a paper; what a sign costs once a paper. -->');
+    expect(first(parsed(itemFile(files, 2)), 'qti-outcome-declaration')).toMatchObject({ '@normal-maximum': '2' });
+    expect(qtiScore(itemFile(files, 2), -56.25)).toBe(2);
   });
 
   describe('someone else’s', () => {

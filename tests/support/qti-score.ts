@@ -37,3 +37,25 @@ export function qtiScore(xml: string, response: number): number {
   }
   return numberIn(first(chain, 'qti-response-else'));
 }
+
+const identifiersIn = (element: unknown): string[] => under(element, 'qti-base-value').map((value) => (value as { '#': string })['#']);
+
+const sameList = (one: readonly string[], other: readonly string[]): boolean => one.length === other.length && one.every((name, index) => name === other[index]);
+
+/** qti-any-n, qti-index and qti-match of a choice or an order, from memory: at least `min` of the members match; else the same list. */
+function holds(branch: Element, response: readonly string[]): boolean {
+  const [some] = under(branch, 'qti-any-n');
+  if (!some) return sameList(identifiersIn(first(branch, 'qti-match')), response);
+  const met = under(some, 'qti-match').filter((match) => response[Number(first(match, 'qti-index')['@n']) - 1] === identifiersIn(match)[0]).length;
+  return met >= Number(some['@min']) && met <= Number(some['@max']);
+}
+
+/** The same for identifiers, in the order given. */
+export function qtiScoreOf(xml: string, response: readonly string[]): number {
+  const chain = first(parsed(xml), 'qti-response-condition');
+  for (const branch of [...under(chain, 'qti-response-if'), ...under(chain, 'qti-response-else-if')]) {
+    const { 'qti-set-outcome-value': set, ...test } = branch;
+    if (holds(test, response)) return numberIn(set);
+  }
+  return numberIn(first(chain, 'qti-response-else'));
+}

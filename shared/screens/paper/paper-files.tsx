@@ -1,12 +1,16 @@
 import { useState } from 'react';
 import { View } from 'react-native';
 import { apiUrl } from '../../client/api';
-import { useTakePaperFile } from '../../client/items';
+import { useItems } from '../../client/items';
+import { usePaperNow, useTakePaperFile } from '../../client/paper-file';
 import type { SittingView } from '../../contracts/sittings';
 import { Button, ButtonLink } from '../../ui/button';
 import { Dialog } from '../../ui/dialog';
 import { Text } from '../../ui/text';
 import { pickFile } from '../pick-file';
+import { leftOutOfQti } from '../../marking/qti-leaves-out';
+import { fileWords } from './file-words';
+import { TakeQtiButton } from './qti-dialog';
 import { words } from './words';
 
 interface PaperFilesProps {
@@ -48,8 +52,20 @@ export function PaperFiles({ sitting, items, isLead, canChange }: PaperFilesProp
           {w.saveQti}
         </Button>
       ) : null}
+      {isLead ? <LeftOutOfQti sittingId={sitting.id} /> : null}
       {canChange ? <TakeButton sitting={sitting} items={items} /> : null}
     </View>
+  );
+}
+
+/** What saving as QTI loses, item by item, before it is saved. */
+function LeftOutOfQti({ sittingId }: { sittingId: string }) {
+  const out = (useItems(sittingId).data?.items ?? []).map(({ number, draft }) => ({ number, parts: leftOutOfQti(draft) })).filter(({ parts }) => parts.length > 0);
+  if (out.length === 0) return null;
+  return (
+    <Text variant="small" tone="ink2" testID="qti-leaves-out">
+      {fileWords.leftOut(out)}
+    </Text>
   );
 }
 
@@ -62,12 +78,16 @@ export function TakeButton({ sitting, items }: Pick<PaperFilesProps, 'sitting' |
         {w.take}
       </Button>
       {file ? <TakeDialog sitting={sitting} items={items} file={file} onClose={() => setFile(null)} /> : null}
+      <TakeQtiButton sitting={sitting} items={items} />
     </>
   );
 }
 
 function TakeDialog({ sitting, items, file, onClose }: { sitting: SittingView; items: number; file: File; onClose: () => void }) {
   const take = useTakePaperFile(sitting.id);
+  const now = usePaperNow(sitting.id);
+  const paper = now.data;
+  const error = take.error ?? now.error;
   return (
     <Dialog
       title={w.takeTitle(file.name)}
@@ -75,17 +95,19 @@ function TakeDialog({ sitting, items, file, onClose }: { sitting: SittingView; i
       testID="take-dialog"
       actions={
         <>
-          <Button kind="primary" isBusy={take.isPending} onPress={() => take.mutate({ rev: sitting.rev, file }, { onSuccess: onClose })} testID="confirm-take">
-            {w.confirm}
-          </Button>
+          {now.error ? null : (
+            <Button kind="primary" isBusy={take.isPending || !paper} onPress={() => paper && take.mutate({ tag: paper.tag, file }, { onSuccess: onClose })} testID="confirm-take">
+              {w.confirm}
+            </Button>
+          )}
           <Button onPress={onClose}>{w.keep}</Button>
         </>
       }
     >
-      <Text>{w.takeText(items)}</Text>
-      {take.error ? (
+      <Text>{w.takeText(paper?.answer.items.length ?? items)}</Text>
+      {error ? (
         <Text tone="methyl" live="assertive">
-          {take.error.message}
+          {now.error ? fileWords.noPaper : error.message}
         </Text>
       ) : null}
     </Dialog>
