@@ -14,6 +14,7 @@ import { roundings } from '../../../shared/marking/rounding';
 import { scaleOf } from '../../../shared/marking/scale';
 import type { Asked, Band, ItemScheme } from '../../../shared/marking/scheme';
 import { guardOf } from '../../../shared/marking/watch/guard';
+import { silentSlips } from '../../../shared/marking/watch/silent';
 import { toldApart } from '../../../shared/marking/watch/told-apart';
 import { askedOf, electronOf, proposedPrompt } from './asked-of';
 import { alone, readDraft, type Place } from './read-draft';
@@ -85,6 +86,7 @@ export function workDraft(draft: ItemDraft, place: Place = alone): WorkedDraft {
     bands: scheme ? scheme.bands.map((band) => rangeTexts(band, scheme.key)) : draft.bands.map(() => null),
     alternatives: draft.alternatives.map((_alternative, index) => scheme?.alternatives[index]?.text ?? null),
     slips: slipsOf(asked).map(({ id, name, text, oneLine, feedback, isSilent }) => ({ id, letter: slipLetter(id), name, text, differs: oneLine, feedback, isSilent })),
+    noOccasion: silentSlips({ asked }).noOccasion.map(({ name }) => name),
     guard: drawable ? guardFindings(scheme) : [],
     untold: scheme && isNumeric ? toldApart(scheme).map(({ name, text, rounded, decimals, distance }) => ({ name, text, rounded, decimals, distance })) : [],
     others: isNumeric ? valuesByOtherConventions(asked).map(({ convention, name, text }) => ({ convention, name, text })) : [],

@@ -10,10 +10,14 @@ import { Tube } from '../../ui/tube';
 import { ChemText } from '../chem-text';
 import { words } from './words';
 
+/** A row, and how much more one has that follows another. */
 export const itemRowHeight = 58;
+export const followsHeight = 16;
 
 interface ItemRowProps {
   readonly item: ItemView;
+  /** The numbers of the items it follows. */
+  readonly follows: readonly number[];
   /** Its place while the list is being sorted. */
   readonly number: number;
   readonly isChosen: boolean;
@@ -23,7 +27,7 @@ interface ItemRowProps {
 }
 
 /** One item in the list of the paper. */
-export function ItemRow({ item, number, isChosen, grip, onKeyDown, onPress }: ItemRowProps) {
+export function ItemRow({ item, follows, number, isChosen, grip, onKeyDown, onPress }: ItemRowProps) {
   const colors = useColors();
   const { worked, maxGrains } = item;
   const marks = marksText(maxGrains);
@@ -31,7 +35,7 @@ export function ItemRow({ item, number, isChosen, grip, onKeyDown, onPress }: It
   const isSigma = item.draft.asked.quantity === 'sigma';
   const needsLook = worked.problems.length > 0;
   return (
-    <View {...({ onKeyDown } as object)} style={{ flexDirection: 'row', height: itemRowHeight, borderBottomWidth: 1, borderColor: colors.hair }}>
+    <View {...({ onKeyDown } as object)} style={{ flexDirection: 'row', height: itemRowHeight + (follows.length > 0 ? followsHeight : 0), borderBottomWidth: 1, borderColor: colors.hair }}>
       <View style={{ flex: 1 }}>
         <Pressable
           onPress={onPress}
@@ -65,6 +69,14 @@ export function ItemRow({ item, number, isChosen, grip, onKeyDown, onPress }: It
             <Text variant="readingS" tone={worked.key ? 'copper' : 'methyl'} weight={400} lines={1}>
               {key}
             </Text>
+            {follows.length > 0 ? (
+              <View style={{ flexDirection: 'row', alignItems: 'center', gap: 4 }}>
+                <Icon name="follows" size={14} tone="manganate" />
+                <Text variant="micro" tone="ink2" lines={1} testID={`follows-${number}`}>
+                  {words.follow.followsShort(follows)}
+                </Text>
+              </View>
+            ) : null}
           </View>
           {needsLook ? <Icon name="warning" tone="iodine" /> : null}
           <Tube state="given" got={maxGrains / GRAINS_PER_MARK} of={maxGrains / GRAINS_PER_MARK} />

@@ -4,6 +4,7 @@ import Svg, { Path } from 'react-native-svg';
 import type { ItemDraft, WorkedDraft } from '../../contracts/items';
 import { GRAINS_PER_MARK, marksText } from '../../marking/grains';
 import { readMarks } from '../../marking/typed-marks';
+import { watchWords } from '../../marking/watch/words';
 import { Button } from '../../ui/button';
 import { Checkbox } from '../../ui/checkbox';
 import { MarkStand } from '../../ui/mark-stand';
@@ -66,12 +67,17 @@ export function NamedSlips({ draft, worked, problemAt, onChange }: NamedSlipsPro
           </Button>
         </View>
       ) : null}
-      {silent.length > 0 ? (
-        <Text variant="small">
+      {worked.key ? (
+        <Text variant="small" testID="silent-slips">
           <Text variant="small" weight={600}>
             {w.silent}
           </Text>
-          {` ${w.silentText(silent.map(({ name }) => name), worked.key?.text ?? '')}`}
+          {` ${silent.length > 0 ? watchWords.silent(silent.map(({ name }) => name), worked.key.text) : w.none(worked.key.text)}`}
+        </Text>
+      ) : null}
+      {isWhole && worked.noOccasion.length > 0 ? (
+        <Text variant="small" tone="ink2">
+          <ChemText beside="small">{watchWords.noOccasion(worked.noOccasion)}</ChemText>
         </Text>
       ) : null}
     </View>
