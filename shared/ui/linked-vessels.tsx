@@ -1,4 +1,4 @@
-import type { ReactNode } from 'react';
+import { useRef, type ReactNode } from 'react';
 import { ScrollView, View } from 'react-native';
 import Svg, { Path } from 'react-native-svg';
 import { linkedVessels, vesselLiquid, vesselSize, vesselWalls, type VesselLink } from './linked-vessels-geometry';
@@ -25,14 +25,22 @@ interface LinkedVesselsProps {
 }
 
 const cell = 104;
-const writing = 44;
+const writing = 60;
 
 /** Vessels that run into each other by siphons, drawn downhill; each can be pressed. */
 export function LinkedVessels({ label, vessels, links, onChoose }: LinkedVesselsProps) {
   const colors = useColors();
+  const row = useRef<ScrollView>(null);
   const { width, height, places, tubes } = linkedVessels(vessels.length, links, cell);
+  const here = vessels.findIndex(({ isHere }) => isHere);
   return (
-    <ScrollView horizontal style={{ flexGrow: 0 }} contentContainerStyle={{ paddingVertical: 2, paddingHorizontal: 2 }}>
+    <ScrollView
+      ref={row}
+      horizontal
+      onLayout={({ nativeEvent }) => row.current?.scrollTo({ x: Math.max(0, (here + 0.5) * cell - nativeEvent.layout.width / 2), animated: false })}
+      style={{ flexGrow: 0 }}
+      contentContainerStyle={{ paddingVertical: 2, paddingHorizontal: 2 }}
+    >
       <View role="list" aria-label={label} style={{ width, height: height + writing }}>
         <Svg width={width} height={height} viewBox={`0 0 ${width} ${height}`} fill="none" strokeLinejoin="round" strokeLinecap="round" aria-hidden style={{ position: 'absolute', pointerEvents: 'none' }}>
           {vessels.map(({ id, isHere }, index) => {
@@ -82,7 +90,7 @@ function Vessel({ vessel, left, top, height, onPress }: { vessel: LinkedVessel; 
           </Text>
         </View>
         <View style={{ position: 'absolute', top: height, left: 4, right: 4, alignItems: 'center' }}>
-          <Text variant="small" weight={isHere ? 600 : 500} align="center" lines={1}>
+          <Text variant="small" weight={isHere ? 600 : 500} align="center" lines={2}>
             {label}
           </Text>
           <Text variant="micro" tone="ink2" align="center" lines={1}>

@@ -44,7 +44,7 @@ function KindRow({ draft, problemAt, onChange }: FieldsProps) {
   const { kind, printed } = draft;
   return (
     <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 10 }}>
-      <View style={fits(1, 110)}>
+      <View style={fits(1, 100)}>
         <Select label={words.kind} value={kind} options={kinds.map((value) => ({ value, label: words.kinds[value] }))} onChange={(next) => onChange(withKind(draft, next), 'kind')} testID="kind" />
       </View>
       {printed && kind !== 'numeric' ? (

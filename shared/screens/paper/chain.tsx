@@ -15,6 +15,9 @@ interface ChainProps {
 
 const w = words.follow;
 
+/** A species and its electron stay on one line. */
+const unbroken = (label: string): string => label.replace(/ (?=[1-7][spdf]\b)/g, '\u00a0');
+
 /** The whole chain of items that one belongs to; nothing where it belongs to none. */
 export function Chain({ items, itemId, onChoose }: ChainProps) {
   const chain = chainOf(items, itemId);
@@ -30,9 +33,9 @@ export function Chain({ items, itemId, onChoose }: ChainProps) {
           return {
             id: item.id,
             number: item.number,
-            label: <ChemText beside="small">{item.worked.label}</ChemText>,
+            label: <ChemText beside="small">{unbroken(item.worked.label)}</ChemText>,
             below: <ChemText beside="micro">{quantityShort(item.draft)}</ChemText>,
-            spoken: w.node(item.number, `${quantityShort(item.draft).replace('_', ' ')} of ${item.worked.label}`, follows.length === 0 ? '' : w.followsShort(follows)),
+            spoken: w.node(item.number, `${item.worked.label}, ${quantityShort(item.draft).replace('_', ' ')}`, follows.length === 0 ? '' : w.followsShort(follows)),
             isHere: item.id === itemId,
           };
         })}

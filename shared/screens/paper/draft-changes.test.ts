@@ -9,7 +9,8 @@ describe('another kind', () => {
   it('makes the electron the first of two options, and the first option the electron again', () => {
     const choice = withKind({ ...chlorine, bands: [{ name: 'near', kind: 'absolute', width: '0.1', marks: '1' }], prompt: 'Find it.' }, 'choice');
     expect(choice).toMatchObject({ kind: 'choice', bands: [], prompt: null, printed: { question: 'greatest', options: [{ symbol: 'Cl', electron: '3p' }, { symbol: 'Ar', electron: '3p' }] } });
-    expect(withKind(choice, 'numeric')).toMatchObject({ kind: 'numeric', printed: null, asked: { symbol: 'Cl', electron: '3p' } });
+    // As the server gives an order back: without decimals.
+    expect(withKind({ ...choice, decimals: 0, roundings: { downToDecimals: null, truncation: false } }, 'numeric')).toMatchObject({ kind: 'numeric', printed: null, decimals: 2, roundings: { downToDecimals: 1 }, asked: { symbol: 'Cl', electron: '3p' } });
   });
 
   it('keeps the options and the direction between a choice and an order', () => {

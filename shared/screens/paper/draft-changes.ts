@@ -38,16 +38,17 @@ export function neighbourElectron(symbol: string, by: 1 | -1): ElectronDraft {
 
 const electronOr = (electron: ElectronDraft): ElectronDraft => (electron.symbol === '' ? { symbol: 'C', charge: 0, electron: '2p' } : electronPart(electron));
 
-const plainRules = { bands: [], alternatives: [], slips: [], followThrough: null, unitCost: null, signCost: null } as const;
+const usualRounding = (decimals: number): number | null => (decimals > 1 ? 1 : null);
 
 /** Another kind of item: the electron becomes the first option and back; rules and wording that were of the other kind go. */
 export function withKind(draft: ItemDraft, kind: Kind): ItemDraft {
   if (kind === draft.kind) return draft;
   const { asked, printed } = draft;
-  const reset = { ...draft, ...plainRules, bands: [], alternatives: [], slips: [], prompt: null, kind };
+  const reset = { ...draft, bands: [], alternatives: [], slips: [], followThrough: null, unitCost: null, signCost: null, prompt: null, kind };
   const quantity = quantitiesFor(kind).find((known) => known === asked.quantity) ?? 'zeff';
   const convention = asked.convention === 'typed' ? 'slater' : asked.convention;
-  if (kind === 'numeric') return { ...reset, printed: null, asked: { ...electronOr(printed?.options[0] ?? electronPart(asked)), quantity, convention } };
+  const decimals = convention === 'scf' ? 4 : 2;
+  if (kind === 'numeric') return { ...reset, printed: null, decimals, roundings: { ...draft.roundings, downToDecimals: usualRounding(decimals) }, asked: { ...electronOr(printed?.options[0] ?? electronPart(asked)), quantity, convention } };
   const first = electronOr(asked);
   const options = printed?.options ?? [first, neighbourElectron(first.symbol, 1)];
   const isRising = printed?.question === 'increasing' || printed?.question === 'least';
@@ -85,8 +86,6 @@ export function withConvention(draft: ItemDraft, convention: Convention): ItemDr
   if (asked.convention !== 'typed') return { ...draft, asked: { ...asked, convention }, decimals };
   return { ...draft, asked: { ...electronOr(asked), quantity: 'zeff', convention }, decimals, roundings: { ...draft.roundings, downToDecimals: usualRounding(decimals) }, unitCost: null };
 }
-
-const usualRounding = (decimals: number): number | null => (decimals > 1 ? 1 : null);
 
 /** A key as typed so far; its decimals say how far it is rounded, unless the lead chose otherwise. */
 export function withTypedValue(draft: ItemDraft, value: string): ItemDraft {

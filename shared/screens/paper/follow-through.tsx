@@ -54,7 +54,7 @@ function Offer({ draft, worked, items, put }: PartProps) {
   const second = worked.sources.filter(({ of }) => of === 'second');
   const nearest = first.at(-1);
   if (worked.sources.length === 0) return null;
-  const named = (sources: typeof first) => sources.map(({ id, number, label }) => `item ${number}, ${quantityShort(items.find((item) => item.id === id)?.draft ?? draft)} of ${label}`);
+  const named = (sources: typeof first) => sources.map(({ id, number, label }) => w.option(number, quantityShort(items.find((item) => item.id === id)?.draft ?? draft), label));
   if (!nearest) {
     return (
       <Text variant="small" tone="ink2">

@@ -6,6 +6,7 @@ import { Button } from '../../ui/button';
 import { IconButton } from '../../ui/icon-button';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
+import { useIsPhone } from '../../ui/use-breakpoint';
 import { Vessel } from '../../ui/vessel';
 import type { FieldsProps } from './asked-fields';
 import { moved, sharesOf } from './draft-changes';
@@ -70,6 +71,7 @@ interface RowProps {
 
 function Row({ mark, index, count, problemAt, onChange, onMove, onRemove }: RowProps) {
   const colors = useColors();
+  const isPhone = useIsPhone();
   const named = mark.text.trim() === '' ? w.unnamed(index + 1) : mark.text;
   const problem = (field: string) => problemAt(`methodMarks.${index}.${field}`);
   return (
@@ -80,7 +82,7 @@ function Row({ mark, index, count, problemAt, onChange, onMove, onRemove }: RowP
       <View style={{ flexGrow: 1, flexBasis: 64, maxWidth: 120 }}>
         <Vessel label={w.marks} value={mark.marks} onChange={(marks) => onChange({ marks }, 'marks')} error={problem('marks')} variant="readingS" height={40} maxLength={16} testID={`method-marks-${index}`} />
       </View>
-      <View style={{ flexDirection: 'row', alignItems: 'center', paddingTop: 20 }}>
+      <View style={{ flexDirection: 'row', alignItems: 'center', paddingTop: isPhone ? 0 : 20, marginLeft: 'auto' }}>
         <IconButton icon="up" label={w.up(named)} isDisabled={index === 0} onPress={() => onMove(-1)} testID={`method-up-${index}`} />
         <IconButton icon="down" label={w.down(named)} isDisabled={index === count - 1} onPress={() => onMove(1)} testID={`method-down-${index}`} />
         <IconButton icon="close" label={w.remove(named)} onPress={onRemove} testID={`method-remove-${index}`} />

@@ -89,6 +89,9 @@ function problemOf(row: SlipRow, draft: ItemDraft, problemAt: (path: string) => 
   return at < 0 ? undefined : (problemAt(`slips.${at}.marks`) ?? problemAt(`slips.${at}.id`));
 }
 
+/** A sentence begins with a capital, but a symbol such as n stays what it is. */
+const capital = (text: string): string => (/^[a-z]{2}/.test(text) ? text.charAt(0).toUpperCase() + text.slice(1) : text);
+
 function Diamond({ letter }: { letter: string }) {
   const colors = useColors();
   return (
@@ -126,10 +129,10 @@ function Row({ row, maxGrains, problem, onMarks }: RowProps) {
         </View>
         <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: 200 }}>
           <Checkbox isChecked={marks !== null} onChange={(isNamed) => onMarks(isNamed ? '0' : null)} label={`${first.name}, ${text}`}>
-            <ChemText>{first.name.charAt(0).toUpperCase() + first.name.slice(1)}</ChemText>
+            <ChemText>{capital(first.name)}</ChemText>
           </Checkbox>
           <Text variant="small" tone="ink2">
-            {[first.differs, twins.length > 0 ? w.twins(twins.map(({ name }) => name)) : ''].filter((part) => part !== '').join('. ')}
+            {[first.differs, twins.length > 0 ? w.twins(twins.map(({ name }) => name)) : ''].filter((part) => part !== '').map(capital).join('. ')}
           </Text>
         </View>
         <Text variant="reading">{text}</Text>

@@ -3,6 +3,7 @@ import type { ElectronDraft } from '../../contracts/items';
 import { electronLabel } from '../../marking/item-label';
 import { plainChem } from '../chem-text-parts';
 import { Button } from '../../ui/button';
+import { Icon } from '../../ui/icon';
 import { IconButton } from '../../ui/icon-button';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
@@ -40,14 +41,14 @@ export function OptionRow({ option, index, count, value, isAnswer, problemAt, on
       <View style={{ flex: 1, minWidth: 0, gap: 4 }}>
         <ElectronRow {...fields} spokenBefore={`${w.option(number)}, `} />
         <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center' }}>
-          <View style={{ flexGrow: 1, flexDirection: 'row', alignItems: 'baseline', gap: 8 }}>
+          <View style={{ flexGrow: 1, flexDirection: 'row', alignItems: 'center', gap: 6 }}>
             <Text variant="reading" tone={isAnswer ? 'copper' : 'ink'} weight={isAnswer ? 600 : 500} testID={`option-value-${index}`}>
               {value ?? w.noValue}
             </Text>
             {isAnswer ? (
-              <Text variant="small" weight={600} tone="copper">
-                {w.answer}
-              </Text>
+              <View role="img" aria-label={w.answer}>
+                <Icon name="check" size={16} tone="copper" />
+              </View>
             ) : null}
           </View>
           <Button kind="text" isSmall isExpanded={isOwn} label={`${w.option(number)}: ${isOwn ? w.ground : w.configuration}`} onPress={() => onChange({ configuration: isOwn ? undefined : groundText(option) }, 'configuration')}>

@@ -6,6 +6,7 @@ import { SvgWords } from '../../ui/svg-words';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
 import { line } from '../../ui/tokens';
+import { useIsPhone } from '../../ui/use-breakpoint';
 import { optionMarks } from './option-marks';
 import { words } from './words';
 
@@ -16,6 +17,7 @@ const ring = 13;
 /** The printed options on one line by their value: what is to be chosen or ordered, and how near the values lie. */
 export function OptionsScale({ draft, worked }: { readonly draft: ItemDraft; readonly worked: WorkedDraft }) {
   const colors = useColors();
+  const isPhone = useIsPhone();
   const [width, setWidth] = useState(0);
   const options = draft.printed?.options ?? [];
   const marks = optionMarks(worked.options.slice(0, options.length), width);
@@ -44,7 +46,7 @@ export function OptionsScale({ draft, worked }: { readonly draft: ItemDraft; rea
           </Svg>
         )}
       </View>
-      <Text variant="small" tone={worked.key ? 'copper' : 'ink2'} weight={worked.key ? 600 : 400}>
+      <Text variant="small" tone={worked.key ? 'copper' : 'ink2'} weight={worked.key ? 600 : 400} style={isPhone ? { paddingHorizontal: 8, paddingBottom: 10 } : null}>
         {worked.key ? words.options.answerOf(worked.key.text) : words.options.noAnswer}
       </Text>
     </View>

@@ -141,7 +141,7 @@ function PaperPanes({ sitting, items, lockedAt, itemId }: PanesProps) {
   }
   return (
     <View style={{ flex: 1, flexDirection: 'row' }}>
-      <View style={{ width: 216, backgroundColor: colors.glass, borderRightWidth: 1, borderColor: colors.hair }}>{list}</View>
+      <View style={{ width: 232, backgroundColor: colors.glass, borderRightWidth: 1, borderColor: colors.hair }}>{list}</View>
       <View style={{ flex: 1, minWidth: 0 }}>{editor}</View>
     </View>
   );

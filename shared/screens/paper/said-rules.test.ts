@@ -10,7 +10,7 @@ it('tells what an item asks for, with the configuration that its star stands for
   const excited = view(1, { asked: { symbol: 'Ne', charge: 0, electron: '3s', configuration: '1s2 2s2 2p5 3s1', quantity: 'zeff', convention: 'slater' } });
   expect(askedInWords(excited).map(([name, text]) => `${name}: ${text}`)).toContain('Ne* 3s: 1s2 2s2 2p5 3s1');
   const options = [{ symbol: 'O', charge: 0, electron: '2p' }];
-  expect(askedInWords(view(2, { kind: 'order', printed: { question: 'increasing', options, partMarks: [] } }))[0]).toEqual(['Answer', 'an order, in increasing order']);
+  expect(askedInWords(view(2, { kind: 'order', printed: { question: 'increasing', options, partMarks: [] } }))[0]).toEqual(['Answer', 'an order, increasing']);
 });
 
 it('tells rules only where the item has them, and what becomes of codes always', () => {

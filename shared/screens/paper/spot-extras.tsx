@@ -1,10 +1,10 @@
 import { View } from 'react-native';
 import type { ItemDraft, ItemView } from '../../contracts/items';
-import { electronLabel } from '../../marking/item-label';
 import { Checkbox } from '../../ui/checkbox';
 import { Text } from '../../ui/text';
 import { Vessel } from '../../ui/vessel';
 import { plainChem } from '../chem-text-parts';
+import { quantityShort } from './item-names';
 import type { Beside } from './use-spot';
 import { words } from './words';
 
@@ -36,7 +36,7 @@ export function SpotExtras({ draft, items, beside, onChange, problems }: SpotExt
                 label={w.own(item.number)}
                 value={beside[field]}
                 onChange={(text) => onChange({ ...beside, [field]: text })}
-                help={plainChem(item.draft.asked.convention === 'typed' ? item.worked.label : `${words.quantityOf[item.draft.asked.quantity]} of ${electronLabel(item.draft.asked)}`)}
+                help={plainChem(`${item.worked.label}, ${quantityShort(item.draft)}`)}
                 error={problems[field]}
                 variant="reading"
                 height={40}

@@ -43,7 +43,7 @@ export function SpotTestPane({ spot, draft, items, isWorked }: SpotTestPaneProps
       />
       <SpotExtras draft={draft} items={items} beside={spot.beside} onChange={spot.setBeside} problems={spot.problems} />
       <View aria-live="polite" style={{ minHeight: 66 }}>
-        <Outcome text={text} result={result} isWorked={isWorked} isNumeric={draft.kind === 'numeric'} waitsFor={waitsFor(spot, draft, items)} />
+        <Outcome text={text} result={result} refusal={spot.refusal} isWorked={isWorked} isNumeric={draft.kind === 'numeric'} waitsFor={waitsFor(spot, draft, items)} />
       </View>
     </View>
   );
@@ -58,16 +58,24 @@ function waitsFor({ beside }: Spot, draft: ItemDraft, items: readonly ItemView[]
 interface OutcomeProps {
   readonly text: string;
   readonly result: SpotTestResult | null;
+  readonly refusal: string | null;
   readonly isWorked: boolean;
   readonly isNumeric: boolean;
   readonly waitsFor: readonly number[];
 }
 
-function Outcome({ text, result, isWorked, isNumeric, waitsFor: waiting }: OutcomeProps) {
+function Outcome({ text, result, refusal, isWorked, isNumeric, waitsFor: waiting }: OutcomeProps) {
   if (text === '' || !isWorked) {
     return (
       <Text variant="small" tone="ink2">
         {!isWorked ? words.spot.notWorked : isNumeric ? words.spot.empty : words.tried.numbers}
+      </Text>
+    );
+  }
+  if (refusal !== null) {
+    return (
+      <Text variant="small" tone="ink2">
+        {words.tried.refused(refusal)}
       </Text>
     );
   }

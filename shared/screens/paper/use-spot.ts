@@ -18,6 +18,8 @@ export interface Spot {
   readonly setBeside: (beside: Beside) => void;
   /** Null while nothing is typed. */
   readonly result: SpotTestResult | null;
+  /** Why nothing can be tried: the draft is not whole. */
+  readonly refusal: string | null;
   /** Sentences about what stands beside the value, by field. */
   readonly problems: Readonly<Record<string, string>>;
   readonly drop: { readonly at: number; readonly text: string } | null;
@@ -35,5 +37,7 @@ export function useSpot(itemId: string, draft: ItemDraft | null): Spot {
   const { data, error } = useSpotTest(itemId, { text: still, beside: stillBeside, draft });
   const result = text === '' || still === '' || error ? null : (data ?? null);
   const at = result?.value ?? null;
-  return { text, setText, beside, setBeside, result, problems: error instanceof ApiError ? error.fields : {}, drop: at === null ? null : { at, text } };
+  const problems = error instanceof ApiError ? error.fields : {};
+  const isBeside = 'followed' in problems || 'second' in problems;
+  return { text, setText, beside, setBeside, result, refusal: error && text !== '' && !isBeside ? error.message : null, problems, drop: at === null ? null : { at, text } };
 }

@@ -40,6 +40,7 @@ export const words = {
   addItem: 'Add an item',
   item: (number: number) => `Item ${number}`,
   quantityOf: { zeff: 'Z_eff', sigma: 'σ', 'energy-ev': 'energy', 'energy-kj-mol': 'energy', 'radius-pm': 'radius', electronegativity: 'electronegativity', difference: 'Z_eff', value: 'value' },
+  quantityShort: { zeff: 'Z_eff', sigma: 'σ', 'energy-ev': 'energy, eV', 'energy-kj-mol': 'energy, kJ/mol', 'radius-pm': 'radius, pm', electronegativity: 'electronegativity', difference: 'difference', value: '' },
   title: (number: number, quantity: string, label: string) => `Item ${number}, ${quantity} of ${label}`,
   plainTitle: (number: number, label: string) => `Item ${number}, ${label}`,
   printedTitle: (number: number, quantity: string, label: string) => `Item ${number}, ${quantity}: ${label}`,
@@ -78,7 +79,7 @@ export const words = {
   asked: {
     title: 'Asked',
     quantity: 'Quantity',
-    quantities: { zeff: 'Zeff', sigma: 'σ', 'energy-ev': 'Energy, eV', 'energy-kj-mol': 'Energy, kJ/mol', 'radius-pm': 'Radius, pm', electronegativity: 'Electronegativity', difference: 'Zeff, difference of two', value: 'Another value' },
+    quantities: { zeff: 'Zeff', sigma: 'σ', 'energy-ev': 'Energy, eV', 'energy-kj-mol': 'Energy, kJ/mol', 'radius-pm': 'Radius, pm', electronegativity: 'Electronegativity', difference: 'Difference of two', value: 'Another value' },
     quantityNames: { zeff: 'Z_eff, the effective charge', sigma: 'σ, the screening constant', 'energy-ev': 'orbital energy in eV', 'energy-kj-mol': 'orbital energy in kJ/mol', 'radius-pm': 'radius of maximum density in pm', electronegativity: 'Allred-Rochow electronegativity', difference: 'the difference of two Z_eff', value: 'another value' },
     figures: 'Figures',
     radius: 'Radius, Å',
