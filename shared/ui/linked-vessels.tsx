@@ -13,7 +13,9 @@ export interface LinkedVessel {
   readonly number: number;
   readonly label: ReactNode;
   readonly below: ReactNode;
-  readonly spoken: string;
+  /** Read out before the number, and after all. */
+  readonly spokenBefore: string;
+  readonly spokenAfter: string;
   readonly isHere: boolean;
 }
 
@@ -73,17 +75,17 @@ export function LinkedVessels({ label, vessels, links, onChoose }: LinkedVessels
 
 function Vessel({ vessel, left, top, height, onPress }: { vessel: LinkedVessel; left: number; top: number; height: number; onPress: () => void }) {
   const colors = useColors();
-  const { id, number, label, below, spoken, isHere } = vessel;
+  const { id, number, label, below, spokenBefore, spokenAfter, isHere } = vessel;
   return (
     <View role="listitem" style={{ position: 'absolute', left, top: 0, width: cell, height: height + writing }}>
       <Pressable
         onPress={onPress}
-        label={spoken}
         isCurrent={isHere}
         isFocusInside
         testID={`chain-${id}`}
         style={({ isHovered }) => ({ flex: 1, alignItems: 'center', borderRadius: radius.control, borderWidth: 1, borderColor: isHovered && !isHere ? colors.rule : 'transparent' })}
       >
+        <Spoken>{spokenBefore}</Spoken>
         <View style={{ position: 'absolute', top: top + 8, left: 0, right: 0, alignItems: 'center' }}>
           <Text weight={600} tone={isHere ? 'manganate' : 'ink'} style={{ width: vesselSize.width - 30 }} align="center" lines={1}>
             {number}
@@ -97,7 +99,13 @@ function Vessel({ vessel, left, top, height, onPress }: { vessel: LinkedVessel; 
             {below}
           </Text>
         </View>
+        <Spoken>{spokenAfter}</Spoken>
       </Pressable>
     </View>
   );
+}
+
+/** For screen readers: what the drawing shows. */
+function Spoken({ children }: { children: string }) {
+  return <Text style={{ position: 'absolute', width: 1, height: 1, overflow: 'hidden' }}>{children}</Text>;
 }

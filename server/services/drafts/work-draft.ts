@@ -67,7 +67,7 @@ function promptOf(draft: ItemDraft, asked: Asked, scheme: ItemScheme | null): st
 
 /** Key, derivation, wording, scale and what is wrong, as the editor shows them. */
 export function workDraft(draft: ItemDraft, place: Place = alone): WorkedDraft {
-  const { scheme, key, worked, maxGrains, refusals, problems } = readDraft(draft, place);
+  const { scheme, key, worked, units, maxGrains, refusals, problems } = readDraft(draft, place);
   const asked = askedOf(draft);
   const isNumeric = draft.kind === 'numeric';
   const electrons = occupiedElectrons(draft.asked.symbol, draft.asked.charge, draft.asked.configuration);
@@ -75,8 +75,8 @@ export function workDraft(draft: ItemDraft, place: Place = alone): WorkedDraft {
   return {
     label: itemLabel({ asked, printed: isNumeric ? null : draft.printed }),
     key: key && { ...key, figures: key.figures ?? null },
-    unit: scheme?.units[0] ?? worked?.unit ?? '',
-    units: [...(scheme?.units ?? [])],
+    unit: units[0] ?? '',
+    units: [...units],
     derivation: worked?.derivation ?? null,
     otherDerivation: worked?.otherDerivation ?? null,
     options: optionTexts(draft),

@@ -24,6 +24,7 @@ export function Chain({ items, itemId, onChoose }: ChainProps) {
   if (chain.links.length === 0) return null;
   const placeOf = (id: string): number => chain.items.findIndex((item) => item.id === id);
   const isBroken = (id: string): boolean => chain.items.find((item) => item.id === id)?.worked.problems.some(({ path }) => path.startsWith('followThrough')) ?? false;
+  const isAnyShut = chain.links.some(({ to, isTrivial }) => isTrivial || isBroken(to));
   return (
     <View style={{ gap: 4 }} testID="chain">
       <LinkedVessels
@@ -35,7 +36,8 @@ export function Chain({ items, itemId, onChoose }: ChainProps) {
             number: item.number,
             label: <ChemText beside="small">{unbroken(item.worked.label)}</ChemText>,
             below: <ChemText beside="micro">{quantityShort(item.draft)}</ChemText>,
-            spoken: w.node(item.number, `${item.worked.label}, ${quantityShort(item.draft).replace('_', ' ')}`, follows.length === 0 ? '' : w.followsShort(follows)),
+            spokenBefore: w.item,
+            spokenAfter: follows.length === 0 ? '' : w.followsShort(follows),
             isHere: item.id === itemId,
           };
         })}
@@ -43,7 +45,7 @@ export function Chain({ items, itemId, onChoose }: ChainProps) {
         onChoose={onChoose}
       />
       <Text variant="micro" tone="ink3">
-        {w.chainPress}
+        {isAnyShut ? `${w.chainPress} ${w.chainShut}` : w.chainPress}
       </Text>
     </View>
   );

@@ -47,15 +47,15 @@ export function ItemRow({ item, follows, number, isChosen, grip, onKeyDown, onPr
             flex: 1,
             flexDirection: 'row',
             alignItems: 'center',
-            gap: 10,
-            paddingLeft: 8,
-            paddingRight: 12,
+            gap: 8,
+            paddingLeft: 6,
+            paddingRight: 6,
             borderWidth: 2,
             borderColor: isChosen ? colors.manganate : 'transparent',
             backgroundColor: isChosen ? colors.manganateFaint : isHovered ? colors.well : 'transparent',
           })}
         >
-          <Text weight={600} align="right" lines={1} style={{ width: 24 }}>
+          <Text weight={600} align="right" lines={1} style={{ width: 22 }}>
             {number}
           </Text>
           <View style={{ flex: 1, minWidth: 0 }}>

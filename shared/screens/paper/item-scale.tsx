@@ -24,7 +24,7 @@ export function ItemScale({ draft, worked, value }: ItemScaleProps) {
     return (
       <View style={{ minHeight: 120, justifyContent: 'center' }}>
         <Text variant="small" tone="ink2">
-          {words.scale.none}
+          {worked.key ? words.scale.unfinished : words.scale.none}
         </Text>
       </View>
     );

@@ -90,7 +90,7 @@ function problemOf(row: SlipRow, draft: ItemDraft, problemAt: (path: string) => 
 }
 
 /** A sentence begins with a capital, but a symbol such as n stays what it is. */
-const capital = (text: string): string => (/^[a-z]{2}/.test(text) ? text.charAt(0).toUpperCase() + text.slice(1) : text);
+const capital = (text: string): string => (/^n([spdf-]|\b)/.test(text) ? text : text.charAt(0).toUpperCase() + text.slice(1));
 
 function Diamond({ letter }: { letter: string }) {
   const colors = useColors();

@@ -22,9 +22,9 @@ export const ruleWords = {
     remove: 'Remove the link',
     chain: 'The chain',
     chainPress: 'A vessel opens its item.',
+    chainShut: 'A broken line carries nothing on.',
     followsShort: (numbers: readonly number[]) => `follows ${list(numbers.map(String))}`,
-    node: (number: number, label: string, follows: string) => `Item ${number}, ${label}${follows === '' ? '' : `, ${follows}`}`,
-    followedBy: (numbers: readonly number[]) => `Followed by item ${list(numbers.map(String))}.`,
+    item: 'Item ',
     said: (items: string, isTrivial: boolean) => (isTrivial ? `Follows ${items}, a step too short to be carried on` : `Follows the candidate’s own value of ${items}; one error costs once`),
   },
   method: {

@@ -75,6 +75,7 @@ export const words = {
   scale: {
     key: (key: string, rounded: readonly string[]) => (rounded.length === 0 ? `key ${key}` : `key ${key}, rounded ${rounded.join(', ')}`),
     none: 'The scale appears once the key can be computed.',
+    unfinished: 'The scale appears again once every field holds.',
   },
   asked: {
     title: 'Asked',
