@@ -75,7 +75,7 @@ function ValueRows({ item: { draft, worked, maxGrains }, value }: { item: ItemVi
         </Text>
       </CountRow>
       <CountRow value={[...new Set(worked.roundings)].join('  ')} grains={fewest === null ? null : value} maxGrains={maxGrains}>
-        <Text>{fewest === null ? words.counts.noRounding : `${words.counts.rounding} ${fewest}${truncation && !worked.key?.figures ? `. ${words.counts.cutOff}` : ''}`}</Text>
+        <Text>{fewest === null ? (worked.key?.figures ? words.counts.noFigures : words.counts.noRounding) : `${words.counts.rounding} ${fewest}${truncation && !worked.key?.figures ? `. ${words.counts.cutOff}` : ''}`}</Text>
       </CountRow>
       <Untold untold={worked.untold} />
       {draft.bands.length === 0 ? (

@@ -163,6 +163,7 @@ export const words = {
     roundingNone: 'no rounding',
     decimalsOf: (count: number) => decimalWords[count] ?? `${count} decimals`,
     noRounding: 'Only the key itself, with all its decimals',
+    noFigures: 'Only the key itself, with all its figures',
     cutOff: 'Cut off counts too',
     noBand: 'No band: a value near the key is another value',
     addBand: 'Band',
