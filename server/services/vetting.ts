@@ -38,6 +38,7 @@ function viewOf({ db }: Context, actor: Actor, { item, scheme }: DraftedItem): V
     mine,
     key: isUncovered ? scheme.key.text : null,
     derivation: isUncovered && worked.ok ? worked.value.derivation : null,
+    otherDerivation: isUncovered && worked.ok ? worked.value.otherDerivation : null,
     decides: isUncovered ? schemeInWords(scheme, numbersOf(db, item.sitting)) : [],
     vettings: vettingsOf(db, item.id, hash).map(({ person, by, ...vetting }) => ({ ...vetting, by: by ?? 'somebody', isOwn: person === actor.personId })),
     rev: item.rev,

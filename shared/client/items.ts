@@ -20,26 +20,33 @@ export const useItemBank = (sittingId: string) =>
 
 export const useItems = (sittingId: string) => useQuery(itemsQueryOptions(sittingId));
 
-/** What the server makes of a draft; the last answer stays while the next is worked. */
-export const useWorkedDraft = (sittingId: string, draft: ItemDraft, isNeeded: boolean) =>
+/** What the server makes of a draft of an item, where that stands on its paper; the last answer stays while the next is worked. */
+export const useWorkedDraft = ({ sittingId, itemId, number }: { readonly sittingId: string; readonly itemId: string; readonly number: number }, draft: ItemDraft, isNeeded: boolean) =>
   useQuery({
-    queryKey: ['worked-draft', sittingId, draft],
+    queryKey: ['worked-draft', sittingId, itemId, number, draft],
     enabled: isNeeded,
     staleTime: staleTimes.steady,
     placeholderData: keepPreviousData,
-    queryFn: ({ signal }) => api<ResponseOf<typeof workKey>>('/keys', { method: 'POST', body: { sittingId, draft }, signal }),
+    queryFn: ({ signal }) => api<ResponseOf<typeof workKey>>('/keys', { method: 'POST', body: { sittingId, itemId, draft }, signal }),
   });
 
-/** How a text would be marked by a draft; without one, by what is stored. */
-export const useSpotTest = (itemId: string, text: string, draft: ItemDraft | null) =>
+interface Tried {
+  readonly text: string;
+  readonly beside: { readonly followed: string; readonly second: string; readonly method: readonly string[] };
+  /** Null where the stored item is the one to try. */
+  readonly draft: ItemDraft | null;
+}
+
+/** How a text would be marked, with what else its mark rests on. */
+export const useSpotTest = (itemId: string, { text, beside, draft }: Tried) =>
   useQuery({
-    queryKey: ['spot-test', itemId, text, draft],
+    queryKey: ['spot-test', itemId, text, beside, draft],
     enabled: text !== '',
     staleTime: staleTimes.steady,
     placeholderData: keepPreviousData,
     retry: false,
     queryFn: ({ signal }) =>
-      api<ResponseOf<typeof spotTest>>(`/items/${itemId}/spot-test`, { method: 'POST', body: draft === null ? { text } : { text, draft }, signal }),
+      api<ResponseOf<typeof spotTest>>(`/items/${itemId}/spot-test`, { method: 'POST', body: { text, ...beside, ...(draft === null ? {} : { draft }) }, signal }),
   });
 
 /** Puts one item into the list that is shown. */
@@ -73,11 +80,23 @@ export function useMakeItem(sittingId: string) {
   });
 }
 
+/** Items follow from each other: a change of one may open or close what another can follow. */
+function useWorkAnew(sittingId: string) {
+  const client = useQueryClient();
+  return () => {
+    for (const queryKey of [itemsQueryOptions(sittingId).queryKey, ['worked-draft', sittingId], ['spot-test']]) void client.invalidateQueries({ queryKey });
+  };
+}
+
 export function useSaveItem(sittingId: string) {
   const keep = useKeepItem(sittingId);
+  const workAnew = useWorkAnew(sittingId);
   return useMutation({
     mutationFn: ({ itemId, rev, draft }: { itemId: string; rev: number; draft: ItemDraft }) => api<Item>(`/items/${itemId}`, { method: 'PUT', rev, body: draft }),
-    onSuccess: keep,
+    onSuccess: (item) => {
+      keep(item);
+      workAnew();
+    },
   });
 }
 

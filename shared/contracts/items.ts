@@ -126,6 +126,8 @@ export const workedDraft = z.object({
   alternatives: z.array(z.string().nullable()),
   /** Every slip that can be made on this item, the commonest first; a silent one gives the right number. */
   slips: z.array(z.object({ id: z.string(), letter: z.string(), name: z.string(), text: z.string(), differs: z.string(), feedback: z.string(), isSilent: z.boolean() })),
+  /** Names of slips that cannot be made here at all. */
+  noOccasion: z.array(z.string()),
   /** Slips and other conventions' values that a band would pay, nearest first. */
   guard: z.array(z.object({ kind: z.enum(['slip', 'convention']), name: z.string(), text: z.string(), band: z.string(), marks: z.string(), distance: z.string() })),
   /** Slips that an accepted rounding cannot tell from the key. */

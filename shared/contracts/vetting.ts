@@ -21,6 +21,8 @@ export const vettingItem = z.object({
   mine: z.object({ text: z.string(), agrees: z.boolean(), at: instant }).nullable(),
   key: z.string().nullable(),
   derivation: z.unknown(),
+  /** Of the second electron of a difference. */
+  otherDerivation: z.unknown(),
   /** What else the scheme decides, in words; empty while the key is covered. */
   decides: z.array(z.object({ name: z.string(), words: z.string() })),
   /** Signatures and returns of the scheme as it stands, newest first. */

@@ -2,7 +2,7 @@ import { speciesText } from '../chemistry/species';
 import type { Asked, AskedElectron, ItemScheme, PrintedQuestion } from './scheme';
 
 /** Species with its charge, and electron: magnesium(2+), 2p is "Mg²⁺ 2p". A star tells a typed configuration from the ground state. */
-export const electronLabel = ({ symbol, charge, electron, configuration = '' }: AskedElectron): string =>
+export const electronLabel = ({ symbol, charge, electron, configuration = '' }: Omit<AskedElectron, 'configuration'> & { readonly configuration?: string | undefined }): string =>
   `${speciesText(symbol, charge)}${configuration.trim() === '' ? '' : '*'} ${electron}`;
 
 const questionLabels: Readonly<Record<PrintedQuestion, string>> = { greatest: 'the greatest', least: 'the least', increasing: 'in increasing order', decreasing: 'in decreasing order' };

@@ -39,19 +39,25 @@ function Line({ frame: { pad, base, width } }: { frame: ScaleFrame }) {
   return <Path d={`M${pad - 8},${base} H${width - pad + 8}`} stroke={colors.ink} strokeWidth={1.75} strokeLinecap="round" />;
 }
 
+/** Of Mono at 12. */
+const numeralWidth = 7.4;
+
 function Graduations({ scale, frame }: { scale: ScaleProps; frame: ScaleFrame }) {
   const colors = useColors();
-  const { place, full, base, numerals } = frame;
+  const { place, full, base, numerals, width } = frame;
   return graduationsOf(scale).map(({ at, isMajor }) => {
     const x = place(at);
+    const numeral = at.toFixed(scale.decimals);
+    // The outermost stay whole at the edges.
+    const half = (numeral.length * numeralWidth) / 2;
     if (!isMajor) return <Path key={at} d={`M${x},${base} V${base + 5}`} stroke={colors.rule} />;
     return (
       <G key={at}>
         <Path d={`M${x},${full - 6} V${base}`} stroke={colors.hair} />
         <Path d={`M${x},${base} V${base + 11}`} stroke={colors.ink2} strokeWidth={1.25} />
         <Path d={`M${x},${base + 11} V${numerals - 13}`} stroke={colors.hair} />
-        <SvgWords x={x} y={numerals} anchor="middle" face="Mono400" size={12} tone="ink3">
-          {at.toFixed(scale.decimals)}
+        <SvgWords x={Math.min(Math.max(x, half), width - half)} y={numerals} anchor="middle" face="Mono400" size={12} tone="ink3">
+          {numeral}
         </SvgWords>
       </G>
     );

@@ -55,6 +55,21 @@ describe('vetting', () => {
     expect((await itemsFor(external))[0]).toMatchObject({ mine: { text: '6,10' }, vettings: [{ outcome: 'signed' }, { outcome: 'sent-back' }] });
   });
 
+  it('says what the rules cannot see or would pay besides, and shows both electrons of a difference', async () => {
+    const band = { name: 'near', kind: 'relative', width: '5', marks: '1' } as const;
+    const difference = itemDraft('Cl', '3p', { asked: { symbol: 'Cl', charge: 0, electron: '3p', quantity: 'difference', convention: 'slater', other: { symbol: 'S', charge: 0, electron: '3p' } } });
+    const other = buildPaper(server, { drafts: [itemDraft('Fe', '4s'), itemDraft('Be', '2s'), itemDraft('Cl', '3p', { bands: [band] }), difference], locked: false });
+    const { items } = (await lead.get(`/api/sittings/${other.sittingId}/vetting`).expect(200)).body as { items: VettingItem[] };
+    const said = (index: number, name: string) => items[index]?.decides.find((line) => line.name === name)?.words;
+    // By hand, from the coefficients of J. C. Slater, Phys. Rev. 36, 57 (1930): Fe 4s 3.75, with 0.30 in every group 3.80; Be 2s 1.95 with all inner electrons at 0.85 as well; Cl 3p 6.10 and 6.40.
+    expect(said(0, 'Not told apart')).toContain('3.8 cannot be told from 0.30 in every group, 3.80');
+    expect(said(1, 'Silent slips')).toMatch(/^All inner electrons at 0\.85.* 1\.95 too; this item cannot see/);
+    expect(said(2, 'Tolerance guard')).toContain('6.40, 0.30 above the key, would get 1 mark');
+    expect([items[3]?.key, items[3]?.otherDerivation]).toMatchObject(['0.65', { zeff: { text: '5.45' } }]);
+    const covered = (await external.get(`/api/sittings/${other.sittingId}/vetting`).expect(200)).body as { items: VettingItem[] };
+    expect(covered.items.map(({ otherDerivation, decides }) => [otherDerivation, decides])).toEqual(items.map(() => [null, []]));
+  });
+
   it('takes a value with the unit of the item', async () => {
     const energy = itemDraft('Cl', '3p', { asked: { symbol: 'Cl', charge: 0, electron: '3p', quantity: 'energy-ev', convention: 'slater' } });
     const other = buildPaper(server, { drafts: [energy], locked: false });

@@ -5,6 +5,8 @@ import type { Page } from 'playwright-core';
 import { v7 as uuidv7 } from 'uuid';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { inTransaction } from '../../db/client';
+import type { ItemDraft } from '../../shared/contracts/items';
+import { createItem } from '../../server/services/items';
 import { giveLease } from '../../server/services/desk';
 import { recordReading } from '../../server/services/readings';
 import { changeSitting } from '../../server/services/sittings';
@@ -13,14 +15,29 @@ import { receiveFile } from '../../server/services/uploads';
 import { axeViolations } from '../support/axe';
 import { openPage, startBrowserBench, type BrowserBench } from '../support/browser';
 import { giveEvidence } from '../support/evidence';
-import { actorOf, buildPaper } from '../support/paper';
+import { actorOf, buildPaper, itemDraft } from '../support/paper';
 import { pageJpeg } from '../support/pictures';
 
+/** A choice, an order, a difference, a typed key, and a link with all that costs and pays beside it. */
+function ofEveryKind(first: string): ItemDraft[] {
+  const options = ['O', 'F', 'N', 'C'].map((symbol) => ({ symbol, charge: 0, electron: '2p' }));
+  const chlorine = itemDraft().asked;
+  return [
+    itemDraft('', '', { kind: 'choice', printed: { question: 'greatest', options, partMarks: [] } }),
+    itemDraft('', '', { kind: 'order', printed: { question: 'increasing', options, partMarks: [{ inPlace: 2, marks: '1' }] } }),
+    itemDraft('Cl', '3p', { asked: { ...chlorine, quantity: 'difference', other: { symbol: 'S', charge: 0, electron: '3p' } } }),
+    itemDraft('', '', { asked: { symbol: '', charge: 0, electron: '', quantity: 'value', convention: 'typed', typed: { label: 'A wavelength', value: '121.6', unit: 'nm', source: 'by hand' } }, prompt: 'Find the wavelength, to one decimal.', decimals: 1, roundings: { downToDecimals: null, truncation: false } }),
+    itemDraft('Cl', '3p', { asked: { ...chlorine, quantity: 'energy-ev' }, followThrough: { from: first, second: null, isTrivial: false }, methodMarks: [{ id: 'groups', text: 'Groups written out', marks: '1' }], unitCost: '0.5', signCost: '1' }),
+  ];
+}
+
 /** A sitting with something of everything: an open paper beside it, pairs that agree and differ, a loose page. */
-async function somethingOfEverything(bench: BrowserBench): Promise<{ open: string; locked: string }> {
+async function somethingOfEverything(bench: BrowserBench): Promise<{ open: string; locked: string; kinds: readonly string[] }> {
   const { server } = bench;
   const { context, people } = server;
-  const open = buildPaper(server, { locked: false }).sittingId;
+  const paper = buildPaper(server, { locked: false });
+  const open = paper.sittingId;
+  const kinds = ofEveryKind(paper.items[0] ?? '').map((draft) => createItem(context, actorOf(server, 'lead'), open, draft).id);
   const locked = buildPaper(server).sittingId;
   changeSitting(context, actorOf(server, 'lead'), locked, context.db.$client.prepare('select rev from sitting where id = ?').pluck().get(locked) as number, { secondPolicy: 'all' });
   const answers = giveEvidence(server, locked);
@@ -38,7 +55,7 @@ async function somethingOfEverything(bench: BrowserBench): Promise<{ open: strin
   const batch = createBatch(context, actorOf(server, 'readerOne'), locked, 'B');
   await receiveFile(context, actorOf(server, 'readerOne'), batch.id, join(folder, 'scan0001.jpg'));
   await context.jobs.settle();
-  return { open, locked };
+  return { open, locked, kinds };
 }
 
 const settled = async (page: Page): Promise<void> => {
@@ -48,7 +65,7 @@ const settled = async (page: Page): Promise<void> => {
 
 describe('axe finds nothing', () => {
   let bench: BrowserBench;
-  let world: { open: string; locked: string };
+  let world: { open: string; locked: string; kinds: readonly string[] };
   beforeAll(async () => {
     bench = await startBrowserBench();
     world = await somethingOfEverything(bench);
@@ -67,8 +84,8 @@ describe('axe finds nothing', () => {
 
   it.each(variants)('on the screens of a lead, $viewport, $scheme', async ({ viewport, scheme }) => {
     const { page, context } = await openPage(bench, 'lead', viewport, scheme);
-    const { open, locked } = world;
-    for (const path of ['', 'settings', `sittings/${locked}`, `sittings/${open}/paper`, `sittings/${open}/vetting`, `sittings/${open}/regions`, `sittings/${locked}/regions`, `sittings/${locked}/class-list`, `sittings/${locked}/sheets`, `sittings/${open}/sheets`, `sittings/${locked}/scans`, `sittings/${locked}/sorting`, `sittings/${locked}/moderation`, `sittings/${locked}/marks`, 'nowhere']) {
+    const { open, locked, kinds } = world;
+    for (const path of ['', 'settings', `sittings/${locked}`, `sittings/${open}/paper`, ...kinds.map((item) => `sittings/${open}/paper?item=${item}`), `sittings/${open}/vetting`, `sittings/${open}/regions`, `sittings/${locked}/regions`, `sittings/${locked}/class-list`, `sittings/${locked}/sheets`, `sittings/${open}/sheets`, `sittings/${locked}/scans`, `sittings/${locked}/sorting`, `sittings/${locked}/moderation`, `sittings/${locked}/marks`, 'nowhere']) {
       await page.goto(`${bench.address}/${path}`);
       await settled(page);
       expect(await axeViolations(page), path || 'bench').toEqual([]);

@@ -5,17 +5,8 @@ import { importClassList } from '../../server/services/class-list';
 import { saveLayout } from '../../server/services/layouts';
 import { createSitting } from '../../server/services/sittings';
 import { openPage, startBrowserBench, type BrowserBench } from '../support/browser';
+import { walkTo } from '../support/by-keyboard';
 import { actorOf, layoutFor } from '../support/paper';
-
-/** Tab until the control is in hand: no pointer is used. */
-async function walkTo(page: Page, testId: string): Promise<void> {
-  for (let step = 0; step < 160; step += 1) {
-    const found = await page.evaluate((id) => document.activeElement?.getAttribute('data-testid') === id, testId);
-    if (found) return;
-    await page.keyboard.press('Tab');
-  }
-  throw new Error(`${testId} was not reached by Tab.`);
-}
 
 const savedLine = (page: Page) => page.getByTestId('save-line').filter({ hasText: /^saved/ }).waitFor();
 

@@ -22,6 +22,8 @@ export interface ReadDraft {
   readonly scheme: ItemScheme | null;
   readonly key: Key | null;
   readonly worked: Worked | null;
+  /** What an answer may carry, where there is a key. */
+  readonly units: readonly string[];
   readonly maxGrains: number | null;
   /** What keeps it from being stored. */
   readonly refusals: readonly ItemProblem[];
@@ -107,7 +109,7 @@ export function readDraft(draft: ItemDraft, place: Place = alone): ReadDraft {
   const slips = isNumeric ? draft.slips.flatMap((slip, index) => readSlip(reader, slip, index, asked) ?? []) : [];
   const later = { ...laterParts(reader, draft, place), ...printedOf(reader, draft, found) };
   const maxGrains = marks.ok ? marks.grains : null;
-  const read = { key: found?.key ?? null, worked: found?.worked ?? null, maxGrains, refusals: reader.refusals };
+  const read = { key: found?.key ?? null, worked: found?.worked ?? null, units: found?.units ?? [], maxGrains, refusals: reader.refusals };
   if (!found || maxGrains === null || reader.refusals.length > 0) return { ...read, scheme: null, problems: [] };
   const scheme: ItemScheme = {
     kind: draft.kind,

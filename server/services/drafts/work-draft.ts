@@ -14,6 +14,7 @@ import { roundings } from '../../../shared/marking/rounding';
 import { scaleOf } from '../../../shared/marking/scale';
 import type { Asked, Band, ItemScheme } from '../../../shared/marking/scheme';
 import { guardOf } from '../../../shared/marking/watch/guard';
+import { silentSlips } from '../../../shared/marking/watch/silent';
 import { toldApart } from '../../../shared/marking/watch/told-apart';
 import { askedOf, electronOf, proposedPrompt } from './asked-of';
 import { alone, readDraft, type Place } from './read-draft';
@@ -66,7 +67,7 @@ function promptOf(draft: ItemDraft, asked: Asked, scheme: ItemScheme | null): st
 
 /** Key, derivation, wording, scale and what is wrong, as the editor shows them. */
 export function workDraft(draft: ItemDraft, place: Place = alone): WorkedDraft {
-  const { scheme, key, worked, maxGrains, refusals, problems } = readDraft(draft, place);
+  const { scheme, key, worked, units, maxGrains, refusals, problems } = readDraft(draft, place);
   const asked = askedOf(draft);
   const isNumeric = draft.kind === 'numeric';
   const electrons = occupiedElectrons(draft.asked.symbol, draft.asked.charge, draft.asked.configuration);
@@ -74,8 +75,8 @@ export function workDraft(draft: ItemDraft, place: Place = alone): WorkedDraft {
   return {
     label: itemLabel({ asked, printed: isNumeric ? null : draft.printed }),
     key: key && { ...key, figures: key.figures ?? null },
-    unit: scheme?.units[0] ?? worked?.unit ?? '',
-    units: [...(scheme?.units ?? [])],
+    unit: units[0] ?? '',
+    units: [...units],
     derivation: worked?.derivation ?? null,
     otherDerivation: worked?.otherDerivation ?? null,
     options: optionTexts(draft),
@@ -85,6 +86,7 @@ export function workDraft(draft: ItemDraft, place: Place = alone): WorkedDraft {
     bands: scheme ? scheme.bands.map((band) => rangeTexts(band, scheme.key)) : draft.bands.map(() => null),
     alternatives: draft.alternatives.map((_alternative, index) => scheme?.alternatives[index]?.text ?? null),
     slips: slipsOf(asked).map(({ id, name, text, oneLine, feedback, isSilent }) => ({ id, letter: slipLetter(id), name, text, differs: oneLine, feedback, isSilent })),
+    noOccasion: silentSlips({ asked }).noOccasion.map(({ name }) => name),
     guard: drawable ? guardFindings(scheme) : [],
     untold: scheme && isNumeric ? toldApart(scheme).map(({ name, text, rounded, decimals, distance }) => ({ name, text, rounded, decimals, distance })) : [],
     others: isNumeric ? valuesByOtherConventions(asked).map(({ convention, name, text }) => ({ convention, name, text })) : [],

@@ -1,6 +1,5 @@
 import { slipsOf, slipsWithoutOccasion } from '../../chemistry/slips/slips-of';
 import type { ItemScheme } from '../scheme';
-import { distinctWrongValues, type SharedValue } from './wrong-values';
 
 interface NamedOnly {
   readonly id: string;
@@ -18,7 +17,7 @@ export interface SilentSlips {
  * The slips that an item cannot see; nothing is said of an item on which none is worked. Ours, no source; values in elementary
  * charges. On Be 2s no shell is deeper than the one below, so all inner electrons at 0.85 gives the right 1.95.
  */
-export function silentSlips({ asked }: ItemScheme): SilentSlips {
+export function silentSlips({ asked }: Pick<ItemScheme, 'asked'>): SilentSlips {
   const made = slipsOf(asked);
   if (made.length === 0) return { rightNumber: [], noOccasion: [] };
   return {
@@ -26,9 +25,3 @@ export function silentSlips({ asked }: ItemScheme): SilentSlips {
     noOccasion: slipsWithoutOccasion(asked),
   };
 }
-
-/**
- * Slips on one value, named together: an answer there fits each of them. Ours, no source; elementary charges.
- * On Cl 3p 5.75 is the electron counted itself, or one electron too many.
- */
-export const twins = ({ asked }: ItemScheme): SharedValue[] => distinctWrongValues(asked).filter(({ slips }) => slips.length > 1);

@@ -28,6 +28,4 @@ export const watchWords = {
     `${list(names)} ${names.length === 1 ? 'gives' : 'give'} ${minus(key)} too; this item cannot see ${names.length === 1 ? 'it' : 'them'}.`,
   /** `0.35 inside 1s has no occasion on this item.` */
   noOccasion: (names: readonly string[]): string => `${list(names)} ${names.length === 1 ? 'has' : 'have'} no occasion on this item.`,
-  /** `5.75, 0.35 below the key, fits counts the electron itself; one electron too many: the value does not say which.` */
-  twins: (names: readonly string[], text: string, distance: string): string => `${minus(text)}, ${distance} the key, fits ${list(names)}: the value does not say which.`,
 };

@@ -1,5 +1,5 @@
 import { valuesByOtherConventions } from '../../chemistry/other-conventions';
-import { absolute, compare, equals, exactDecimals, subtract, toDecimals, type Exact } from '../../chemistry/exact';
+import { absolute, compare, exactDecimals, subtract, toDecimals, type Exact } from '../../chemistry/exact';
 import { slipsOf, type SlipValue } from '../../chemistry/slips/slips-of';
 import type { Asked } from '../scheme';
 
@@ -27,32 +27,6 @@ export const slipValues = (asked: Asked): WrongValue[] => slipsOf(asked).filter(
  */
 export const conventionValues = (asked: Asked): WrongValue[] =>
   valuesByOtherConventions(asked).map(({ convention, name, value, text }) => ({ kind: 'convention', id: convention, name, value, text }));
-
-/** Slips under two names: the same count of electrons, met in two ways. Our judgement, no source. */
-const sameSlip: readonly string[] = ['counts-itself', 'one-electron-too-many'];
-
-/** Slips that come to one value. */
-export interface SharedValue {
-  readonly value: Exact;
-  readonly text: string;
-  readonly slips: readonly WrongValue[];
-  /** How many different slips that is, two names of one slip counted once. */
-  readonly explanations: number;
-}
-
-/**
- * The distinct wrong values of an item with the slips that come to each, the commonest slip first. Ours, no source; elementary
- * charges. For Cl 3p 5.75 has two names and one explanation.
- */
-export function distinctWrongValues(asked: Asked): SharedValue[] {
-  const values: { value: Exact; text: string; slips: WrongValue[] }[] = [];
-  for (const slip of slipValues(asked)) {
-    const known = values.find(({ value }) => equals(value, slip.value));
-    if (known) known.slips.push(slip);
-    else values.push({ value: slip.value, text: slip.text, slips: [slip] });
-  }
-  return values.map((shared) => ({ ...shared, explanations: new Set(shared.slips.map(({ id }) => (sameSlip.includes(id) ? sameSlip[0] : id))).size }));
-}
 
 /**
  * How far a value lies from the key, exact where four decimals say it. In the unit of the key; ours, no source.

@@ -23,6 +23,7 @@ export function Alternatives({ draft, worked, problemAt, onChange }: Alternative
   const { alternatives } = draft;
   const put = (next: AlternativeDraft[], field: string) => onChange({ ...draft, alternatives: next }, field);
   const taken = new Set(alternatives.map(({ convention }) => convention));
+  const isPrinted = draft.kind !== 'numeric';
   const offered = worked.others.filter(({ convention }) => !taken.has(convention));
   return (
     <View style={{ gap: 8, marginTop: 16 }}>
@@ -31,7 +32,7 @@ export function Alternatives({ draft, worked, problemAt, onChange }: Alternative
           {w.title}
         </Text>
         <Text variant="small" tone="ink2">
-          {w.aside}
+          {isPrinted ? words.alternativeNumbers.aside : w.aside}
         </Text>
       </View>
       {alternatives.map((alternative, index) => (
@@ -39,6 +40,7 @@ export function Alternatives({ draft, worked, problemAt, onChange }: Alternative
           key={index}
           alternative={alternative}
           index={index}
+          valueLabel={isPrinted ? words.alternativeNumbers.value : w.value}
           text={worked.alternatives[index] ?? null}
           maxGrains={worked.maxGrains}
           problemAt={problemAt}
@@ -52,8 +54,8 @@ export function Alternatives({ draft, worked, problemAt, onChange }: Alternative
             {w.accept(name, text)}
           </Button>
         ))}
-        <Button kind="text" isSmall icon="plus" onPress={() => put([...alternatives, { name: w.other, convention: null, value: '', marks: draft.marks, reason: '' }], `alternative-added-${alternatives.length}`)} testID="add-alternative">
-          {w.add}
+        <Button kind="text" isSmall icon="plus" onPress={() => put([...alternatives, { name: isPrinted ? words.alternativeNumbers.other : w.other, convention: null, value: '', marks: draft.marks, reason: '' }], `alternative-added-${alternatives.length}`)} testID="add-alternative">
+          {isPrinted ? words.alternativeNumbers.add : w.add}
         </Button>
       </View>
     </View>
@@ -63,6 +65,7 @@ export function Alternatives({ draft, worked, problemAt, onChange }: Alternative
 interface AlternativeRowProps {
   readonly alternative: AlternativeDraft;
   readonly index: number;
+  readonly valueLabel: string;
   readonly text: string | null;
   readonly maxGrains: number | null;
   readonly problemAt: (path: string) => string | undefined;
@@ -70,7 +73,7 @@ interface AlternativeRowProps {
   readonly onRemove: () => void;
 }
 
-function AlternativeRow({ alternative, index, text, maxGrains, problemAt, onChange, onRemove }: AlternativeRowProps) {
+function AlternativeRow({ alternative, index, valueLabel, text, maxGrains, problemAt, onChange, onRemove }: AlternativeRowProps) {
   const colors = useColors();
   const marks = readMarks(alternative.marks);
   const problem = (field: string) => problemAt(`alternatives.${index}.${field}`);
@@ -83,7 +86,7 @@ function AlternativeRow({ alternative, index, text, maxGrains, problemAt, onChan
         </View>
         {isByHand ? (
           <View style={{ flexGrow: 1, flexBasis: 90 }}>
-            <Vessel label={w.value} value={alternative.value} onChange={(value) => onChange({ ...alternative, value }, 'value')} variant="readingS" maxLength={32} error={problem('value')} height={40} testID={`alternative-value-${index}`} />
+            <Vessel label={valueLabel} value={alternative.value} onChange={(value) => onChange({ ...alternative, value }, 'value')} variant="readingS" maxLength={32} error={problem('value')} height={40} testID={`alternative-value-${index}`} />
           </View>
         ) : (
           <View style={{ minWidth: 80, minHeight: 40, justifyContent: 'center' }}>

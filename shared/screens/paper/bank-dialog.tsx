@@ -38,6 +38,9 @@ export function BankDialog({ sittingId, onClose }: BankDialogProps) {
       }
     >
       <Vessel label={words.bank.find} help={words.bank.findHelp} value={find} onChange={setFind} maxLength={60} isFocusedFirst testID="bank-find" />
+      <Text variant="small" tone="ink2">
+        {words.bank.linksStay}
+      </Text>
       <Text variant="small" live="polite">
         {words.bank.added(added)}
       </Text>

@@ -82,7 +82,7 @@ const focusCell = (symbol: string): void => document.querySelector<HTMLElement>(
 function ElementTable({ fitting, chosen, best, onChoose }: TableProps) {
   const colors = useColors();
   const fits = new Set(fitting.map(({ symbol }) => symbol));
-  const start = best ?? chosen;
+  const start = best ?? (chosen === '' ? 'H' : chosen);
   return (
     <View role="radiogroup" aria-label={words.picker.table} style={{ height: 9 * cell + 10, width: 18 * cell }}>
       {elements.map((element) => {

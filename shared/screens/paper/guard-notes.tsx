@@ -1,5 +1,6 @@
 import { View } from 'react-native';
 import type { WorkedDraft } from '../../contracts/items';
+import { watchWords } from '../../marking/watch/words';
 import { Icon } from '../../ui/icon';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
@@ -11,7 +12,7 @@ const named = 3;
 export function ToleranceGuard({ guard }: Pick<WorkedDraft, 'guard'>) {
   const colors = useColors();
   if (guard.length === 0) return null;
-  const said = guard.slice(0, named).map(words.guard.finding);
+  const said = guard.slice(0, named).map(watchWords.paid);
   const more = guard.length > named ? [words.guard.more(guard.length - named)] : [];
   return (
     <View role="status" style={{ flexDirection: 'row', gap: 10, padding: 12, backgroundColor: colors.iodineFaint, borderRadius: 2 }} testID="guard">
@@ -20,7 +21,7 @@ export function ToleranceGuard({ guard }: Pick<WorkedDraft, 'guard'>) {
         <Text variant="small" weight={600} tone="iodine">
           {words.guard.title}
         </Text>
-        {` ${[...said, ...more].join('; ')}. ${words.guard.what}`}
+        {` ${[...said, ...more].join('; ')}. ${watchWords.paidAdvice}`}
       </Text>
     </View>
   );
@@ -32,7 +33,7 @@ export function Untold({ untold }: Pick<WorkedDraft, 'untold'>) {
   for (const slip of untold) groups.set(slip.rounded, [...(groups.get(slip.rounded) ?? []), slip]);
   return [...groups].map(([rounded, slips]) => (
     <Text key={rounded} variant="small" tone="iodine">
-      {words.guard.untold(slips.slice(0, named).map(({ name, text }) => `${name}, ${text}`), rounded, slips[0]?.decimals ?? 1)}
+      {watchWords.notToldApart(slips.slice(0, named), rounded, slips[0]?.decimals ?? 1)}
     </Text>
   ));
 }

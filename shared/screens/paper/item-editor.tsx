@@ -8,28 +8,31 @@ import { size, space } from '../../ui/tokens';
 import { useBreakpoint } from '../../ui/use-breakpoint';
 import { ChemText } from '../chem-text';
 import { AskedFields } from './asked-fields';
+import { itemTitle } from './item-names';
 import { ItemScale } from './item-scale';
 import { KeyWorked } from './key-worked';
 import { PrintedStem } from './printed-stem';
 import { RemoveDialog } from './remove-dialog';
 import { ConflictNotice, SaveLine } from './save-line';
-import { SpotTestPane, useSpot } from './spot-test-pane';
+import { SpotTestPane } from './spot-test-pane';
 import { useKeeper, useKept } from './use-keepers';
+import { useSpot } from './use-spot';
 import { useWorked } from './use-worked';
 import { WhatCounts } from './what-counts';
 import { words } from './words';
 
 interface ItemEditorProps {
   readonly item: ItemView;
-  readonly count: number;
+  readonly items: readonly ItemView[];
   readonly lockButton: ReactNode;
   readonly back: ReactNode;
   readonly onMove: (by: number) => void;
+  readonly onChoose: (id: string) => void;
   readonly onRemoved: () => void;
 }
 
 /** One item of an open paper: what is asked, its key, what counts, and a value to try against it. */
-export function ItemEditor({ item, count, lockButton, back, onMove, onRemoved }: ItemEditorProps) {
+export function ItemEditor({ item, items, lockButton, back, onMove, onChoose, onRemoved }: ItemEditorProps) {
   const colors = useColors();
   const breakpoint = useBreakpoint();
   const isWide = breakpoint === 'wide' || breakpoint === 'full';
@@ -42,20 +45,22 @@ export function ItemEditor({ item, count, lockButton, back, onMove, onRemoved }:
   const refused = save.kind === 'refused' ? save.fields : {};
   const problemAt = (path: string) => worked.problems.find((problem) => problem.path === path)?.message ?? refused[path];
 
-  const spotTest = (
-    <SpotTestPane text={spot.text} onChange={spot.setText} result={spot.result} isWorked={worked.scale !== null} />
-  );
-  const scale = <ItemScale worked={worked} value={spot.drop} />;
-  const asked = <AskedFields draft={draft} hasFigures={(worked.key?.figures ?? null) !== null} problemAt={problemAt} onChange={keeper.change} />;
+  // Links are drawn as they stand in the draft, stored or not.
+  const paper = items.map((known) => (known.id === item.id ? { ...known, draft, worked } : known));
+  const fields = { draft, worked, problemAt, onChange: keeper.change };
+
+  const spotTest = <SpotTestPane spot={spot} draft={draft} items={paper} isWorked={worked.key !== null} />;
+  const scale = <ItemScale draft={draft} worked={worked} value={spot.drop} />;
+  const asked = <AskedFields {...fields} />;
   const printed = <PrintedStem number={item.number} draft={draft} worked={worked} error={problemAt('prompt')} canChange onChange={keeper.change} />;
-  const key = <KeyWorked worked={worked} quantity={draft.asked.quantity} />;
-  const counts = <WhatCounts draft={draft} worked={worked} problemAt={problemAt} onChange={keeper.change} />;
+  const key = <KeyWorked draft={draft} worked={worked} />;
+  const counts = <WhatCounts {...fields} items={paper} itemId={item.id} onChoose={onChoose} />;
   const foot = (
     <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 8 }}>
       <Button kind="text" isSmall icon="up" onPress={() => onMove(-1)} closed={item.number === 1 ? '' : undefined}>
         {words.moveUp}
       </Button>
-      <Button kind="text" isSmall icon="down" onPress={() => onMove(1)} closed={item.number === count ? '' : undefined}>
+      <Button kind="text" isSmall icon="down" onPress={() => onMove(1)} closed={item.number === items.length ? '' : undefined}>
         {words.moveDown}
       </Button>
       <Button kind="danger" isSmall icon="delete" onPress={() => setRemoving(true)} testID="remove-item">
@@ -84,7 +89,7 @@ export function ItemEditor({ item, count, lockButton, back, onMove, onRemoved }:
         {back}
         <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: 240, flexDirection: 'row', flexWrap: 'wrap', alignItems: 'baseline', columnGap: 14 }}>
           <Text variant="title" level={1}>
-            <ChemText beside="title">{words.title(item.number, words.quantityOf[draft.asked.quantity], worked.label)}</ChemText>
+            <ChemText beside="title">{itemTitle(item.number, draft, worked.label)}</ChemText>
           </Text>
           <SaveLine save={save} />
         </View>

@@ -6,7 +6,9 @@ import { Button } from '../../ui/button';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
 import { useHasKeyboard } from '../../ui/use-has-keyboard';
-import { ItemRow, itemRowHeight } from './item-row';
+import { numbersFollowed } from './chain-of';
+import { droppedAt } from './drop-place';
+import { followsHeight, ItemRow, itemRowHeight } from './item-row';
 import { words } from './words';
 
 interface ItemListProps {
@@ -41,6 +43,7 @@ export function ItemList({ items, chosen, canChange, isAdding, onChoose, onOrder
   const ids = items.map(({ id }) => id);
   const shown = drag ? movedTo(ids, drag.from, drag.to) : ids;
   const byId = new Map(items.map((item) => [item.id, item]));
+  const heights = items.map(({ draft }) => itemRowHeight + (draft.followThrough ? followsHeight : 0));
   const total = items.reduce((sum, { maxGrains }) => sum + maxGrains, 0);
 
   const move = (id: string, by: number) => {
@@ -72,7 +75,7 @@ export function ItemList({ items, chosen, canChange, isAdding, onChoose, onOrder
     },
     onPointerMove: (event: ReactPointerEvent<HTMLElement>) => {
       if (!drag) return;
-      const to = Math.min(Math.max(drag.from + Math.round((event.clientY - drag.y) / itemRowHeight), 0), ids.length - 1);
+      const to = droppedAt(heights, drag.from, event.clientY - drag.y);
       if (to !== drag.to) setDrag({ ...drag, to });
     },
     onPointerUp: () => {
@@ -100,6 +103,7 @@ export function ItemList({ items, chosen, canChange, isAdding, onChoose, onOrder
             <View key={id} role="listitem" style={{ opacity: drag?.id === id ? 0.7 : 1 }}>
               <ItemRow
                 item={item}
+                follows={numbersFollowed(items, item)}
                 number={index + 1}
                 isChosen={id === chosen}
                 grip={canChange && items.length > 1 ? grip(id) : null}

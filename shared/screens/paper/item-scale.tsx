@@ -1,27 +1,30 @@
 import { View } from 'react-native';
-import type { WorkedDraft } from '../../contracts/items';
+import type { ItemDraft, WorkedDraft } from '../../contracts/items';
 import type { ScaleData } from '../../marking/scale';
 import { Scale } from '../../ui/scale';
 import { Text } from '../../ui/text';
 import { useIsPhone } from '../../ui/use-breakpoint';
 import { drawnScale } from '../drawn-scale';
+import { OptionsScale } from './options-scale';
 import { words } from './words';
 
 interface ItemScaleProps {
+  readonly draft: ItemDraft;
   readonly worked: WorkedDraft;
   /** The value that is being tried. */
   readonly value: { readonly at: number; readonly text: string } | null;
 }
 
 /** The live scale of the item: the server computes where things stand, this draws them. */
-export function ItemScale({ worked, value }: ItemScaleProps) {
+export function ItemScale({ draft, worked, value }: ItemScaleProps) {
   const isPhone = useIsPhone();
   const data = worked.scale as ScaleData | null;
+  if (draft.kind !== 'numeric') return <OptionsScale draft={draft} worked={worked} />;
   if (!data) {
     return (
       <View style={{ minHeight: 120, justifyContent: 'center' }}>
         <Text variant="small" tone="ink2">
-          {words.scale.none}
+          {worked.key ? words.scale.unfinished : words.scale.none}
         </Text>
       </View>
     );

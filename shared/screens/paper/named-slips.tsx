@@ -4,6 +4,7 @@ import Svg, { Path } from 'react-native-svg';
 import type { ItemDraft, WorkedDraft } from '../../contracts/items';
 import { GRAINS_PER_MARK, marksText } from '../../marking/grains';
 import { readMarks } from '../../marking/typed-marks';
+import { watchWords } from '../../marking/watch/words';
 import { Button } from '../../ui/button';
 import { Checkbox } from '../../ui/checkbox';
 import { MarkStand } from '../../ui/mark-stand';
@@ -66,12 +67,17 @@ export function NamedSlips({ draft, worked, problemAt, onChange }: NamedSlipsPro
           </Button>
         </View>
       ) : null}
-      {silent.length > 0 ? (
-        <Text variant="small">
+      {worked.key ? (
+        <Text variant="small" testID="silent-slips">
           <Text variant="small" weight={600}>
             {w.silent}
           </Text>
-          {` ${w.silentText(silent.map(({ name }) => name), worked.key?.text ?? '')}`}
+          {` ${silent.length > 0 ? watchWords.silent(silent.map(({ name }) => name), worked.key.text) : w.none(worked.key.text)}`}
+        </Text>
+      ) : null}
+      {isWhole && worked.noOccasion.length > 0 ? (
+        <Text variant="small" tone="ink2">
+          <ChemText beside="small">{watchWords.noOccasion(worked.noOccasion)}</ChemText>
         </Text>
       ) : null}
     </View>
@@ -82,6 +88,9 @@ function problemOf(row: SlipRow, draft: ItemDraft, problemAt: (path: string) => 
   const at = draft.slips.findIndex(({ id }) => row.slips.some((slip) => slip.id === id));
   return at < 0 ? undefined : (problemAt(`slips.${at}.marks`) ?? problemAt(`slips.${at}.id`));
 }
+
+/** A sentence begins with a capital, but a symbol such as n stays what it is. */
+const capital = (text: string): string => (/^n([spdf-]|\b)/.test(text) ? text : text.charAt(0).toUpperCase() + text.slice(1));
 
 function Diamond({ letter }: { letter: string }) {
   const colors = useColors();
@@ -120,10 +129,10 @@ function Row({ row, maxGrains, problem, onMarks }: RowProps) {
         </View>
         <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: 200 }}>
           <Checkbox isChecked={marks !== null} onChange={(isNamed) => onMarks(isNamed ? '0' : null)} label={`${first.name}, ${text}`}>
-            <ChemText>{first.name.charAt(0).toUpperCase() + first.name.slice(1)}</ChemText>
+            <ChemText>{capital(first.name)}</ChemText>
           </Checkbox>
           <Text variant="small" tone="ink2">
-            {[first.differs, twins.length > 0 ? w.twins(twins.map(({ name }) => name)) : ''].filter((part) => part !== '').join('. ')}
+            {[first.differs, twins.length > 0 ? w.twins(twins.map(({ name }) => name)) : ''].filter((part) => part !== '').map(capital).join('. ')}
           </Text>
         </View>
         <Text variant="reading">{text}</Text>

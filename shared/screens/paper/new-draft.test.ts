@@ -8,6 +8,13 @@ describe('a new item', () => {
     expect(newDraft({ ...first, marks: '2' })).toMatchObject({ asked: { symbol: 'Be', electron: '2s' }, marks: '2', bands: [] });
   });
 
+  it('goes on after the last option, and does not ask again for what needs more than an electron', () => {
+    const first = newDraft(undefined);
+    const options = ['O', 'F'].map((symbol) => ({ symbol, charge: 0, electron: '2p' }));
+    expect(newDraft({ ...first, kind: 'choice', decimals: 0, printed: { question: 'greatest', options, partMarks: [] } })).toMatchObject({ kind: 'numeric', printed: null, decimals: 2, asked: { symbol: 'Ne', electron: '2p' } });
+    expect(newDraft({ ...first, asked: { ...first.asked, quantity: 'electronegativity', radiusAngstrom: '1.00' } }).asked.quantity).toBe('zeff');
+  });
+
   it('asks for the outermost electron', () => {
     expect(outermostElectron('Cl')).toBe('3p');
     expect(outermostElectron('Fe')).toBe('4s');

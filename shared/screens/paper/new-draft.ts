@@ -10,22 +10,25 @@ export function outermostElectron(symbol: string, charge = 0): string {
   return (electrons.ok ? electrons.value.at(-1) : undefined) ?? '1s';
 }
 
-/** A difference needs a second electron, and a typed key its value: after those a new item asks for Z_eff. */
+/** What needs more than an electron is not asked for again: a second one, a radius, a key typed by hand. */
 function plainQuantity(last: ItemDraft | undefined): Pick<ItemDraft['asked'], 'quantity' | 'convention'> {
-  const isPlain = last !== undefined && last.asked.quantity !== 'difference' && last.asked.convention !== 'typed';
+  const isPlain = last !== undefined && !['difference', 'electronegativity'].includes(last.asked.quantity) && last.asked.convention !== 'typed';
   return isPlain ? { quantity: last.asked.quantity, convention: last.asked.convention } : { quantity: 'zeff', convention: 'slater' };
 }
 
 /** What a new item starts with: the next element after the last item's, its outermost electron, the same quantity and marks. */
 export function newDraft(last: ItemDraft | undefined): ItemDraft {
-  const before = last ? elementBySymbol(last.asked.symbol) : null;
+  const isComputed = last?.kind === 'numeric' && last.asked.convention !== 'typed';
+  const symbolBefore = last?.kind === 'numeric' ? last.asked.symbol : last?.printed?.options.at(-1)?.symbol;
+  const before = symbolBefore === undefined ? null : elementBySymbol(symbolBefore);
   const next = elementByNumber(before?.ok ? before.value.number + 1 : lithium);
   const symbol = next.ok ? next.value.symbol : 'C';
   return {
     kind: 'numeric',
     printed: null,
     asked: { symbol, charge: 0, electron: outermostElectron(symbol), ...plainQuantity(last) },
-    decimals: last?.decimals ?? 2,
+    // An order has no decimals, and a typed key those of its value.
+    decimals: isComputed ? last.decimals : 2,
     figures: last?.figures ?? 4,
     prompt: null,
     marks: last?.marks ?? '3',

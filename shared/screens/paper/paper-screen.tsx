@@ -109,16 +109,19 @@ function PaperPanes({ sitting, items, lockedAt, itemId }: PanesProps) {
       <ItemEditor
         key={open.id}
         item={open}
-        count={items.length}
+        items={items}
         lockButton={lockButton}
         back={back}
         onMove={move}
+        onChoose={choose}
         onRemoved={() => choose(isWide ? (items.find(({ id }) => id !== open.id)?.id ?? null) : null)}
       />
     ) : (
       <ItemReader
         key={open.id}
         item={open}
+        items={items}
+        onChoose={choose}
         canTry={isLead}
         line={lockedAt === null ? words.save.open : words.locked(momentText(lockedAt))}
         explanation={lockedAt === null ? words.readOnly : words.lockedText}
@@ -138,7 +141,7 @@ function PaperPanes({ sitting, items, lockedAt, itemId }: PanesProps) {
   }
   return (
     <View style={{ flex: 1, flexDirection: 'row' }}>
-      <View style={{ width: 216, backgroundColor: colors.glass, borderRightWidth: 1, borderColor: colors.hair }}>{list}</View>
+      <View style={{ width: 232, backgroundColor: colors.glass, borderRightWidth: 1, borderColor: colors.hair }}>{list}</View>
       <View style={{ flex: 1, minWidth: 0 }}>{editor}</View>
     </View>
   );

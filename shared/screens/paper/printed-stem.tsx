@@ -25,14 +25,16 @@ export function PrintedStem({ number, draft, worked, error, canChange, onChange 
   const [isOpen, setOpen] = useState(false);
   const prompt = draft.prompt ?? worked.proposedPrompt;
   const isOwn = draft.prompt !== null;
+  // Only the lead knows what a typed key answers: there is nothing to propose.
+  const isUnproposed = worked.proposedPrompt === '' && draft.asked.convention === 'typed' && draft.kind === 'numeric';
   return (
     <View style={{ gap: 6 }}>
       <View style={{ flexDirection: 'row', justifyContent: 'space-between', alignItems: 'center', flexWrap: 'wrap', columnGap: 12, minHeight: 36 }}>
         <Text variant="head" level={2}>
           {words.printed.title}
-          <Text variant="small" tone="ink2">{`  ${isOwn ? words.printed.own : words.printed.proposed}`}</Text>
+          <Text variant="small" tone="ink2">{`  ${isUnproposed ? words.printed.unproposed : isOwn ? words.printed.own : words.printed.proposed}`}</Text>
         </Text>
-        {canChange ? (
+        {canChange && !isUnproposed ? (
           isOwn ? (
             <Button
               kind="text"
@@ -60,14 +62,14 @@ export function PrintedStem({ number, draft, worked, error, canChange, onChange 
           <Text tone="ink2">{` [${draft.marks}]`}</Text>
         </Text>
       </View>
-      {canChange && (isOpen || isOwn) ? (
+      {canChange && (isOpen || isOwn || isUnproposed) ? (
         <Vessel
           label={words.printed.label}
           value={prompt}
           lines={3}
           height={96}
           maxLength={600}
-          onChange={(text) => onChange({ ...draft, prompt: text === worked.proposedPrompt ? null : text }, 'prompt')}
+          onChange={(text) => onChange({ ...draft, prompt: text === worked.proposedPrompt || (isUnproposed && text === '') ? null : text }, 'prompt')}
           error={error}
           testID="prompt"
         />

@@ -1,75 +1,81 @@
-import { useState } from 'react';
 import { View } from 'react-native';
-import { useSpotTest } from '../../client/items';
-import type { ItemDraft, SpotTestResult } from '../../contracts/items';
+import type { ItemDraft, ItemView, SpotTestResult } from '../../contracts/items';
 import { GRAINS_PER_MARK, marksText } from '../../marking/grains';
 import { MarkStand } from '../../ui/mark-stand';
 import { Text } from '../../ui/text';
 import { size } from '../../ui/tokens';
 import { useIsPhone } from '../../ui/use-breakpoint';
 import { Vessel } from '../../ui/vessel';
-import { useSettled } from '../use-settled';
+import { followsOf } from './chain-of';
+import { RuleHead } from './rule-head';
+import { SpotExtras } from './spot-extras';
+import type { Spot } from './use-spot';
 import { words } from './words';
 
 interface SpotTestPaneProps {
-  readonly text: string;
-  readonly onChange: (text: string) => void;
-  readonly result: SpotTestResult | null;
+  readonly spot: Spot;
+  readonly draft: ItemDraft;
+  readonly items: readonly ItemView[];
   readonly isWorked: boolean;
 }
 
-const stillMs = 120;
-
-/** The typed value and what the server says of it, null while nothing is typed; `draft` is what is not stored yet; null where the stored item is the one to try. */
-export function useSpot(itemId: string, draft: ItemDraft | null): { text: string; setText: (text: string) => void; result: SpotTestResult | null; drop: { at: number; text: string } | null } {
-  const [text, setText] = useState('');
-  const still = useSettled(text, stillMs);
-  const { data, isError } = useSpotTest(itemId, still, draft);
-  const result = text === '' || still === '' || isError ? null : (data ?? null);
-  const at = result?.value ?? null;
-  return { text, setText, result, drop: at === null ? null : { at, text } };
-}
-
 /** A value tried against the item while it is built: mark, rule and distance; nothing is stored. */
-export function SpotTestPane({ text, onChange, result, isWorked }: SpotTestPaneProps) {
+export function SpotTestPane({ spot, draft, items, isWorked }: SpotTestPaneProps) {
   const isPhone = useIsPhone();
+  const { text, setText, result } = spot;
   const refused = result?.outcome === 'refused' ? result.detail : undefined;
   return (
     <View style={{ gap: 10 }} testID="spot-test">
-      <View style={{ flexDirection: 'row', justifyContent: 'space-between', alignItems: 'baseline' }}>
-        <Text variant="head" level={2}>
-          {words.spot.title}
-        </Text>
-        <Text variant="small" tone="ink2">
-          {words.spot.aside}
-        </Text>
-      </View>
+      <RuleHead title={words.spot.title} aside={words.spot.aside} />
       <Vessel
         label={words.spot.label}
         isLabelHidden
         value={text}
-        onChange={onChange}
+        onChange={setText}
         variant={isPhone ? 'readingL' : 'readingXL'}
         height={isPhone ? size.fieldReading : 72}
         maxLength={64}
         error={refused}
         testID="spot-test-value"
         onKeyDown={(key) => {
-          if (key === 'Escape') onChange('');
+          if (key === 'Escape') setText('');
         }}
       />
+      <SpotExtras draft={draft} items={items} beside={spot.beside} onChange={spot.setBeside} problems={spot.problems} />
       <View aria-live="polite" style={{ minHeight: 66 }}>
-        <Outcome text={text} result={result} isWorked={isWorked} />
+        <Outcome text={text} result={result} refusal={spot.refusal} isWorked={isWorked} isNumeric={draft.kind === 'numeric'} waitsFor={waitsFor(spot, draft, items)} />
       </View>
     </View>
   );
 }
 
-function Outcome({ text, result, isWorked }: Pick<SpotTestPaneProps, 'text' | 'result' | 'isWorked'>) {
+/** The numbers of the items whose own value was not said. */
+function waitsFor({ beside }: Spot, draft: ItemDraft, items: readonly ItemView[]): number[] {
+  const typed = [beside.followed, beside.second];
+  return followsOf({ draft }).flatMap((id, leg) => (typed[leg]?.trim() === '' ? (items.find((item) => item.id === id)?.number ?? []) : []));
+}
+
+interface OutcomeProps {
+  readonly text: string;
+  readonly result: SpotTestResult | null;
+  readonly refusal: string | null;
+  readonly isWorked: boolean;
+  readonly isNumeric: boolean;
+  readonly waitsFor: readonly number[];
+}
+
+function Outcome({ text, result, refusal, isWorked, isNumeric, waitsFor: waiting }: OutcomeProps) {
   if (text === '' || !isWorked) {
     return (
       <Text variant="small" tone="ink2">
-        {isWorked ? words.spot.empty : words.spot.notWorked}
+        {!isWorked ? words.spot.notWorked : isNumeric ? words.spot.empty : words.tried.numbers}
+      </Text>
+    );
+  }
+  if (refusal !== null) {
+    return (
+      <Text variant="small" tone="ink2">
+        {words.tried.refused(refusal)}
       </Text>
     );
   }
@@ -82,21 +88,27 @@ function Outcome({ text, result, isWorked }: Pick<SpotTestPaneProps, 'text' | 'r
     );
   }
   return (
-    <View style={{ flexDirection: 'row', gap: 16, alignItems: 'flex-start' }}>
-      <MarkStand
-        state="given"
-        scale="desk"
-        got={result.grains / GRAINS_PER_MARK}
-        of={result.maxGrains / GRAINS_PER_MARK}
-        gotText={marksText(result.grains)}
-        ofText={marksText(result.maxGrains)}
-      />
-      <View style={{ flex: 1 }}>
-        <Text weight={600}>{result.head.charAt(0).toUpperCase() + result.head.slice(1)}</Text>
-        <Text variant="small" tone="ink2">
-          {result.detail}
-        </Text>
+    <View style={{ gap: 8 }}>
+      <View style={{ flexDirection: 'row', gap: 16, alignItems: 'flex-start' }}>
+        <MarkStand state="given" scale="desk" got={result.grains / GRAINS_PER_MARK} of={result.maxGrains / GRAINS_PER_MARK} gotText={marksText(result.grains)} ofText={marksText(result.maxGrains)} />
+        <View style={{ flex: 1 }}>
+          <Text weight={600}>{result.head.charAt(0).toUpperCase() + result.head.slice(1)}</Text>
+          <Text variant="small" tone="ink2">
+            {result.detail}
+          </Text>
+        </View>
       </View>
+      {result.waits ? (
+        <Text variant="small" weight={600} tone="iodine" testID="spot-waits">
+          {words.tried.waits(waiting)}
+        </Text>
+      ) : null}
+      <Text variant="small" tone="ink2" testID="spot-told">
+        <Text variant="small" weight={600}>
+          {words.tried.told}
+        </Text>
+        {` ${result.told}`}
+      </Text>
     </View>
   );
 }

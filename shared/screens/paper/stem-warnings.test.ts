@@ -17,6 +17,13 @@ it('asks for the configuration where it is not the ground state', () => {
   expect(stemWarnings('By Slater’s rules, find Z_eff for a 3s electron of an Ne atom, to two decimals.', { kind: 'numeric', asked: excited })).toEqual(['configuration']);
 });
 
+it('looks for both electrons of a difference, and for none where the key is typed', () => {
+  const difference = { ...asked('slater'), quantity: 'difference' as const, other: { symbol: 'Ar', charge: 0, electron: '3p' } };
+  expect(stemWarnings(proposedStem(difference, 2), { kind: 'numeric', asked: difference })).toEqual([]);
+  expect(stemWarnings('By Slater’s rules, what has Cl 3p more? Two decimals.', { kind: 'numeric', asked: difference })).toEqual(['element']);
+  expect(stemWarnings('Find the wavelength in nm.', { kind: 'numeric', asked: { ...asked('typed'), symbol: '', electron: '' } })).toEqual(['figures']);
+});
+
 it('names what a wording leaves out', () => {
   expect(stemWarnings('Find Z_eff for a 3p electron of Cl.', { kind: 'numeric', asked: asked('slater') })).toEqual(['figures', 'convention']);
   expect(stemWarnings('By Slater’s rules, how strongly is it held? Two decimals.', { kind: 'numeric', asked: asked('slater') })).toEqual(['element']);

@@ -24,7 +24,9 @@ export function stemWarnings(prompt: string, { kind, asked }: Pick<ItemDraft, 'k
   if (kind === 'numeric' && !saysFigures.test(prompt)) warnings.push('figures');
   if (!namesConvention[asked.convention].test(prompt)) warnings.push('convention');
   if (kind !== 'numeric') return warnings;
-  if (asked.convention !== 'typed' && (!prompt.includes(asked.electron) || !prompt.includes(asked.symbol))) warnings.push('element');
-  if (asked.configuration !== undefined && !bare(prompt).includes(bare(asked.configuration))) warnings.push('configuration');
+  if (asked.convention === 'typed') return warnings;
+  const electrons = [asked, ...(asked.quantity === 'difference' && asked.other ? [asked.other] : [])];
+  if (electrons.some(({ symbol, electron }) => !prompt.includes(electron) || !prompt.includes(symbol))) warnings.push('element');
+  if (electrons.some(({ configuration = '' }) => !bare(prompt).includes(bare(configuration)))) warnings.push('configuration');
   return warnings;
 }

@@ -10,6 +10,6 @@ export function useWorked(item: ItemView, draft: ItemDraft): WorkedDraft {
   const text = useSettled(JSON.stringify(draft), stillMs);
   const still = useMemo(() => JSON.parse(text) as ItemDraft, [text]);
   const isStored = text === JSON.stringify(item.draft);
-  const { data } = useWorkedDraft(item.sittingId, still, !isStored);
+  const { data } = useWorkedDraft({ sittingId: item.sittingId, itemId: item.id, number: item.number }, still, !isStored);
   return isStored ? item.worked : (data ?? item.worked);
 }

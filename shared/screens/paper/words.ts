@@ -1,9 +1,14 @@
+import { kindWords } from './kind-words';
+import { ruleWords } from './rule-words';
+
 const decimalWords = ['no decimals', 'one decimal', 'two decimals', 'three decimals', 'four decimals'];
 
 const many = (count: number, one: string, more: string): string => `${count.toLocaleString('en-GB')} ${count === 1 ? one : more}`;
 
 /** The words of the item editor. */
 export const words = {
+  ...kindWords,
+  ...ruleWords,
   vet: 'Vet the paper',
   files: {
     sheets: 'Answer sheets',
@@ -26,6 +31,7 @@ export const words = {
     usedIn: (titles: readonly string[]) => `Used in ${titles.join('; ')}`,
     add: (label: string) => `Add ${label}`,
     marks: (marks: string) => `[${marks}]`,
+    linksStay: 'What an item followed from stays behind: link it anew here.',
     done: 'Done',
     added: (count: number) => (count === 0 ? '' : count === 1 ? 'One item was added at the end.' : `${count} items were added at the end.`),
   },
@@ -34,7 +40,10 @@ export const words = {
   addItem: 'Add an item',
   item: (number: number) => `Item ${number}`,
   quantityOf: { zeff: 'Z_eff', sigma: 'σ', 'energy-ev': 'energy', 'energy-kj-mol': 'energy', 'radius-pm': 'radius', electronegativity: 'electronegativity', difference: 'Z_eff', value: 'value' },
+  quantityShort: { zeff: 'Z_eff', sigma: 'σ', 'energy-ev': 'energy, eV', 'energy-kj-mol': 'energy, kJ/mol', 'radius-pm': 'radius, pm', electronegativity: 'electronegativity', difference: 'difference', value: '' },
   title: (number: number, quantity: string, label: string) => `Item ${number}, ${quantity} of ${label}`,
+  plainTitle: (number: number, label: string) => `Item ${number}, ${label}`,
+  printedTitle: (number: number, quantity: string, label: string) => `Item ${number}, ${quantity}: ${label}`,
   noKey: 'no key yet',
   moveUp: 'Move up',
   moveDown: 'Move down',
@@ -66,11 +75,12 @@ export const words = {
   scale: {
     key: (key: string, rounded: readonly string[]) => (rounded.length === 0 ? `key ${key}` : `key ${key}, rounded ${rounded.join(', ')}`),
     none: 'The scale appears once the key can be computed.',
+    unfinished: 'The scale appears again once every field holds.',
   },
   asked: {
     title: 'Asked',
     quantity: 'Quantity',
-    quantities: { zeff: 'Zeff', sigma: 'σ', 'energy-ev': 'Energy, eV', 'energy-kj-mol': 'Energy, kJ/mol', 'radius-pm': 'Radius, pm', electronegativity: 'Electronegativity' },
+    quantities: { zeff: 'Zeff', sigma: 'σ', 'energy-ev': 'Energy, eV', 'energy-kj-mol': 'Energy, kJ/mol', 'radius-pm': 'Radius, pm', electronegativity: 'Electronegativity', difference: 'Difference of two', value: 'Another value' },
     quantityNames: { zeff: 'Z_eff, the effective charge', sigma: 'σ, the screening constant', 'energy-ev': 'orbital energy in eV', 'energy-kj-mol': 'orbital energy in kJ/mol', 'radius-pm': 'radius of maximum density in pm', electronegativity: 'Allred-Rochow electronegativity', difference: 'the difference of two Z_eff', value: 'another value' },
     figures: 'Figures',
     radius: 'Radius, Å',
@@ -106,6 +116,7 @@ export const words = {
     title: 'As printed',
     proposed: 'proposed from the item',
     own: 'your wording',
+    unproposed: 'in your words',
     reset: 'Back to the proposed wording',
     label: 'The question',
     change: 'Word it yourself',
@@ -117,14 +128,7 @@ export const words = {
     },
   },
   key: { title: 'Key, worked', aside: 'computed, not typed', none: 'No key can be computed yet.' },
-  guard: {
-    title: 'Tolerance guard:',
-    finding: ({ kind, name, text, distance, marks }: { kind: 'slip' | 'convention'; name: string; text: string; distance: string; marks: string }) =>
-      `${kind === 'slip' ? `the slip “${name}”, ${text}` : `${text}, ${name}`}, ${distance} the key, would get ${marks} ${marks === '1' ? 'mark' : 'marks'}`,
-    what: 'Narrow the band, or give that value a share of its own.',
-    more: (count: number) => `and ${count} more`,
-    untold: (names: readonly string[], rounded: string, decimals: number) => `At ${decimals === 1 ? 'one decimal' : decimals === 0 ? 'no decimal' : `${decimals} decimals`}, ${rounded} cannot be told from ${names.join('; ')}.`,
-  },
+  guard: { title: 'Tolerance guard:', more: (count: number) => `and ${count} more` },
   slips: {
     title: 'Named slips',
     aside: 'an explanation, not proof',
@@ -135,7 +139,7 @@ export const words = {
     share: 'Marks for this slip',
     twins: (names: readonly string[]) => `${names.join('; ')}: the same value`,
     silent: 'Silent here:',
-    silentText: (names: readonly string[], key: string) => `${names.join('; ')} ${names.length === 1 ? 'gives' : 'give'} ${key} too; this item cannot see ${names.length === 1 ? 'it' : 'them'}.`,
+    none: (key: string) => `no slip gives ${key}.`,
   },
   alternatives: {
     title: 'Accepted alternatives',
@@ -159,6 +163,7 @@ export const words = {
     roundingNone: 'no rounding',
     decimalsOf: (count: number) => decimalWords[count] ?? `${count} decimals`,
     noRounding: 'Only the key itself, with all its decimals',
+    noFigures: 'Only the key itself, with all its figures',
     cutOff: 'Cut off counts too',
     noBand: 'No band: a value near the key is another value',
     addBand: 'Band',

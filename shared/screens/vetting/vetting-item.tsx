@@ -93,6 +93,8 @@ function OwnValue({ sittingId, item, onDone }: { sittingId: string; item: Vettin
 
 function Uncovered({ item }: { item: VettingItem }) {
   const derivation = item.derivation as DerivationData | null;
+  const other = item.otherDerivation as DerivationData | null;
+  const isDifference = derivation !== null && other !== null;
   return (
     <View style={{ gap: 12 }}>
       <Text variant="head" level={2}>
@@ -112,8 +114,16 @@ function Uncovered({ item }: { item: VettingItem }) {
           ) : null}
         </Text>
       </View>
-      {derivation ? (
-        <WorkedDerivation derivation={derivation} quantity={item.quantity} />
+      {isDifference ? <Text weight={600}>{words.first}</Text> : null}
+      {derivation ? <WorkedDerivation derivation={isDifference ? { ...derivation, steps: derivation.steps.slice(0, -1) } : derivation} quantity={isDifference ? 'zeff' : item.quantity} /> : null}
+      {isDifference ? (
+        <>
+          <Text weight={600}>{words.second}</Text>
+          <WorkedDerivation derivation={other} quantity="zeff" />
+          <Text variant="readingM" tone="copper" weight={600} align="right">
+            {derivation.steps.at(-1)}
+          </Text>
+        </>
       ) : null}
     </View>
   );
@@ -125,7 +135,7 @@ const line = (left: string, right: ReactNode, colors: { hair: string }) => (
       {left}
     </Text>
     <Text variant="small" style={{ flex: 1 }}>
-      {right}
+      {typeof right === 'string' ? <ChemText beside="small">{right}</ChemText> : right}
     </Text>
   </View>
 );

@@ -82,7 +82,7 @@ function ListRow({ item, isChosen, onChoose }: { item: VettingItem; isChosen: bo
         isFocusInside
         isPressedIn={isChosen}
         testID={`vet-${item.number}`}
-        style={({ isHovered }) => ({ minHeight: 60, minWidth: 150, flexDirection: 'row', alignItems: 'center', gap: 10, paddingHorizontal: 16, borderWidth: 2, borderColor: isChosen ? colors.manganate : 'transparent', borderBottomColor: isChosen ? colors.manganate : colors.hair, backgroundColor: isChosen ? colors.manganateFaint : isHovered ? colors.well : 'transparent' })}
+        style={({ isHovered }) => ({ minHeight: 60, minWidth: 150, flexDirection: 'row', alignItems: 'center', gap: 10, paddingHorizontal: 16, paddingVertical: 6, borderWidth: 2, borderColor: isChosen ? colors.manganate : 'transparent', borderBottomColor: isChosen ? colors.manganate : colors.hair, backgroundColor: isChosen ? colors.manganateFaint : isHovered ? colors.well : 'transparent' })}
       >
         <Text weight={600} style={{ width: 22 }}>
           {item.number}

@@ -16,6 +16,8 @@ export const words = {
   key: 'the key',
   asYou: 'as you worked it',
   notAsYou: 'not as you worked it',
+  first: 'The first electron',
+  second: 'The electron taken off',
   three: '3  What else it decides',
   comment: 'Comment',
   commentHelp: 'If you like; no names.',
