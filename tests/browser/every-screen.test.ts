@@ -82,7 +82,7 @@ describe('axe finds nothing', () => {
     await context.close();
   });
 
-  it.each(variants)('on the screens of a lead, $viewport, $scheme', { timeout: 180_000 }, async ({ viewport, scheme }) => {
+  it.each(variants)('on the screens of a lead, $viewport, $scheme', async ({ viewport, scheme }) => {
     const { page, context } = await openPage(bench, 'lead', viewport, scheme);
     const { open, locked, kinds } = world;
     for (const path of ['', 'settings', `sittings/${locked}`, `sittings/${open}/paper`, ...kinds.map((item) => `sittings/${open}/paper?item=${item}`), `sittings/${open}/vetting`, `sittings/${open}/regions`, `sittings/${locked}/regions`, `sittings/${locked}/class-list`, `sittings/${locked}/sheets`, `sittings/${open}/sheets`, `sittings/${locked}/scans`, `sittings/${locked}/sorting`, `sittings/${locked}/moderation`, `sittings/${locked}/marks`, 'nowhere']) {
