@@ -25,6 +25,20 @@ export interface OwnValue {
   readonly value: Exact;
 }
 
+/** Questions never change, and most are asked of every candidate: what one comes to is kept as long as the question is. */
+const targets = new WeakMap<AskedInput, Result<Target>>();
+const charges = new WeakMap<AskedInput, Result<EffectiveCharge>>();
+
+function kept<T>(known: WeakMap<AskedInput, T>, asked: AskedInput, work: () => T): T {
+  const found = known.get(asked);
+  if (found !== undefined) return found;
+  const fresh = work();
+  known.set(asked, fresh);
+  return fresh;
+}
+
+const targetKnown = (asked: AskedInput): Result<Target> => kept(targets, asked, () => targetOf(asked));
+
 /** Z_eff by an own value of Z_eff or sigma; null where no atom has it: below 0 or above Z. Our rule for "impossible", no source. */
 function ownCharge({ species }: Target, { quantity, value }: OwnValue): Exact | null {
   const nuclear = whole(species.element.number);
@@ -58,7 +72,7 @@ function followedFrom(asked: AskedInput, target: Target, effective: EffectiveCha
  */
 export function carriedValue(asked: AskedInput, own: OwnValue, second: OwnValue | null = null): Exact | null {
   if (!canCarryOn(own.quantity, asked.quantity)) return null;
-  const target = targetOf(asked);
+  const target = targetKnown(asked);
   if (!target.ok) return null;
   if (own.quantity.startsWith('energy')) return ownEnergy(target.value, own);
   const zeff = ownCharge(target.value, own);
@@ -66,7 +80,8 @@ export function carriedValue(asked: AskedInput, own: OwnValue, second: OwnValue 
   if (asked.quantity === 'zeff') return zeff;
   if (asked.quantity === 'sigma') return subtract(whole(target.value.species.element.number), zeff);
   if (asked.quantity === 'difference') return ownDifference(asked, zeff, second);
-  const effective = isSlater(asked.convention) ? effectiveCharge(target.value, asked.convention) : null;
+  const { convention } = asked;
+  const effective = isSlater(convention) ? kept(charges, asked, () => effectiveCharge(target.value, convention)) : null;
   if (!effective?.ok) return null;
   const followed = followedFrom(asked, target.value, { ...effective.value, zeff });
   return followed.ok ? followed.value.value : null;

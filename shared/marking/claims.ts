@@ -1,4 +1,4 @@
-import { exactDecimals, fromFractionText, negate, subtract, toDecimals, type Exact } from '../chemistry/exact';
+import { exactDecimals, fromFractionText, negate, subtract, toDecimals, toFigures, type Exact } from '../chemistry/exact';
 import { bandOf, bandRange } from './bands';
 import { carriedKey } from './follow-through';
 import { meets } from './meeting';
@@ -14,9 +14,10 @@ export interface Claim {
 
 type Numbers = Readonly<Record<string, string>>;
 
-/** A difference as people read it: signed, exact where a decimal of up to six places says it. */
-export function distanceText(value: Exact, key: Exact): string {
+/** A difference as people read it: signed, exact where a decimal of up to six places says it; from a key stated to figures, to three. */
+export function distanceText(value: Exact, key: Exact, figures?: number): string {
   const distance = subtract(value, key);
+  if (figures !== undefined && distance.n !== 0n) return toFigures(distance, 3);
   const places = Math.max(2, Math.min(6, exactDecimals(distance) ?? 6));
   return toDecimals(distance, places);
 }
@@ -60,7 +61,7 @@ function followClaims(scheme: CompleteScheme, read: ReadValue, context: MarkingC
   const { decimals, figures } = scheme.key;
   const exactPlaces = exactDecimals(carried) ?? decimals;
   const policy = exactPlaces > decimals ? { ...scheme.roundings, downToDecimals: scheme.roundings.downToDecimals ?? decimals } : scheme.roundings;
-  const numbers = { ...shared, followed: context.followed ?? '', carried: toDecimals(carried, Math.max(decimals, Math.min(6, exactPlaces))), carriedDistance: distanceText(read.value, carried) };
+  const numbers = { ...shared, followed: context.followed ?? '', carried: toDecimals(carried, Math.max(decimals, Math.min(6, exactPlaces))), carriedDistance: distanceText(read.value, carried, figures) };
   const isMet = meets(read, { value: carried, decimals: Math.max(decimals, exactPlaces), figures }, policy) !== null;
   const band = bandClaim(scheme, read, carried, numbers);
   return [
@@ -72,7 +73,7 @@ function followClaims(scheme: CompleteScheme, read: ReadValue, context: MarkingC
 /** What each rule of value would give a number, as it is written. */
 function valueClaims(scheme: CompleteScheme, read: ReadValue, context: MarkingContext): Claim[] {
   const key = fromFractionText(scheme.key.value);
-  const shared = { key: scheme.key.text, distance: distanceText(read.value, key) };
+  const shared = { key: scheme.key.text, distance: distanceText(read.value, key, scheme.key.figures) };
   return [
     keyClaim(scheme, read, key, shared),
     ...alternativeClaims(scheme, read, shared),
@@ -92,7 +93,7 @@ function signClaims(scheme: CompleteScheme, read: ReadValue, context: MarkingCon
     .map((claim) => ({
       ...claim,
       grains: Math.max(0, claim.grains - cost),
-      numbers: { ...claim.numbers, distance: distanceText(read.value, key), sign: 'reversed', signCost: String(Math.min(cost, claim.grains)) },
+      numbers: { ...claim.numbers, distance: distanceText(read.value, key, scheme.key.figures), sign: 'reversed', signCost: String(Math.min(cost, claim.grains)) },
     }));
 }
 

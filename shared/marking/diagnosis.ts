@@ -12,15 +12,14 @@ export interface FittingSlip {
   readonly feedback: string;
 }
 
-const worked = new Map<string, readonly SlipValue[]>();
+const worked = new WeakMap<Asked, readonly SlipValue[]>();
 
 /** The slips of a question, worked once: they rest on nothing else. */
 function slipsKnown(asked: Asked): readonly SlipValue[] {
-  const key = JSON.stringify(asked);
-  const known = worked.get(key);
+  const known = worked.get(asked);
   if (known) return known;
   const fresh = slipsOf(asked);
-  worked.set(key, fresh);
+  worked.set(asked, fresh);
   return fresh;
 }
 

@@ -30,7 +30,7 @@ const isBetter = (claim: Claim, best: Claim): boolean => claim.grains > best.gra
 function numericVerdict(scheme: CompleteScheme, read: ReadValue, context: MarkingContext): Claim {
   const [first, ...rest] = claimsOn(scheme, read, context);
   if (first) return rest.reduce((best, claim) => (isBetter(claim, best) ? claim : best), first);
-  const shared = { key: scheme.key.text, distance: distanceText(read.value, fromFractionText(scheme.key.value)) };
+  const shared = { key: scheme.key.text, distance: distanceText(read.value, fromFractionText(scheme.key.value), scheme.key.figures) };
   return { grains: 0, rule: 'nothing', numbers: { ...shared, ...explanation(scheme, read) } };
 }
 
