@@ -64,7 +64,9 @@ function look(reader: Reader, { width, height, data }: Grey, options: Options): 
     const codes = Array.from({ length: found.size() }, (_, index) => found.get(index)).flatMap((code): FoundCode[] => {
       if (!code?.isValid) return [];
       const { topLeft, topRight, bottomRight, bottomLeft } = code.position;
-      return [{ text: code.text, corners: [topLeft, topRight, bottomRight, bottomLeft], isInverted: code.isInverted }];
+      // NOTE a mirrored symbol comes with two of its corners exchanged.
+      const [second, fourth] = code.isMirrored ? [bottomLeft, topRight] : [topRight, bottomLeft];
+      return [{ text: code.text, corners: [topLeft, second, bottomRight, fourth], isInverted: code.isInverted }];
     });
     found.delete();
     return codes;

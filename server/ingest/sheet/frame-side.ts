@@ -37,7 +37,7 @@ const leastDark = 5;
 const leastDarkShare = 0.2;
 const mostResidualMm = 0.35;
 const leastShare = 0.55;
-const steepest = 0.03;
+const steepest = 0.06;
 const endMm = 2;
 const besideMm = 0.35;
 
