@@ -15,6 +15,8 @@ export interface LookForSide {
   readonly reachMm: number;
   /** How far from one common distance a slanting line may be seen. */
   readonly slantMm: number;
+  /** A side is looked at in at most so many places. */
+  readonly mostProfiles: number;
   /** Levels between ink and paper, as the codes show them. */
   readonly contrast: number;
 }
@@ -40,6 +42,8 @@ const leastShare = 0.55;
 const steepest = 0.06;
 const endMm = 2;
 const besideMm = 0.35;
+const fewestProfiles = 14;
+const profileMm = 1.5;
 
 const lost: FoundSide = { isConfirmed: false, offsetMm: 0, slope: 0, contrast: 0 };
 
@@ -67,8 +71,8 @@ function levelsAcross({ grey, map, reachMm }: LookForSide, at: Point, out: Point
 /** How much darker each place is than the paper on the darker of its sides: high for a line, not for an edge or a shadow. */
 function lineIn(levels: Float64Array): Float64Array {
   const sums = new Float64Array(levels.length + 1);
-  levels.forEach((level, at) => (sums[at + 1] = (sums[at] ?? 0) + level));
-  const mean = (from: number, to: number): number => ((sums[to + 1] ?? 0) - (sums[from] ?? 0)) / (to - from + 1);
+  for (let at = 0; at < levels.length; at += 1) sums[at + 1] = sums[at]! + levels[at]!;
+  const mean = (from: number, to: number): number => (sums[to + 1]! - sums[from]!) / (to - from + 1);
   const line = new Float64Array(levels.length);
   for (let at = paperTo; at < levels.length - paperTo; at += 1) {
     line[at] = Math.min(mean(at - paperTo, at - paperFrom), mean(at + paperFrom, at + paperTo)) - mean(at - 1, at + 1);
@@ -79,12 +83,13 @@ function lineIn(levels: Float64Array): Float64Array {
 function profilesOf(look: LookForSide, { from, to, outward }: SidePlace): Profile[] {
   const length = Math.hypot(to.x - from.x, to.y - from.y);
   const [along, inset] = [{ x: (to.x - from.x) / length, y: (to.y - from.y) / length }, Math.min(endMm, length * 0.15)];
-  const count = Math.min(40, Math.max(14, Math.round((length - 2 * inset) / 1.5)));
+  const count = Math.min(look.mostProfiles, Math.max(fewestProfiles, Math.round((length - 2 * inset) / profileMm)));
   return Array.from({ length: count }, (_, index) => {
     const alongMm = -length / 2 + inset + ((length - 2 * inset) * index) / (count - 1);
     const at = (shift: number): Point => ({ x: from.x + along.x * (length / 2 + alongMm + shift), y: from.y + along.y * (length / 2 + alongMm + shift) });
-    const [one, two] = [levelsAcross(look, at(-besideMm), outward), levelsAcross(look, at(besideMm), outward)];
-    const levels = one.map((level, step) => (level + (two[step] ?? 0)) / 2);
+    const levels = levelsAcross(look, at(-besideMm), outward);
+    const beside = levelsAcross(look, at(besideMm), outward);
+    for (let step = 0; step < levels.length; step += 1) levels[step] = (levels[step]! + beside[step]!) / 2;
     return { alongMm, levels, line: lineIn(levels) };
   });
 }
@@ -93,12 +98,16 @@ function profilesOf(look: LookForSide, { from, to, outward }: SidePlace): Profil
 function sharedStep(profiles: readonly Profile[], contrast: number): number {
   const steps = profiles[0]?.line.length ?? 0;
   const votes = new Float64Array(steps);
-  for (const { line } of profiles) for (let at = 0; at < steps; at += 1) votes[at] = (votes[at] ?? 0) + Math.max(0, Math.min(line[at] ?? 0, contrast / 2));
-  let [best, most] = [0, -1];
+  for (const { line } of profiles) for (let at = 0; at < steps; at += 1) votes[at] = votes[at]! + Math.max(0, Math.min(line[at]!, contrast / 2));
+  let best = 0;
+  let most = -1;
   for (let at = 3; at < steps - 3; at += 1) {
     let sum = 0;
-    for (let near = at - 3; near <= at + 3; near += 1) sum += votes[near] ?? 0;
-    if (sum > most) [best, most] = [at, sum];
+    for (let near = at - 3; near <= at + 3; near += 1) sum += votes[near]!;
+    if (sum > most) {
+      best = at;
+      most = sum;
+    }
   }
   return best;
 }
@@ -114,7 +123,9 @@ function lineNear({ alongMm, levels, line }: Profile, shared: number, slantMm: n
   const within = Math.round(slantMm / stepMm);
   let peak = Math.max(0, shared - within);
   for (let at = peak; at <= Math.min(line.length - 1, shared + within); at += 1) if ((line[at] ?? 0) > (line[peak] ?? 0)) peak = at;
-  let [sum, moment, paper] = [0, 0, 0];
+  let sum = 0;
+  let moment = 0;
+  let paper = 0;
   for (let at = peak - 4; at <= peak + 4; at += 1) paper = Math.max(paper, levels[at] ?? 0);
   for (let at = peak - 4; at <= peak + 4; at += 1) {
     const dark = paper - (levels[at] ?? paper);

@@ -71,12 +71,13 @@ function pairsOfFrame(frame: SeenFrame, map: Homography): Pair[] {
 /** Corners of codes are seen to whole pixels only. */
 const weightOfCodes = 0.4;
 
-const lookingWith = ({ grey, contrast }: Evidence, { map }: PageMap, reachMm: number, slantMm: number): LookForSide => ({ grey, contrast, map, reachMm, slantMm });
+/** Places to look at on a side: a few to place the page, more to place the box. */
+const [fewProfiles, manyProfiles] = [14, 24];
 
 /** Fits the page to the frames it shows, with codes as further points. */
 export function refit(evidence: Evidence, boxes: readonly SheetBox[], page: PageMm, start: PageMap & { readonly codes: readonly Pair[] }): PageMap {
   const isRough = start.model === 'similarity';
-  const first = lookingWith(evidence, start, isRough ? 6 : 3, isRough ? 0.8 : 0.6);
+  const first: LookForSide = { ...evidence, map: start.map, reachMm: isRough ? 6 : 3, slantMm: isRough ? 0.8 : 0.6, mostProfiles: fewProfiles };
   const frames = boxes.filter(({ isFramed }) => isFramed).map((box) => lookAt(first, box));
   const pairs = frames.flatMap((frame) => pairsOfFrame(frame, start.map));
   if (pairs.length < 4) return start;
@@ -86,7 +87,7 @@ export function refit(evidence: Evidence, boxes: readonly SheetBox[], page: Page
 /** A box where its own sides stand; a side that cannot be seen is where the page puts it. */
 export function correct(evidence: Evidence, box: SheetBox, page: PageMap): Corrected {
   if (!box.isFramed) return { box, sidesConfirmed: 0, corners: cornersOf(box).map((corner) => mapped(page.map, corner)), contrast: 0 };
-  const frame = lookAt(lookingWith(evidence, page, 2.5, 0.6), box);
+  const frame = lookAt({ ...evidence, map: page.map, reachMm: 2, slantMm: 0.6, mostProfiles: manyProfiles }, box);
   const confirmed = frame.sides.filter(({ isConfirmed }) => isConfirmed);
   const corners = cornersOf(box).map((_, corner) => mapped(page.map, cornerSeen(frame, corner)));
   const contrast = confirmed.reduce((sum, side) => sum + side.contrast, 0) / Math.max(1, confirmed.length);

@@ -16,12 +16,11 @@ export interface Pair {
 export const identityMap: Homography = [1, 0, 0, 0, 1, 0, 0, 0, 1];
 
 /** The third homogeneous coordinate: it keeps one sign where a map is a picture of the page. */
-export const depthAt = (map: Homography, { x, y }: Point): number => (map[6] ?? 0) * x + (map[7] ?? 0) * y + (map[8] ?? 1);
+export const depthAt = (map: Homography, { x, y }: Point): number => map[6]! * x + map[7]! * y + map[8]!;
 
 export function mapped(map: Homography, point: Point): Point {
-  const [a = 0, b = 0, c = 0, d = 0, e = 0, f = 0] = map;
   const depth = depthAt(map, point);
-  return { x: (a * point.x + b * point.y + c) / depth, y: (d * point.x + e * point.y + f) / depth };
+  return { x: (map[0]! * point.x + map[1]! * point.y + map[2]!) / depth, y: (map[3]! * point.x + map[4]! * point.y + map[5]!) / depth };
 }
 
 /** The map that applies `inner` first. */
@@ -42,10 +41,11 @@ export function inverse(map: Homography): Homography {
 export function leastSquares(rows: readonly (readonly number[])[], unknowns: number): number[] | null {
   const system = Array.from({ length: unknowns }, () => new Float64Array(unknowns + 1));
   for (const row of rows) {
-    system.forEach((line, at) => {
-      const factor = row[at] ?? 0;
-      if (factor !== 0) for (let k = 0; k <= unknowns; k += 1) line[k] = (line[k] ?? 0) + factor * (row[k] ?? 0);
-    });
+    for (let at = 0; at < unknowns; at += 1) {
+      const factor = row[at]!;
+      const line = system[at]!;
+      if (factor !== 0) for (let k = 0; k <= unknowns; k += 1) line[k] = line[k]! + factor * row[k]!;
+    }
   }
   return eliminated(system);
 }
@@ -62,7 +62,7 @@ function eliminated(system: Float64Array[]): number[] | null {
     for (const line of system) {
       if (line === pivot) continue;
       const factor = (line[column] ?? 0) / (pivot[column] ?? 1);
-      if (factor !== 0) for (let k = column; k <= size; k += 1) line[k] = (line[k] ?? 0) - factor * (pivot[k] ?? 0);
+      if (factor !== 0) for (let k = column; k <= size; k += 1) line[k] = line[k]! - factor * pivot[k]!;
     }
   }
   return system.map((line, at) => (line[size] ?? 0) / (line[at] ?? 1));
@@ -88,8 +88,8 @@ export function fitHomography(pairs: readonly Pair[]): Homography | null {
     const { x: u, y: v } = mapped(behind, to);
     const w = Math.sqrt(weight);
     return [
-      [x, y, 1, 0, 0, 0, -u * x, -u * y, u].map((value) => value * w),
-      [0, 0, 0, x, y, 1, -v * x, -v * y, v].map((value) => value * w),
+      [w * x, w * y, w, 0, 0, 0, -w * u * x, -w * u * y, w * u],
+      [0, 0, 0, w * x, w * y, w, -w * v * x, -w * v * y, w * v],
     ];
   });
   const solved = leastSquares(rows, 8);

@@ -39,18 +39,18 @@ function medianAndSpread(levels: Uint8Array): { median: number; spread: number }
   return { median, spread: 1.4826 * middleOf(distances) };
 }
 
-/** Square millimetres of ink in a box, counted surely and perhaps. */
-export function inkAreas({ inside, pxPerMm, frameContrast }: Omit<InkQuestion, 'isBilevel'>): { strongMm2: number; weakMm2: number } {
+/** Tells the square millimetres of ink in a box that are darker than a share of its frame. */
+function areasOf({ inside, pxPerMm, frameContrast }: InkQuestion): (share: number) => number {
   const hat = blackTopHat(meanOfNine(inside), Math.max(3, Math.round(strokeMm * pxPerMm) | 1));
   const { median, spread } = medianAndSpread(hat.data);
   const region: Region = { ...hat, pxPerMm };
-  const areaFor = (share: number): number => areaOfPieces(region, Math.max(leastLevels, median + 5 * spread, share * frameContrast));
-  return { strongMm2: areaFor(strong), weakMm2: areaFor(weak) };
+  return (share) => areaOfPieces(region, Math.max(leastLevels, median + 5 * spread, share * frameContrast));
 }
 
 /** Whether somebody wrote in a box. A picture in black and white lost faint strokes, so that it never proves a box blank. */
 export function inkOf(question: InkQuestion): Ink {
-  const { strongMm2, weakMm2 } = inkAreas(question);
-  if (strongMm2 >= writtenMm2) return 'written';
-  return strongMm2 >= unsureMm2 || weakMm2 >= writtenMm2 || question.isBilevel ? 'unsure' : 'blank';
+  const areaFor = areasOf(question);
+  const surely = areaFor(strong);
+  if (surely >= writtenMm2) return 'written';
+  return surely >= unsureMm2 || question.isBilevel || areaFor(weak) >= writtenMm2 ? 'unsure' : 'blank';
 }

@@ -61,7 +61,7 @@ function isSpread(pairs: readonly Pair[], { widthMm, heightMm }: PageMm): boolea
 
 /** Distances of this order are noise; what lies much further hardly counts (Cauchy weights). */
 const usualErrorMm = 0.15;
-const roundsOfFit = 6;
+const roundsOfFit = 5;
 
 /** The map nearest to most of the points. */
 export function fitRobustly(pairs: readonly Pair[], page: PageMm, start: PageMap): PageMap {

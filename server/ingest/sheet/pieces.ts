@@ -24,11 +24,15 @@ const sliverMm = 0.5;
 function pieceFrom({ width, height, data }: Grey, start: number, level: number, seen: Uint8Array): Piece {
   const stack = [start];
   seen[start] = 1;
-  let [pixels, left, right, top, bottom] = [0, width, 0, height, 0];
+  const piece = { pixels: 0, left: width, right: 0, top: height, bottom: 0 };
   for (let at = stack.pop(); at !== undefined; at = stack.pop()) {
-    const [x, y] = [at % width, Math.floor(at / width)];
-    pixels += 1;
-    [left, right, top, bottom] = [Math.min(left, x), Math.max(right, x), Math.min(top, y), Math.max(bottom, y)];
+    const x = at % width;
+    const y = (at - x) / width;
+    piece.pixels += 1;
+    piece.left = Math.min(piece.left, x);
+    piece.right = Math.max(piece.right, x);
+    piece.top = Math.min(piece.top, y);
+    piece.bottom = Math.max(piece.bottom, y);
     for (let row = Math.max(0, y - 1); row <= Math.min(height - 1, y + 1); row += 1) {
       for (let column = Math.max(0, x - 1); column <= Math.min(width - 1, x + 1); column += 1) {
         const near = row * width + column;
@@ -38,7 +42,7 @@ function pieceFrom({ width, height, data }: Grey, start: number, level: number, 
       }
     }
   }
-  return { pixels, left, right, top, bottom };
+  return piece;
 }
 
 function isInk({ pixels, left, right, top, bottom }: Piece, { width, height, pxPerMm }: Region): boolean {

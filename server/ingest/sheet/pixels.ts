@@ -23,17 +23,32 @@ export function levelAt({ width, height, data }: Grey, x: number, y: number): nu
   const right = x - 0.5 - left;
   const down = y - 0.5 - top;
   const at = top * width + left;
-  const upper = (data[at] ?? 0) * (1 - right) + (data[at + 1] ?? 0) * right;
-  const lower = (data[at + width] ?? 0) * (1 - right) + (data[at + width + 1] ?? 0) * right;
+  const upper = data[at]! * (1 - right) + data[at + 1]! * right;
+  const lower = data[at + width]! * (1 - right) + data[at + width + 1]! * right;
   return upper * (1 - down) + lower * down;
 }
 
-/** The green of colour pixels, in which pencil and red and blue ink all are dark; the level of grey ones. */
-export function greyOf({ width, height, channels, data }: Pixels): Grey {
-  if (channels === 1) return { width, height, data };
-  const grey = new Uint8Array(width * height);
-  for (let at = 0, from = 1; at < grey.length; at += 1, from += channels) grey[at] = data[from] ?? 0;
-  return { width, height, data: grey };
+export function inverted({ width, height, data }: Grey): Grey {
+  const negative = new Uint8Array(data.length);
+  for (let at = 0; at < data.length; at = (at + 1) | 0) negative[at] = 255 - data[at]!;
+  return { width, height, data: negative };
 }
 
-export const inverted = ({ data, ...size }: Grey): Grey => ({ ...size, data: data.map((level) => 255 - level) });
+const sampleStepPx = 4;
+const colouredLevels = 32;
+/** A figure in coloured ink at 200 dpi leaves about twice as many. */
+const leastColoured = 20;
+
+/** Whether anything in a picture has a colour: every fourth pixel of every fourth row is asked. */
+export function isColoured({ width, height, channels, data }: Pixels): boolean {
+  if (channels === 1) return false;
+  let coloured = 0;
+  for (let y = 0; y < height; y += sampleStepPx) {
+    for (let x = 0; x < width; x += sampleStepPx) {
+      const at = (y * width + x) * channels;
+      const [red, green, blue] = [data[at]!, data[at + 1]!, data[at + 2]!];
+      if (Math.max(red, green, blue) - Math.min(red, green, blue) > colouredLevels && (coloured += 1) >= leastColoured) return true;
+    }
+  }
+  return false;
+}

@@ -1,8 +1,4 @@
-import type { Grey } from './pixels';
-
-type Pick2 = (one: number, other: number) => number;
-const larger: Pick2 = (one, other) => (one > other ? one : other);
-const smaller: Pick2 = (one, other) => (one < other ? one : other);
+import { inverted, type Grey } from './pixels';
 
 interface Lane {
   readonly start: number;
@@ -10,29 +6,53 @@ interface Lane {
   readonly count: number;
 }
 
-/** The largest (or smallest) of a window along one row or column, in three comparisons a pixel whatever the window (van Herk 1992, Gil and Werman 1993). */
-function slide(data: Uint8Array, target: Uint8Array, { start, stride, count }: Lane, { window, pick }: { window: number; pick: Pick2 }): void {
-  const half = window >> 1;
-  const padded = count + 2 * half;
-  const outside = pick === larger ? 0 : 255;
-  const level = (at: number): number => (at < half || at >= half + count ? outside : data[start + (at - half) * stride]!);
-  const [ahead, back] = [new Uint8Array(padded), new Uint8Array(padded)];
-  for (let at = 0; at < padded; at += 1) ahead[at] = at % window === 0 ? level(at) : pick(ahead[at - 1]!, level(at));
-  for (let at = padded - 1; at >= 0; at -= 1) back[at] = at === padded - 1 || (at + 1) % window === 0 ? level(at) : pick(back[at + 1]!, level(at));
-  for (let at = 0; at < count; at += 1) target[start + at * stride] = pick(back[at]!, ahead[at + window - 1]!);
+/** Room for one lane with its window beside it, and what was found in it forwards and backwards. */
+interface Bench {
+  readonly lane: Uint8Array;
+  readonly ahead: Uint8Array;
+  readonly back: Uint8Array;
 }
 
-function filtered({ width, height, data }: Grey, window: number, pick: Pick2): Grey {
-  const [rows, both] = [new Uint8Array(data.length), new Uint8Array(data.length)];
-  for (let line = 0; line < height; line += 1) slide(data, rows, { start: line * width, stride: 1, count: width }, { window, pick });
-  for (let column = 0; column < width; column += 1) slide(rows, both, { start: column, stride: width, count: height }, { window, pick });
-  return { width, height, data: both };
+/** The largest of a window along one row or column, in three comparisons a pixel whatever the window (van Herk 1992, Gil and Werman 1993). */
+function slide(data: Uint8Array, { start, stride, count }: Lane, window: number, { lane, ahead, back }: Bench): void {
+  const half = window >> 1;
+  const padded = count + 2 * half;
+  lane.fill(0, 0, half).fill(0, half + count, padded);
+  for (let at = 0, from = start; at < count; at += 1, from += stride) lane[half + at] = data[from]!;
+  for (let at = 0, best = 0; at < padded; at += 1) {
+    const level = lane[at]!;
+    best = at % window === 0 || level > best ? level : best;
+    ahead[at] = best;
+  }
+  for (let at = padded - 1, best = 0; at >= 0; at -= 1) {
+    const level = lane[at]!;
+    best = (at + 1) % window === 0 || level > best ? level : best;
+    back[at] = best;
+  }
+  for (let at = 0, to = start; at < count; at += 1, to += stride) {
+    const behind = back[at]!;
+    const before = ahead[at + window - 1]!;
+    data[to] = behind > before ? behind : before;
+  }
+}
+
+/** The largest of a square round each pixel. */
+function dilated({ width, height, data }: Grey, window: number): Grey {
+  const levels = data.slice();
+  const room = (): Uint8Array => new Uint8Array(Math.max(width, height) + window);
+  const bench: Bench = { lane: room(), ahead: room(), back: room() };
+  for (let line = 0; line < height; line += 1) slide(levels, { start: line * width, stride: 1, count: width }, window, bench);
+  for (let column = 0; column < width; column += 1) slide(levels, { start: column, stride: width, count: height }, window, bench);
+  return { width, height, data: levels };
 }
 
 /** How much darker each pixel is than the paper round it, where paper is what a square of the window's side finds everywhere: strokes stay, smudges and shadows go. */
 export function blackTopHat(grey: Grey, window: number): Grey {
-  const paper = filtered(filtered(grey, window, larger), window, smaller);
-  return { ...grey, data: paper.data.map((level, at) => level - grey.data[at]!) };
+  // The smallest of a window is the largest of the negative's.
+  const paper = inverted(dilated(inverted(dilated(grey, window)), window));
+  const hat = new Uint8Array(grey.data.length);
+  for (let at = 0; at < hat.length; at = (at + 1) | 0) hat[at] = paper.data[at]! - grey.data[at]!;
+  return { ...grey, data: hat };
 }
 
 /** Each pixel as the mean of itself and its eight neighbours; at the edge of those there are. */
@@ -41,11 +61,13 @@ export function meanOfNine({ width, height, data }: Grey): Grey {
   const means = new Uint8Array(data.length);
   for (let at = 0; at < data.length; at += 1) {
     const column = at % width;
-    const [left, right] = [column === 0 ? at : at - 1, column === width - 1 ? at : at + 1];
+    const left = column === 0 ? at : at - 1;
+    const right = column === width - 1 ? at : at + 1;
     sums[at] = data[left]! + data[at]! + data[right]!;
   }
   for (let at = 0; at < data.length; at += 1) {
-    const [above, below] = [at < width ? at : at - width, at >= width * (height - 1) ? at : at + width];
+    const above = at < width ? at : at - width;
+    const below = at >= width * (height - 1) ? at : at + width;
     means[at] = (sums[above]! + sums[at]! + sums[below]!) / 9 + 0.5;
   }
   return { width, height, data: means };

@@ -1,0 +1,40 @@
+import { readdirSync } from 'node:fs';
+import sharp from 'sharp';
+import { checkOf, layoutOf } from './printed';
+import { loadCodeFinder } from '../../server/ingest/sheet/codes';
+import { decodePage, greyOf } from '../../server/ingest/decode';
+import { isColoured } from '../../server/ingest/sheet/pixels';
+import { readSheet } from '../../server/ingest/sheet/read-sheet';
+import { identify } from '../../server/ingest/sheet/identify';
+import { levelsOf } from '../../server/ingest/sheet/levels';
+import { mapFromCodes, pairsOfCodes } from '../../server/ingest/sheet/page-map';
+import { refit, correct } from '../../server/ingest/sheet/frames';
+import { sheetPictures } from '../../server/ingest/sheet/sheet-pictures';
+import { warp } from '../../server/ingest/sheet/warp';
+import { after } from '../../server/ingest/sheet/homography';
+const dir = '/tmp/register/' + readdirSync('/tmp/register').filter((n) => n.startsWith('x-')).at(-1);
+const files = readdirSync(dir).map((n) => `${dir}/${n}`);
+const find = await loadCodeFinder();
+const t: Record<string, number> = {};
+let on = false;
+const tick = async <T>(n: string, f: () => T | Promise<T>): Promise<T> => { const c = process.cpuUsage(); const r = await f(); const d = process.cpuUsage(c); if (on) t[n] = (t[n] ?? 0) + (d.user + d.system) / 1e3; return r; };
+let pages = 0;
+for (let r = 0; r < 4; r++) { on = r > 0; for (const path of files) {
+  if (on) pages++;
+  await tick('floor', () => sharp(path).resize({ width: 1240 }).jpeg({ quality: 70 }).toBuffer());
+  const d = await tick('decode', () => decodePage({ path, index: 0, turns: 0 })); if (!d.ok) throw 1;
+  const g = await tick('grey', () => greyOf(d.pixels));
+  await tick('isColoured', () => isColoured(d.pixels));
+  const codes = await tick('codes', () => find(g));
+  const id = identify(codes, checkOf); if (!id.ok) throw 1;
+  const lay = layoutOf(id.identity)!;
+  const lv = await tick('levels', () => levelsOf(g, id.codes));
+  const start = await tick('map', () => mapFromCodes(id.codes, lay.page)!);
+  const pm = await tick('refit', () => refit({ grey: g, contrast: lv.contrast }, lay.boxes, lay.page, { ...start, codes: pairsOfCodes(id.codes, lay.page) }));
+  await tick('correct', () => lay.boxes.map((b) => correct({ grey: g, contrast: lv.contrast }, b, pm)));
+  const reading = await tick('readSheet whole', () => readSheet(g, { findCodes: find, checkOf, layoutOf: () => lay }));
+  if (reading.state !== 'read') { console.log(reading); continue; }
+  await tick('js warp display', () => warp(d.pixels.channels === 1 ? d.pixels : { ...g, channels: 1 }, after(reading.map, [25.4 / 150, 0, 0, 0, 25.4 / 150, 0, 0, 0, 1]), { width: 1240, height: 1754 }));
+  await tick('pictures', () => sheetPictures({ ...g, channels: 1 }, reading, lay.boxes));
+} }
+for (const [k, v] of Object.entries(t)) console.log(k, (v / pages).toFixed(1));
