@@ -1,15 +1,8 @@
 import sharp, { type Metadata, type Sharp } from 'sharp';
+import { safeSharp } from './safe-sharp';
 import type { Grey, Pixels } from './sheet/pixels';
 
-/** A4 at 600 dpi has 35 million pixels. */
-const mostPixels = 60_000_000;
 const shortestSidePx = 400;
-
-// NOTE libvips would read SVG and more from hostile bytes; this holds for the whole process.
-sharp.block({ operation: ['VipsForeignLoad'] });
-sharp.unblock({ operation: ['VipsForeignLoadJpeg', 'VipsForeignLoadPng', 'VipsForeignLoadTiff', 'VipsForeignLoadWebp'] });
-sharp.concurrency(1);
-sharp.cache(false);
 
 export interface PageOfFile {
   readonly path: string;
@@ -52,12 +45,11 @@ export async function greyOf(pixels: Pixels): Promise<Grey> {
 
 /** One page of a file as upright pixels. */
 export async function decodePage({ path, index, turns }: PageOfFile): Promise<Decoded> {
-  const decode = { limitInputPixels: mostPixels, failOn: 'warning' as const };
-  const metadata = await sharp(path, decode).metadata();
+  const metadata = await safeSharp(path).metadata();
   const { pages = 1 } = metadata;
   if (index >= pages) return { ok: false, refusal: `The file has no page ${index + 1}.` };
   const colours = metadata.space === 'b-w' || metadata.space === 'grey16' ? 'b-w' : 'srgb';
-  const upright = pixelsOf(await sharp(path, { ...decode, page: index }).autoOrient().flatten({ background: 'white' }).toColourspace(colours).raw({ depth: 'uchar' }).toBuffer({ resolveWithObject: true }));
+  const upright = pixelsOf(await safeSharp(path, { page: index }).autoOrient().flatten({ background: 'white' }).toColourspace(colours).raw({ depth: 'uchar' }).toBuffer({ resolveWithObject: true }));
   const pixels = turns === 0 ? upright : pixelsOf(await sharpOf(upright).rotate(turns * 90).raw().toBuffer({ resolveWithObject: true }));
   const { width, height } = pixels;
   if (Math.min(width, height) < shortestSidePx) return { ok: false, refusal: `The picture is ${width} by ${height} pixels: too small to read. Scan at 150 dpi or more.` };

@@ -1,5 +1,5 @@
 import { mapped, type Homography, type Point } from './homography';
-import { levelAt, type Grey } from './pixels';
+import { levelsBetween, type Grey } from './pixels';
 
 /** One side of a frame: its ends in millimetres and the way out of the box. */
 export interface SidePlace {
@@ -61,10 +61,7 @@ function levelsAcross({ grey, map, reachMm }: LookForSide, at: Point, out: Point
   const start = mapped(map, { x: at.x - out.x * half, y: at.y - out.y * half });
   const end = mapped(map, { x: at.x + out.x * half, y: at.y + out.y * half });
   const levels = new Float64Array(steps);
-  for (let step = 0; step < steps; step += 1) {
-    const share = step / (steps - 1);
-    levels[step] = levelAt(grey, start.x + (end.x - start.x) * share, start.y + (end.y - start.y) * share);
-  }
+  levelsBetween(grey, [start, end], levels);
   return levels;
 }
 
@@ -72,10 +69,12 @@ function levelsAcross({ grey, map, reachMm }: LookForSide, at: Point, out: Point
 function lineIn(levels: Float64Array): Float64Array {
   const sums = new Float64Array(levels.length + 1);
   for (let at = 0; at < levels.length; at += 1) sums[at + 1] = sums[at]! + levels[at]!;
-  const mean = (from: number, to: number): number => (sums[to + 1]! - sums[from]!) / (to - from + 1);
+  const paperSteps = paperTo - paperFrom + 1;
   const line = new Float64Array(levels.length);
   for (let at = paperTo; at < levels.length - paperTo; at += 1) {
-    line[at] = Math.min(mean(at - paperTo, at - paperFrom), mean(at + paperFrom, at + paperTo)) - mean(at - 1, at + 1);
+    const before = sums[at - paperFrom + 1]! - sums[at - paperTo]!;
+    const behind = sums[at + paperTo + 1]! - sums[at + paperFrom]!;
+    line[at] = (before < behind ? before : behind) / paperSteps - (sums[at + 2]! - sums[at - 1]!) / 3;
   }
   return line;
 }

@@ -1,3 +1,5 @@
+import type { Point } from './homography';
+
 /** Pixels row by row. Coordinates are continuous: the pixel in column 0 covers 0 to 1 and has its middle at 0.5. */
 export interface Pixels {
   readonly width: number;
@@ -15,17 +17,25 @@ export interface Grey {
 /** Beyond its edges a picture is taken to be paper. */
 export const paperLevel = 255;
 
-/** The level at a point, between the four nearest pixel middles; paper outside the picture. */
-export function levelAt({ width, height, data }: Grey, x: number, y: number): number {
-  const left = Math.floor(x - 0.5);
-  const top = Math.floor(y - 0.5);
-  if (left < 0 || top < 0 || left >= width - 1 || top >= height - 1) return paperLevel;
-  const right = x - 0.5 - left;
-  const down = y - 0.5 - top;
-  const at = top * width + left;
-  const upper = data[at]! * (1 - right) + data[at + 1]! * right;
-  const lower = data[at + width]! * (1 - right) + data[at + width + 1]! * right;
-  return upper * (1 - down) + lower * down;
+/** Levels at evenly spaced points from one to another, each between its four nearest pixel middles; paper outside the picture. */
+export function levelsBetween({ width, height, data }: Grey, [from, to]: readonly [Point, Point], levels: Float64Array): void {
+  const stepX = (to.x - from.x) / (levels.length - 1);
+  const stepY = (to.y - from.y) / (levels.length - 1);
+  let x = from.x - 0.5;
+  let y = from.y - 0.5;
+  for (let at = 0; at < levels.length; at += 1, x += stepX, y += stepY) {
+    if (x < 0 || y < 0 || x >= width - 1 || y >= height - 1) {
+      levels[at] = paperLevel;
+      continue;
+    }
+    const left = x | 0;
+    const top = y | 0;
+    const right = x - left;
+    const corner = top * width + left;
+    const upper = data[corner]! + (data[corner + 1]! - data[corner]!) * right;
+    const lower = data[corner + width]! + (data[corner + width + 1]! - data[corner + width]!) * right;
+    levels[at] = upper + (lower - upper) * (y - top);
+  }
 }
 
 export function inverted({ width, height, data }: Grey): Grey {

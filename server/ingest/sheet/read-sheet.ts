@@ -54,7 +54,7 @@ export type SheetReading =
 const enoughCodes = 3;
 /** A layout that is not this page's finds a side here and there; its own finds nearly all. */
 const leastSidesShare = 0.5;
-const inkDpi = 120;
+const inkDpi = 150;
 const insetMm = 0.9;
 
 const isOutside = ({ width, height }: PixelSize, { x, y }: Point): boolean => x < 0 || y < 0 || x > width || y > height;
