@@ -9,7 +9,7 @@ const longestMs = 10 * 60_000;
 export const wantsEvents = (req: Request): boolean => (req.get('Accept') ?? '').includes('text/event-stream');
 
 /** Sends what `next` tells as server-sent events until the other side goes away, `next` throws, or ten minutes have passed. */
-export function sendEvents(req: Request, res: Response, next: () => object | null): Promise<void> {
+export function sendEvents(res: Response, next: () => object | null): Promise<void> {
   res.status(200).set({ 'Content-Type': 'text/event-stream; charset=utf-8', 'Cache-Control': 'no-store', 'X-Accel-Buffering': 'no' });
   res.flushHeaders();
   return new Promise((resolve) => {

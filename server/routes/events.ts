@@ -10,7 +10,7 @@ export function eventRoutes(router: Router, context: Context): void {
     const first = eventFor(context, actor, params.id);
     if (query.since !== undefined || !wantsEvents(req)) return first;
     const next = eventsFor(context, actor, params.id);
-    await sendEvents(req, res, () => {
+    await sendEvents(res, () => {
       const event = next();
       return event === null ? null : sittingEvent.parse(event);
     });
