@@ -124,6 +124,18 @@ describe('hostile files', () => {
     expect((refused.body as { error: { message: string } }).error.message).toContain('The file is empty.');
   });
 
+  it('takes a file of 320 MB part by part without holding it', async () => {
+    const part = Buffer.alloc(8 * 1024 * 1024, 0x5a);
+    const parts = 40;
+    const before = server.peakMb();
+    const { body } = await reader.post(`/api/batches/${batchId}/uploads`).send({ fileName: 'W1-p1.tif', size: part.length * parts }).expect(201);
+    const { id } = body as UploadView;
+    for (let n = 0; n < parts; n += 1) await reader.put(`/api/uploads/${id}/parts/${n}`).attach('file', part, 'part').expect(200);
+    await reader.post(`/api/uploads/${id}/complete`).expect(202);
+    expect(await settled(id)).toMatchObject({ state: 'refused', problem: expect.stringMatching(noPicture) as string });
+    expect(server.peakMb() - before).toBeLessThan(160);
+  });
+
   it('has kept nothing of any of them, stayed up, and held less than a gigabyte', async () => {
     expect(hostile.length).toBeGreaterThanOrEqual(40);
     await reader.get('/api/ready').expect(200);

@@ -180,7 +180,7 @@ export function TrayRowView({ row, sittingId, canSend, isChosen, onShow, onCance
       const lines = [
         batch.state === 'cancelled' ? words.row.cancelled : '',
         all > 0 ? words.row.pages(all, placed) : batch.state === 'cancelled' ? '' : words.row.noPages,
-        batch.files.received > 0 ? words.row.making(batch.files.received) : '',
+        batch.files.received > batch.stuck ? words.row.making(batch.files.received - batch.stuck) : '',
         brokenOff > 0 ? words.row.waiting(brokenOff) : '',
       ].filter((line) => line !== '');
       return (

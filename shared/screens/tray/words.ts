@@ -41,7 +41,7 @@ export const words = {
     morePages: (n: number) => `and ${plural(n, 'more page')}`,
     restIn: 'The other pages of the file are in.',
     stuckDo: 'The file is kept. Nothing has to be sent again.',
-    notePages: (n: number) => `Said of ${plural(n, 'page')}. They are in.`,
+    notePages: (n: number) => (n === 1 ? 'Said of one page. It is in.' : `Said of ${n.toLocaleString('en-GB')} pages. They are in.`),
     makingPages: (done: number, of: number) => `${done.toLocaleString('en-GB')} of ${plural(of, 'page')} made`,
     loose: (bundle: string, n: number) => `Bundle ${bundle}, ${plural(n, 'loose page')}`,
     looseWhy: (n: number) => `No script has claimed ${n === 1 ? 'it' : 'them'}`,
