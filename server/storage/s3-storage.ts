@@ -4,7 +4,7 @@ import { mkdir, rm, stat } from 'node:fs/promises';
 import { join } from 'node:path';
 import type { Readable } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
-import { DeleteObjectCommand, GetObjectCommand, HeadObjectCommand, PutObjectCommand, S3Client, S3ServiceException } from '@aws-sdk/client-s3';
+import type { S3Client } from '@aws-sdk/client-s3';
 import type { ByteRange, Storage } from './storage';
 
 export interface S3Settings {
@@ -19,8 +19,17 @@ export interface S3Settings {
   readonly copiesDir: string;
 }
 
-function clientOf({ endpoint, region, accessKeyId, secretAccessKey, usesPathStyle }: S3Settings): S3Client {
-  return new S3Client({
+type Sdk = typeof import('@aws-sdk/client-s3');
+
+interface Connection {
+  readonly sdk: Sdk;
+  readonly client: S3Client;
+}
+
+/** Loads the client with the first blob: a server that keeps scans in its folder never does. */
+async function connect({ endpoint, region, accessKeyId, secretAccessKey, usesPathStyle }: S3Settings): Promise<Connection> {
+  const sdk = await import('@aws-sdk/client-s3');
+  const client = new sdk.S3Client({
     ...(endpoint === null ? {} : { endpoint }),
     region,
     credentials: { accessKeyId, secretAccessKey },
@@ -29,19 +38,25 @@ function clientOf({ endpoint, region, accessKeyId, secretAccessKey, usesPathStyl
     requestChecksumCalculation: 'WHEN_REQUIRED',
     responseChecksumValidation: 'WHEN_REQUIRED',
   });
+  return { sdk, client };
 }
 
-const isNotThere = (error: unknown): boolean => error instanceof S3ServiceException && error.$metadata.httpStatusCode === 404;
+const isNotThere = (error: unknown): boolean => {
+  const { httpStatusCode } = (error as { $metadata?: { httpStatusCode?: number } }).$metadata ?? {};
+  return httpStatusCode === 404;
+};
 
 /** Keeps blobs in a bucket that speaks the S3 protocol, below two levels as in a folder. */
 export function createS3Storage(settings: S3Settings): Storage {
-  const client = clientOf(settings);
+  let connection: Promise<Connection> | undefined;
+  const connected = (): Promise<Connection> => (connection ??= connect(settings));
   const { bucket, copiesDir } = settings;
   const at = (sha256: string) => ({ Bucket: bucket, Key: `${sha256.slice(0, 2)}/${sha256.slice(2, 4)}/${sha256}` });
 
   const size = async (sha256: string): Promise<number | null> => {
+    const { sdk, client } = await connected();
     try {
-      return (await client.send(new HeadObjectCommand(at(sha256)))).ContentLength ?? null;
+      return (await client.send(new sdk.HeadObjectCommand(at(sha256)))).ContentLength ?? null;
     } catch (error) {
       if (isNotThere(error)) return null;
       throw error;
@@ -49,12 +64,14 @@ export function createS3Storage(settings: S3Settings): Storage {
   };
 
   const keep = async (sha256: string, bytes: number, body: () => Uint8Array | Readable) => {
-    if ((await size(sha256)) !== bytes) await client.send(new PutObjectCommand({ ...at(sha256), Body: body(), ContentLength: bytes }));
+    const { sdk, client } = await connected();
+    if ((await size(sha256)) !== bytes) await client.send(new sdk.PutObjectCommand({ ...at(sha256), Body: body(), ContentLength: bytes }));
     return { sha256, size: bytes };
   };
 
   const stream = async (sha256: string, range?: ByteRange): Promise<Readable> => {
-    const { Body } = await client.send(new GetObjectCommand({ ...at(sha256), ...(range ? { Range: `bytes=${range.start}-${range.end}` } : {}) }));
+    const { sdk, client } = await connected();
+    const { Body } = await client.send(new sdk.GetObjectCommand({ ...at(sha256), ...(range ? { Range: `bytes=${range.start}-${range.end}` } : {}) }));
     if (!Body) throw new Error(`The store has no bytes for ${sha256}.`);
     return Body as Readable;
   };
@@ -79,6 +96,9 @@ export function createS3Storage(settings: S3Settings): Storage {
         await rm(path, { force: true });
       }
     },
-    remove: async (sha256) => void (await client.send(new DeleteObjectCommand(at(sha256)))),
+    remove: async (sha256) => {
+      const { sdk, client } = await connected();
+      await client.send(new sdk.DeleteObjectCommand(at(sha256)));
+    },
   };
 }
