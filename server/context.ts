@@ -1,6 +1,7 @@
 import type { Logger } from 'pino';
 import type { Database } from '../db/client';
 import type { Config } from './config/config';
+import type { Opener } from './ingest/inputs/opener';
 import type { Parts } from './ingest/parts';
 import type { Pictures } from './ingest/pictures';
 import type { Jobs } from './jobs/jobs';
@@ -18,6 +19,7 @@ export interface Context {
   readonly db: Database;
   readonly storage: Storage;
   readonly jobs: Jobs;
+  readonly opener: Opener;
   readonly pictures: Pictures;
   readonly printer: Printer;
   readonly parts: Parts;

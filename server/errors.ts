@@ -26,3 +26,8 @@ export const notFound = () => new AppError('not_found', 'There is nothing at thi
 export const notAllowed = (message = 'Your role does not allow this.') => new AppError('not_allowed', message);
 
 export const conflict = (message: string, current?: unknown) => new AppError('conflict', message, current === undefined ? {} : { current });
+
+export const noSpace = () => new AppError('no_space', 'The disk of the server is full. What arrived is kept; tell whoever looks after it, then send the rest.');
+
+/** Whether a write failed because the disk has no room, or the person's share of it. */
+export const isDiskFull = (error: unknown): boolean => error instanceof Error && 'code' in error && (error.code === 'ENOSPC' || error.code === 'EDQUOT' || error.code === 'SQLITE_FULL');

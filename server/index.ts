@@ -32,6 +32,8 @@ export async function startServer(config: Config, handlers: Parameters<typeof cr
       await new Promise<void>((resolve) => {
         server.close(() => resolve());
         server.closeIdleConnections();
+        // Streams of events would go on for ever.
+        setTimeout(() => server.closeAllConnections(), 1000).unref();
       });
       await close();
     },

@@ -1,4 +1,4 @@
-import { and, asc, count, eq, inArray, lte, sql } from 'drizzle-orm';
+import { and, asc, count, eq, gte, inArray, lte, sql } from 'drizzle-orm';
 import type { Database } from '../client';
 import { job } from '../schema';
 
@@ -27,6 +27,11 @@ export function claimJob(db: Database, now: number, leasedUntil: number): JobRow
     .get();
 }
 
+/** Some of a job's work is on disk: it is held longer, and what went wrong before counts no more. */
+export function beatJob(db: Database, id: string, leasedUntil: number): void {
+  db.update(job).set({ leasedUntil, tries: 1, crashes: 0 }).where(eq(job.id, id)).run();
+}
+
 export function finishJob(db: Database, id: string): void {
   db.update(job).set({ state: 'done', leasedUntil: null, error: null }).where(eq(job.id, id)).run();
 }
@@ -39,10 +44,33 @@ export function failJob(db: Database, id: string, error: string, again: { runAt:
     .run();
 }
 
-/** What an earlier process left running waits again: only one process works on a database. */
-export function reviveJobs(db: Database): void {
-  db.update(job).set({ state: 'waiting', leasedUntil: null }).where(eq(job.state, 'running')).run();
+/** What an earlier process left running waits again, unless it ended too many of them: only one process works on a database. */
+export function reviveJobs(db: Database, mostCrashes: number): void {
+  db.update(job)
+    .set({ state: 'waiting', leasedUntil: null, tries: sql`${job.tries} - 1`, crashes: sql`${job.crashes} + 1` })
+    .where(eq(job.state, 'running'))
+    .run();
+  db.update(job)
+    .set({ state: 'dead', error: 'The server stopped each time it was tried.' })
+    .where(and(eq(job.state, 'waiting'), gte(job.crashes, mostCrashes)))
+    .run();
 }
+
+/** Jobs that were given up, by the key they were added with. */
+export const deadJobs = (db: Database, keys: readonly string[]): Map<string, string> =>
+  new Map(
+    db
+      .select({ key: job.dedupeKey, error: job.error })
+      .from(job)
+      .where(and(eq(job.state, 'dead'), inArray(job.dedupeKey, [...keys])))
+      .orderBy(asc(job.id))
+      .all()
+      .map(({ key, error }) => [key, error ?? '']),
+  );
+
+/** Ends what is not under way: a waiting job, and the record of a dead one. */
+export const cancelJobs = (db: Database, keys: readonly string[]): void =>
+  void db.update(job).set({ state: 'cancelled' }).where(and(inArray(job.state, ['waiting', 'dead']), inArray(job.dedupeKey, [...keys]))).run();
 
 export function openJobs(db: Database): number {
   return db.select({ n: count() }).from(job).where(inArray(job.state, ['waiting', 'running'])).get()?.n ?? 0;

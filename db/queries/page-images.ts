@@ -1,4 +1,4 @@
-import { and, asc, eq, inArray, isNull, sql } from 'drizzle-orm';
+import { and, asc, eq, inArray, isNull, ne, or, sql } from 'drizzle-orm';
 import type { Attendance } from '../../shared/contracts/enums';
 import type { Database } from '../client';
 import { answer, batch, box, candidate, crop, layoutPage, page, pageImage, reading, readingEnd, ruling, rulingEnd, script, upload } from '../schema';
@@ -14,9 +14,12 @@ export const updatePageImage = (db: Database, id: string, changes: Partial<Omit<
     .where(eq(pageImage.id, id))
     .run();
 
+/** A page goes by the name of its file in an archive, where there is one. */
+const nameShown = sql<string>`coalesce(${pageImage.name}, ${upload.fileName})`;
+
 export const findPageImage = (db: Database, id: string) =>
   db
-    .select({ image: pageImage, fileName: upload.fileName, candidateNumber: candidate.number, pageNo: page.pageNo })
+    .select({ image: pageImage, fileName: nameShown, candidateNumber: candidate.number, pageNo: page.pageNo })
     .from(pageImage)
     .innerJoin(upload, eq(upload.id, pageImage.upload))
     .leftJoin(page, eq(page.id, pageImage.page))
@@ -25,9 +28,24 @@ export const findPageImage = (db: Database, id: string) =>
     .where(eq(pageImage.id, id))
     .get();
 
+/** The row of one page of a file, if an earlier run wrote it. */
+export const pageImageAt = (db: Database, uploadId: string, index: number) =>
+  db.select({ id: pageImage.id }).from(pageImage).where(and(eq(pageImage.upload, uploadId), eq(pageImage.index, index))).get();
+
+/** A page of the sitting made of the same bytes, or that looks the same to the last pixel. */
+export const samePicture = (db: Database, sittingId: string, { original, frame }: { readonly original: string; readonly frame: number }, display: string | null) =>
+  db
+    .select({ upload: pageImage.upload, index: pageImage.index, name: pageImage.name, pages: upload.pages, fileName: upload.fileName, bundle: batch.bundle })
+    .from(pageImage)
+    .innerJoin(upload, eq(upload.id, pageImage.upload))
+    .innerJoin(batch, eq(batch.id, upload.batch))
+    .where(and(eq(pageImage.sitting, sittingId), ne(pageImage.state, 'refused'), or(and(eq(pageImage.original, original), eq(pageImage.frame, frame)), display === null ? undefined : eq(pageImage.display, display))))
+    .limit(1)
+    .get();
+
 export const loosePages = (db: Database, sittingId: string) =>
   db
-    .select({ id: pageImage.id, fileName: upload.fileName, bundle: batch.bundle, why: pageImage.why, rev: pageImage.rev })
+    .select({ id: pageImage.id, fileName: nameShown, bundle: batch.bundle, why: pageImage.why, rev: pageImage.rev })
     .from(pageImage)
     .innerJoin(upload, eq(upload.id, pageImage.upload))
     .innerJoin(batch, eq(batch.id, upload.batch))
@@ -111,10 +129,10 @@ export const answersOfScript = (db: Database, scriptId: string): Map<string, str
   new Map(db.select({ id: answer.id, item: answer.item }).from(answer).where(eq(answer.script, scriptId)).all().map((row) => [row.item, row.id]));
 
 export const saveCrop = (db: Database, row: typeof crop.$inferInsert): void => {
-  const { pageImage: image, blob, widthPx, heightPx } = row;
+  const { pageImage: image, blob, widthPx, heightPx, evidence = 'in', sidesConfirmed = null, ink = null } = row;
   db.insert(crop)
     .values(row)
-    .onConflictDoUpdate({ target: [crop.answer, crop.box], set: { pageImage: image, blob, widthPx, heightPx, rev: sql`${crop.rev} + 1` } })
+    .onConflictDoUpdate({ target: [crop.answer, crop.box], set: { pageImage: image, blob, widthPx, heightPx, evidence, sidesConfirmed, ink, rev: sql`${crop.rev} + 1` } })
     .run();
 };
 

@@ -55,18 +55,30 @@ export const fileCount = (db: Database, batchId: string): number => db.select({ 
 export const insertUpload = (db: Database, row: typeof upload.$inferInsert): void => void db.insert(upload).values(row).run();
 export const findUpload = (db: Database, id: string): UploadRow | undefined => db.select().from(upload).where(eq(upload.id, id)).get();
 
-export const updateUpload = (db: Database, id: string, changes: Partial<Pick<UploadRow, 'state' | 'problem' | 'sha256'>>): void =>
+export const updateUpload = (db: Database, id: string, changes: Partial<Pick<UploadRow, 'state' | 'problem' | 'sha256' | 'pages'>>): void =>
   void db.update(upload).set(changes).where(eq(upload.id, id)).run();
 
-/** Gives up what is still on its way in a batch. */
-export const cancelSending = (db: Database, batchId: string): string[] =>
+/** Gives up what is still on its way in a batch, or waits for its pages. */
+export const cancelUploads = (db: Database, batchId: string): string[] =>
   db
     .update(upload)
     .set({ state: 'cancelled' })
-    .where(and(eq(upload.batch, batchId), eq(upload.state, 'sending')))
+    .where(and(eq(upload.batch, batchId), inArray(upload.state, ['sending', 'received'])))
     .returning({ id: upload.id })
     .all()
     .map(({ id }) => id);
+
+/** Files of a batch that wait for their pages. */
+export const receivedUploads = (db: Database, batchId: string): string[] =>
+  db.select({ id: upload.id }).from(upload).where(and(eq(upload.batch, batchId), eq(upload.state, 'received'))).all().map(({ id }) => id);
+
+/** Pages of a batch that wait to be made, as far as files told how many they hold, and those of these files that are made. */
+export function pagesUnderWay(db: Database, batchId: string): { done: number; of: number } {
+  const inMaking = and(eq(upload.batch, batchId), eq(upload.state, 'received'));
+  const of = db.select({ n: sql<number>`coalesce(sum(${upload.pages}), 0)` }).from(upload).where(inMaking).get()?.n ?? 0;
+  const done = db.select({ n: count() }).from(pageImage).innerJoin(upload, eq(upload.id, pageImage.upload)).where(inMaking).get()?.n ?? 0;
+  return { done, of };
+}
 
 export const savePart = (db: Database, row: typeof uploadPart.$inferInsert): void =>
   void db.insert(uploadPart).values(row).onConflictDoUpdate({ target: [uploadPart.upload, uploadPart.part], set: { size: row.size } }).run();
@@ -84,10 +96,12 @@ export const sameFile = (db: Database, sittingId: string, sha256: string, except
     .limit(1)
     .get();
 
+export const pageIndexesOf = (db: Database, uploadId: string): number[] => db.select({ index: pageImage.index }).from(pageImage).where(eq(pageImage.upload, uploadId)).all().map((row) => row.index);
+
 /** The pages made of files, with the place each has. */
 export const pagesOfUploads = (db: Database, uploadIds: readonly string[]) =>
   db
-    .select({ id: pageImage.id, upload: pageImage.upload, index: pageImage.index, state: pageImage.state, why: pageImage.why, candidateNumber: candidate.number, pageNo: page.pageNo })
+    .select({ id: pageImage.id, upload: pageImage.upload, index: pageImage.index, state: pageImage.state, why: pageImage.why, name: pageImage.name, note: pageImage.note, candidateNumber: candidate.number, pageNo: page.pageNo })
     .from(pageImage)
     .leftJoin(page, eq(page.id, pageImage.page))
     .leftJoin(script, eq(script.id, page.script))

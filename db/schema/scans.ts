@@ -1,6 +1,6 @@
 import { sql } from 'drizzle-orm';
 import { index, integer, real, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core';
-import { batchStates, evidenceKinds, jobStates, pageImageStates, uploadStates } from '../../shared/contracts/enums';
+import { batchStates, evidenceKinds, inkKinds, jobStates, pageImageStates, uploadStates } from '../../shared/contracts/enums';
 import { answer } from './answers';
 import { id, instant, rev } from './columns';
 import { person } from './people';
@@ -39,6 +39,8 @@ export const upload = sqliteTable(
     sha256: text(),
     state: text({ enum: uploadStates }).notNull().default('sending'),
     problem: text(),
+    /** Pages the file holds, once it was opened; each gets its page image, taken or refused. */
+    pages: integer(),
     madeAt: instant().notNull(),
   },
   (table) => [index('upload_by_batch').on(table.batch)],
@@ -62,7 +64,14 @@ export const pageImage = sqliteTable(
     upload: text().notNull().references(() => upload.id),
     index: integer().notNull(),
     sitting: text().notNull().references(() => sitting.id),
+    /** The picture as it came: the upload itself, a file of an archive, or a page taken out of a PDF. */
     original: text().references(() => blob.sha256),
+    /** Which page of the original this is. */
+    frame: integer().notNull().default(0),
+    /** Name of its file in an archive. */
+    name: text(),
+    /** Advice for the next scan. */
+    note: text(),
     display: text().references(() => blob.sha256),
     thumb: text().references(() => blob.sha256),
     widthPx: integer(),
@@ -96,6 +105,10 @@ export const crop = sqliteTable(
     widthPx: integer().notNull(),
     heightPx: integer().notNull(),
     evidence: text({ enum: evidenceKinds }).notNull().default('in'),
+    /** Sides of its printed frame that were seen where they belong; null for a box without one. */
+    sidesConfirmed: integer(),
+    /** Whether something is written in it; null where nothing was printed to judge by. */
+    ink: text({ enum: inkKinds }),
     rev: rev(),
   },
   (table) => [uniqueIndex('crop_of_box').on(table.answer, table.box), index('crop_by_image').on(table.pageImage)],
@@ -111,6 +124,8 @@ export const job = sqliteTable(
     payload: text({ mode: 'json' }).$type<Record<string, unknown>>().notNull(),
     state: text({ enum: jobStates }).notNull().default('waiting'),
     tries: integer().notNull().default(0),
+    /** How often the process ended under it. */
+    crashes: integer().notNull().default(0),
     runAt: instant().notNull(),
     leasedUntil: instant(),
     error: text(),

@@ -17,8 +17,35 @@ const environment = z.object({
   LOG_LEVEL: z.enum(['silent', 'error', 'warn', 'info', 'debug']).default('warn'),
   DEMO: z.enum(['true', 'false']).default('true'),
   DEV_WEB_ORIGIN: z.url().optional(),
+  STORAGE: z.enum(['local', 's3']).default('local'),
+  S3_ENDPOINT: z.url().optional(),
+  S3_REGION: z.string().min(1).default('us-east-1'),
+  S3_BUCKET: z.string().min(3).optional(),
+  S3_ACCESS_KEY_ID: z.string().min(1).optional(),
+  S3_SECRET_ACCESS_KEY: z.string().min(1).optional(),
+  S3_PATH_STYLE: z.enum(['true', 'false']).default('true'),
+  KEEP_FREE_MB: z.coerce.number().int().min(0).default(500),
   SIGN_IN_TRIES: z.coerce.number().int().min(1).default(5),
 });
+
+type Environment = z.infer<typeof environment>;
+
+/** A bucket for scans; null where they lie in the data folder. */
+export interface BucketConfig {
+  readonly endpoint: string | null;
+  readonly region: string;
+  readonly bucket: string;
+  readonly accessKeyId: string;
+  readonly secretAccessKey: string;
+  readonly usesPathStyle: boolean;
+}
+
+function bucketOf(env: Environment): BucketConfig | null {
+  if (env.STORAGE === 'local') return null;
+  const { S3_BUCKET: bucket, S3_ACCESS_KEY_ID: accessKeyId, S3_SECRET_ACCESS_KEY: secretAccessKey } = env;
+  if (!bucket || !accessKeyId || !secretAccessKey) throw new Error('The environment is not usable:\n  STORAGE: s3 needs S3_BUCKET, S3_ACCESS_KEY_ID and S3_SECRET_ACCESS_KEY.\nEvery variable is described in .env.example.');
+  return { endpoint: env.S3_ENDPOINT ?? null, region: env.S3_REGION, bucket, accessKeyId, secretAccessKey, usesPathStyle: env.S3_PATH_STYLE === 'true' };
+}
 
 export interface Config {
   readonly mode: 'development' | 'production' | 'test';
@@ -36,6 +63,9 @@ export interface Config {
   readonly demo: boolean;
   /** While developing: where Metro serves the web app, which this server passes on. */
   readonly devWebOrigin: string | null;
+  readonly bucket: BucketConfig | null;
+  /** What uploads leave free on the disk of the data folder. */
+  readonly keepFreeBytes: number;
   /** Refused sign-ins a quarter of an hour before the next waits. */
   readonly signInTries: number;
 }
@@ -72,6 +102,8 @@ export function readConfig(variables: NodeJS.ProcessEnv = process.env): Config {
     logLevel: env.LOG_LEVEL,
     demo: env.DEMO === 'true',
     devWebOrigin: env.NODE_ENV === 'development' ? (env.DEV_WEB_ORIGIN ?? null) : null,
+    bucket: bucketOf(env),
+    keepFreeBytes: env.KEEP_FREE_MB * 1024 * 1024,
     signInTries: env.SIGN_IN_TRIES,
   };
 }

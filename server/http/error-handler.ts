@@ -2,7 +2,7 @@ import type { ErrorRequestHandler, RequestHandler } from 'express';
 import multer from 'multer';
 import { errorStatuses, type ErrorBody } from '../../shared/contracts/errors';
 import type { Context } from '../context';
-import { AppError, invalidRequest, notFound } from '../errors';
+import { AppError, invalidRequest, isDiskFull, noSpace, notFound } from '../errors';
 
 interface WithStatus {
   readonly status?: number;
@@ -12,6 +12,7 @@ interface WithStatus {
 /** Errors of the middleware before us, in our own words. */
 function asAppError(error: unknown): AppError | null {
   if (error instanceof AppError) return error;
+  if (isDiskFull(error)) return noSpace();
   if (error instanceof multer.MulterError) {
     return error.code === 'LIMIT_FILE_SIZE' ? new AppError('too_large', 'A part holds at most 8 MiB.') : invalidRequest(`The upload is not as described: ${error.message}.`);
   }

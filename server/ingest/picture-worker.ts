@@ -1,94 +1,88 @@
 import { stat } from 'node:fs/promises';
-import sharp, { type Metadata } from 'sharp';
-import { areaOfBox, type BoxMm, type PageMm, type PixelSize } from './cutting';
+import { checkWith } from '../print/sheet-check';
+import { decodePage, greyOf, refusalFor, resized, type Decoded, type PageOfFile } from './decode';
 import { kindOfFile, mediaTypes, refusalOf } from './file-kinds';
+import { isShownAsItCame, wholePagePictures, type Cut, type MadePictures } from './page-pictures';
+import { loadCodeFinder, type CodeFinder } from './sheet/codes';
+import { inverted, isColoured, type Pixels } from './sheet/pixels';
+import { readSheet, type SheetReading } from './sheet/read-sheet';
+import { sheetPictures } from './sheet/sheet-pictures';
+import { layoutsOf, type SheetKeys, type SheetReport } from './sheet/sheet-task';
 
-/** A4 at 600 dpi has 35 million pixels. */
-const mostPixels = 60_000_000;
-const shortestSidePx = 400;
-const displayLongSidePx = 2400;
-const thumbLongSidePx = 320;
-/** A JPEG no heavier than this is shown as it came. */
-const heaviestShownBytes = 1_500_000;
-/** Half the time of the smallest possible file, for a twentieth more bytes. */
-const encoding = { quality: 80, optimiseCoding: false } as const;
+/** Codes, frames and faint strokes are all there at 220 dpi; more pixels cost time only. */
+const readLongSidePx = 2600;
 
-// NOTE libvips would read SVG and more from hostile bytes; this holds for the whole process.
-sharp.block({ operation: ['VipsForeignLoad'] });
-sharp.unblock({ operation: ['VipsForeignLoadJpeg', 'VipsForeignLoadPng', 'VipsForeignLoadTiff', 'VipsForeignLoadWebp'] });
-sharp.concurrency(1);
-sharp.cache(false);
-
-export interface PictureTask {
-  readonly path: string;
-  readonly index: number;
-  /** Quarter turns clockwise after the picture was set upright. */
-  readonly turns: number;
-  /** Boxes to cut out, with the size of the page they are measured on. */
-  readonly cut: { readonly page: PageMm; readonly boxes: readonly BoxMm[] } | null;
+export interface PictureTask extends PageOfFile {
+  readonly cut: Cut | null;
 }
 
-export interface MadeCrop extends PixelSize {
-  readonly box: string;
-  readonly jpeg: Uint8Array;
+/** `cut` is for a page on which no code is found. */
+export interface SheetTask extends PictureTask {
+  readonly sheets: SheetKeys;
 }
 
-export type PictureResult =
-  | { readonly ok: false; readonly refusal: string }
-  | (PixelSize & {
-      readonly ok: true;
-      readonly mediaType: string;
-      /** Pages of the file. */
-      readonly pages: number;
-      /** Null where the file itself can be shown. */
-      readonly display: Uint8Array | null;
-      readonly thumb: Uint8Array;
-      readonly crops: readonly MadeCrop[];
-    });
-
-/** What a failed decoding means to the person who sent the file. */
-function refusalFor(error: unknown): string {
-  const message = error instanceof Error ? error.message : '';
-  if (message.includes('pixel limit')) return 'The picture has more than 60 million pixels. Scan at 600 dpi or less.';
-  return 'The file is incomplete or damaged. Scan or upload it again.';
+interface Refused {
+  readonly ok: false;
+  readonly refusal: string;
 }
 
-/** Whether a browser can show the file as it came: an upright JPEG in ordinary colours, of a size that a screen needs. */
-const isShownAsItCame = ({ format, orientation = 1, width, height, space }: Metadata, bytes: number, turns: number): boolean =>
-  format === 'jpeg' && turns === 0 && orientation === 1 && (space === 'srgb' || space === 'b-w') && Math.max(width, height) <= displayLongSidePx && bytes <= heaviestShownBytes;
-
-async function makePictures({ path, index, turns, cut }: PictureTask, mediaType: string): Promise<PictureResult> {
-  const decode = { limitInputPixels: mostPixels, failOn: 'warning' as const };
-  const metadata = await sharp(path, decode).metadata();
-  const { pages = 1 } = metadata;
-  if (index >= pages) return { ok: false, refusal: `The file has no page ${index + 1}.` };
-  const upright = await sharp(path, { ...decode, page: index }).autoOrient().flatten({ background: 'white' }).toColourspace('srgb').raw({ depth: 'uchar' }).toBuffer({ resolveWithObject: true });
-  const turned = turns === 0 ? upright : await sharp(upright.data, { raw: upright.info }).rotate(turns * 90).raw().toBuffer({ resolveWithObject: true });
-  const { width, height } = turned.info;
-  if (Math.min(width, height) < shortestSidePx) return { ok: false, refusal: `The picture is ${width} by ${height} pixels: too small to read. Scan at 150 dpi or more.` };
-  const whole = () => sharp(turned.data, { raw: turned.info });
-  const fitted = (side: number, kernel: 'linear' | 'lanczos3') => whole().resize({ width: side, height: side, fit: 'inside', withoutEnlargement: true, kernel }).jpeg(encoding).toBuffer({ resolveWithObject: true });
-  const crop = async (box: BoxMm, page: PageMm): Promise<MadeCrop> => {
-    const { data, info } = await whole().extract(areaOfBox(box, page, { width, height })).jpeg(encoding).toBuffer({ resolveWithObject: true });
-    return { box: box.id, jpeg: data, width: info.width, height: info.height };
-  };
-  const asItCame = isShownAsItCame(metadata, (await stat(path)).size, turns);
-  const [display, thumb, ...crops] = await Promise.all([
-    asItCame ? null : fitted(displayLongSidePx, 'lanczos3'),
-    fitted(thumbLongSidePx, 'linear'),
-    ...(cut?.boxes ?? []).map((box) => crop(box, cut?.page ?? { widthMm: 1, heightMm: 1 })),
-  ]);
-  return { ok: true, mediaType, pages, width: display?.info.width ?? width, height: display?.info.height ?? height, display: display?.data ?? null, thumb: thumb.data, crops };
+export interface MadePage extends MadePictures {
+  readonly ok: true;
+  readonly mediaType: string;
+  /** Pages of the file. */
+  readonly pages: number;
 }
 
-/** Decodes one page of a file once and makes all its pictures: display, thumbnail, cut-outs. Runs in a worker thread. */
-export default async function makePage(task: PictureTask): Promise<PictureResult> {
+export type PictureResult = Refused | MadePage;
+export type SheetResult = Refused | (MadePage & { readonly sheet: SheetReport });
+
+type Page = Extract<Decoded, { ok: true }>;
+
+/** Decodes a page and goes on with it; what cannot be decoded is refused in a sentence. */
+async function onPage<Made extends { readonly ok: boolean }>(task: PageOfFile, make: (page: Page, mediaType: string) => Promise<Made>): Promise<Refused | Made> {
   const kind = await kindOfFile(task.path);
   const refusal = refusalOf(kind);
   if (refusal !== null) return { ok: false, refusal };
   try {
-    return await makePictures(task, mediaTypes[kind] ?? 'application/octet-stream');
+    const decoded = await decodePage(task);
+    return decoded.ok ? await make(decoded, mediaTypes[kind] ?? 'application/octet-stream') : decoded;
   } catch (error) {
     return { ok: false, refusal: refusalFor(error) };
   }
+}
+
+async function wholePage({ path, turns, cut }: PictureTask, { pixels, metadata, pages }: Page, mediaType: string): Promise<MadePage> {
+  const asItCame = isShownAsItCame(metadata, (await stat(path)).size, turns);
+  return { ok: true, mediaType, pages, ...(await wholePagePictures(pixels, cut, asItCame)) };
+}
+
+/** Whether nothing on a page speaks against what its file name says. */
+const isWithoutClaim = (reading: SheetReading): boolean => reading.state === 'unidentified' && (reading.reason === 'no-code' || reading.reason === 'other-codes');
+
+let finder: Promise<CodeFinder> | undefined;
+
+async function sheetPage(task: SheetTask, page: Page, mediaType: string): Promise<MadePage & { readonly sheet: SheetReport }> {
+  const { secret, pages } = task.sheets;
+  const isLarge = Math.max(page.pixels.width, page.pixels.height) > readLongSidePx;
+  const pixels = isLarge ? await resized(page.pixels, readLongSidePx) : page.pixels;
+  const layoutOf = layoutsOf(pages);
+  const grey = await greyOf(pixels);
+  const reading = readSheet(grey, { findCodes: await (finder ??= loadCodeFinder()), checkOf: checkWith(secret), layoutOf });
+  if (reading.state !== 'read') return { ...(await wholePage(isWithoutClaim(reading) ? task : { ...task, cut: null }, page, mediaType)), sheet: reading };
+  const seen: Pixels = isColoured(pixels) ? pixels : { ...grey, channels: 1 };
+  const shown: Pixels = reading.isNegative ? { ...inverted(seen), channels: seen.channels } : seen;
+  const { mmToPx, ...pictures } = await sheetPictures(shown, reading, layoutOf(reading.identity)?.boxes ?? []);
+  const { map: _, boxes, ...report } = reading;
+  const sheet: SheetReport = { ...report, mmToPx, boxes: boxes.map(({ corners: __, ...box }) => box) };
+  return { ok: true, mediaType, pages: page.pages, ...pictures, sheet };
+}
+
+/** Decodes one page of a file once and makes all its pictures: display, thumbnail, cut-outs. Runs in a worker thread. */
+export default function makePage(task: PictureTask): Promise<PictureResult> {
+  return onPage(task, (page, mediaType) => wholePage(task, page, mediaType));
+}
+
+/** The same for a page that may be a printed sheet: its codes say which, and its pictures show it as it was printed. */
+export function makeSheet(task: SheetTask): Promise<SheetResult> {
+  return onPage(task, (page, mediaType) => sheetPage(task, page, mediaType));
 }

@@ -1,5 +1,5 @@
-/** Work done later. A handler is idempotent: after a crash it may run again from the start. */
-export type JobHandler = (payload: Record<string, unknown>) => Promise<void>;
+/** Work done later. A handler is idempotent: after a crash it may run again. It calls `beat` whenever some of the work is on disk. */
+export type JobHandler = (payload: Record<string, unknown>, beat: () => void) => Promise<void>;
 
 export interface Jobs {
   /** Registers what does the work of one kind. Called at start, before run(). */

@@ -1,11 +1,13 @@
 import type { Logger } from 'pino';
 import { v7 as uuidv7 } from 'uuid';
 import type { Database } from '../../db/client';
-import { claimJob, failJob, finishJob, insertJob, nextRunAt, openJobs, reviveJobs } from '../../db/queries/jobs';
+import { beatJob, claimJob, failJob, finishJob, insertJob, nextRunAt, openJobs, reviveJobs } from '../../db/queries/jobs';
 import type { Clock } from '../context';
 import type { JobHandler, Jobs } from './jobs';
 
 const triesAllowed = 4;
+/** Far more often than power fails in a row: a job that was under way each time is the likely cause. */
+const crashesAllowed = 30;
 const leaseMs = 10 * 60_000;
 
 interface Settings {
@@ -27,7 +29,7 @@ export function createSqliteJobs({ db, clock, log, lanes }: Settings): Jobs {
     try {
       const handler = handlers.get(claimed.kind);
       if (!handler) throw new Error(`Nothing here does jobs of the kind ${claimed.kind}.`);
-      await handler(claimed.payload);
+      await handler(claimed.payload, () => beatJob(db, claimed.id, clock.now() + leaseMs));
       finishJob(db, claimed.id);
     } catch (error) {
       const message = error instanceof Error ? error.message : String(error);
@@ -60,7 +62,7 @@ export function createSqliteJobs({ db, clock, log, lanes }: Settings): Jobs {
       setImmediate(fill);
     },
     run: () => {
-      reviveJobs(db);
+      reviveJobs(db, crashesAllowed);
       running = true;
       fill();
     },

@@ -10,7 +10,9 @@ import { peopleAndPaper } from '../services/people/overview';
 
 export function peopleAndPaperRoutes(router: Router, context: Context): void {
   route(router, context, listNumberStrips, ({ actor, params, query }) => numbers.numberStrips(context, actor, params.id, query.limit));
-  asyncRoute(router, context, getNumberStrip, ({ actor, params, query, res }) => sendPicture(res, context.storage, numbers.pictureOfStrip(context, actor, params.id), query.v));
+  asyncRoute(router, context, getNumberStrip, ({ actor, params, query, req, res }) =>
+    sendPicture(req, res, context.storage, { sha256: numbers.pictureOfStrip(context, actor, params.id), mediaType: 'image/jpeg', named: query.v }),
+  );
   route(router, context, readNumber, ({ actor, params, body }) => {
     numbers.readNumber(context, actor, params.id, body);
     return { kept: true as const };

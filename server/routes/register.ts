@@ -3,6 +3,7 @@ import type { AppPassport } from '../auth/passport';
 import type { Context } from '../context';
 import { classListRoutes } from './class-list';
 import { deskRoutes } from './desk';
+import { eventRoutes } from './events';
 import { itemRoutes } from './items';
 import { layoutRoutes } from './layouts';
 import { ledgerRoutes } from './ledger';
@@ -28,6 +29,7 @@ export function registerRoutes(router: Router, context: Context, passport: AppPa
   itemRoutes(router, context);
   classListRoutes(router, context);
   scanRoutes(router, context);
+  eventRoutes(router, context);
   vettingRoutes(router, context);
   paperFileRoutes(router, context);
 }

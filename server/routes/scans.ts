@@ -17,6 +17,7 @@ import {
   partBytes,
   placePage,
   putPart,
+  retryUpload,
   turnPage,
 } from '../../shared/contracts/scans';
 import { requireActor } from '../auth/access';
@@ -41,6 +42,7 @@ function uploadRoutes(router: Router, context: Context): void {
   };
 
   route(router, context, beginUpload, ({ actor, params, body }) => uploads.beginUpload(context, actor, params.id, body));
+  route(router, context, retryUpload, ({ actor, params }) => uploads.retryUpload(context, actor, params.id));
   route(router, context, getUpload, ({ actor, params }) => uploads.uploadFor(context, actor, params.id));
   asyncRoute(router, context, completeUpload, ({ actor, params }) => uploads.completeUpload(context, actor, params.id));
   asyncRoute(
@@ -62,11 +64,12 @@ function uploadRoutes(router: Router, context: Context): void {
 }
 
 function pictureRoutes(router: Router, context: Context): void {
-  asyncRoute(router, context, getPageImageFile, ({ actor, params, query, res }) => {
-    const picture = pages.pictureOfPage(context, actor, params.id, query.size);
-    return sendPicture(res, context.storage, picture.sha256, query.v, picture.mediaType);
-  });
-  asyncRoute(router, context, getCrop, ({ actor, params, query, res }) => sendPicture(res, context.storage, pages.pictureOfCrop(context, actor, params.id, query.box), query.v));
+  asyncRoute(router, context, getPageImageFile, ({ actor, params, query, req, res }) =>
+    sendPicture(req, res, context.storage, { ...pages.pictureOfPage(context, actor, params.id, query.size), named: query.v }),
+  );
+  asyncRoute(router, context, getCrop, ({ actor, params, query, req, res }) =>
+    sendPicture(req, res, context.storage, { sha256: pages.pictureOfCrop(context, actor, params.id, query.box), mediaType: 'image/jpeg', named: query.v }),
+  );
 }
 
 export function scanRoutes(router: Router, context: Context): void {

@@ -1,6 +1,7 @@
 import { v7 as uuidv7 } from 'uuid';
 import { inTransaction } from '../../db/client';
-import { batchesOf, cancelSending, fileCounts, filesOfBatch, findBatch, insertBatch, pagesOfUploads, pageStateCounts, partsOf, setBatchState, type BatchRow, type UploadRow } from '../../db/queries/uploads';
+import { batchesOf, cancelUploads, fileCounts, filesOfBatch, findBatch, insertBatch, pagesOfUploads, pagesUnderWay, pageStateCounts, partsOf, receivedUploads, setBatchState, type BatchRow, type UploadRow } from '../../db/queries/uploads';
+import { cancelJobs, deadJobs } from '../../db/queries/jobs';
 import { filesShown } from '../../shared/contracts/enums';
 import type { BatchSummary, BatchView, UploadView } from '../../shared/contracts/scans';
 import type { GuardRole } from '../../shared/contracts/route';
@@ -8,6 +9,7 @@ import type { Actor } from '../auth/access';
 import type { Context } from '../context';
 import { notAllowed, notFound } from '../errors';
 import { recordAct } from './audit';
+import { requireRoom } from './room';
 import { bumpSitting, requireLockedPaper, requireSitting, type SittingAccess } from './sitting-access';
 
 export const scanners = ['lead', 'reader'] as const;
@@ -21,19 +23,31 @@ export function requireBatch(context: Context, actor: Actor, batchId: string, ro
 
 function summary({ db }: Context, actor: Actor, batch: BatchRow): BatchSummary {
   const { id, sitting, bundle, madeAt, state } = batch;
-  return { id, sittingId: sitting, bundle, madeAt, state, isOwn: batch.madeBy === actor.personId, files: fileCounts(db, id), pages: pageStateCounts(db, id) };
+  return { id, sittingId: sitting, bundle, madeAt, state, isOwn: batch.madeBy === actor.personId, files: fileCounts(db, id), pages: pageStateCounts(db, id), making: pagesUnderWay(db, id), stuck: deadJobs(db, receivedUploads(db, id)).size };
+}
+
+/** What a person is told of a job that was given up; the whole of it is in the log. */
+function stuckWords(error: string): string {
+  if (/ENOSPC|EDQUOT|no space/i.test(error)) return 'The disk of the server is full. Its pages could not be kept.';
+  if (/ECONN|ENOTFOUND|ETIMEDOUT|socket|timeout/i.test(error)) return 'The store of pictures does not answer.';
+  if (/^The server stopped/.test(error)) return error;
+  return 'Something went wrong on the server while its pages were made.';
 }
 
 /** Files with their parts and pages, as the tray shows them. */
 export function uploadViews({ db }: Context, rows: readonly UploadRow[]): UploadView[] {
-  const pages = pagesOfUploads(db, rows.map(({ id }) => id));
-  return rows.map(({ id, fileName, size, partSize, state, problem }) => ({
+  const ids = rows.map(({ id }) => id);
+  const pages = pagesOfUploads(db, ids);
+  const dead = deadJobs(db, ids);
+  return rows.map(({ id, fileName, size, partSize, state, problem, pages: of }) => ({
     id,
     fileName,
     size,
     partSize,
     state,
     problem,
+    stuck: state === 'received' && dead.has(id) ? stuckWords(dead.get(id) ?? '') : null,
+    of,
     parts: state === 'sending' ? partsOf(db, id).map(({ part }) => part) : [],
     pages: pages
       .filter(({ upload }) => upload === id)
@@ -41,7 +55,9 @@ export function uploadViews({ db }: Context, rows: readonly UploadRow[]): Upload
         id: page.id,
         index: page.index,
         state: page.state,
+        name: page.name,
         why: page.why,
+        note: page.note,
         place: page.candidateNumber === null || page.pageNo === null ? null : `${page.candidateNumber}, page ${page.pageNo}`,
       })),
   }));
@@ -61,6 +77,7 @@ export function createBatch(context: Context, actor: Actor, sittingId: string, b
   const { db, clock } = context;
   const { sitting } = requireSitting(context, actor, sittingId, scanners);
   requireLockedPaper(context, sitting);
+  requireRoom(context, 0);
   const id = uuidv7();
   inTransaction(db, () => {
     insertBatch(db, { id, sitting: sittingId, bundle, madeBy: actor.personId, madeAt: clock.now() });
@@ -70,7 +87,7 @@ export function createBatch(context: Context, actor: Actor, sittingId: string, b
   return summary(context, actor, requireBatch(context, actor, id, scanners).batch);
 }
 
-/** Gives up files still on their way; what came in stays. */
+/** Gives up files on their way or in the making; what came in stays. */
 export async function cancelBatch(context: Context, actor: Actor, batchId: string): Promise<BatchSummary> {
   const { db, parts } = context;
   requireBatch(context, actor, batchId, scanners);
@@ -81,7 +98,9 @@ export async function cancelBatch(context: Context, actor: Actor, batchId: strin
     setBatchState(db, batchId, 'cancelled');
     bumpSitting(db, batch.sitting);
     recordAct(context, { actor: actor.personId, act: 'batch-cancelled', sitting: batch.sitting, subject: batchId });
-    return cancelSending(db, batchId);
+    const given = cancelUploads(db, batchId);
+    cancelJobs(db, given);
+    return given;
   });
   await Promise.all(cancelled.map((id) => parts.drop(id)));
   return summary(context, actor, requireBatch(context, actor, batchId, scanners).batch);

@@ -1,107 +1,90 @@
-import { v7 as uuidv7 } from 'uuid';
+import { rm } from 'node:fs/promises';
 import { inTransaction } from '../../db/client';
-import { insertPageImage, placesOfNumber, type PagePlace } from '../../db/queries/page-images';
-import { findBatch, findUpload, updateUpload, type BatchRow, type UploadRow } from '../../db/queries/uploads';
-import { mostPagesOfFile } from '../../shared/contracts/scans';
+import { findBatch, findUpload, pageIndexesOf, updateUpload, type BatchRow, type UploadRow } from '../../db/queries/uploads';
 import type { Context } from '../context';
-import { mapOfWholePage } from '../ingest/cutting';
-import { pageFromName } from '../ingest/page-name';
+import type { OpenedPage } from '../ingest/inputs/opener';
+import type { PlannedPage } from '../ingest/inputs/plan';
+import { InputRefusal } from '../ingest/inputs/refusal';
 import { recordAct } from './audit';
-import { cutFor, fillPlace, noteBlobs, storePage, type MadePage, type StoredPage } from './page-places';
+import { finishUpload } from './ingest-end';
+import { keepPage, makeTaken, noteRefusedPage, type IngestOf, type Taken } from './ingest-page';
 import { bumpSitting } from './sitting-access';
 
 export const ingestJob = 'ingest-upload';
 
-type Named = { readonly place: PagePlace } | { readonly why: string };
+/** Pages of one file decoded and stored side by side. */
+const pagesSideBySide = 2;
 
-const attendanceWords: Readonly<Record<string, string>> = { absent: 'absent', withdrawn: 'withdrawn', deferred: 'deferred' };
-
-/** The place that a file name gives, or why it gives none that can be taken. */
-function placeByName(context: Context, sittingId: string, fileName: string): Named {
-  const named = pageFromName(fileName);
-  if (!named) return { why: 'The file name gives no candidate and page.' };
-  const places = placesOfNumber(context.db, sittingId, named.number);
-  const [any] = places;
-  if (!any) return { why: `Nobody on the class list has the number ${named.number}.` };
-  const place = places.find(({ pageNo }) => pageNo === named.pageNo);
-  if (!place) return { why: `The paper has no page ${named.pageNo}.` };
-  const away = attendanceWords[place.attendance];
-  if (away !== undefined) return { why: `The class list says that ${place.candidateNumber} is ${away}.` };
-  if (place.image !== null) return { why: `Page ${place.pageNo} of ${place.candidateNumber} is in already.` };
-  return { place };
-}
-
-function refuse(context: Context, { id, fileName }: UploadRow, batch: BatchRow, refusal: string): void {
+function refuse(context: Context, { id, fileName }: UploadRow, batch: BatchRow, { problem, state }: { readonly problem: string; readonly state: 'refused' | 'duplicate' }): void {
   const { db } = context;
   inTransaction(db, () => {
-    updateUpload(db, id, { state: 'refused', problem: refusal });
+    if (findUpload(db, id)?.state !== 'received') return;
+    updateUpload(db, id, { state, problem });
     bumpSitting(db, batch.sitting);
-    recordAct(context, { actor: batch.madeBy, act: 'file-refused', sitting: batch.sitting, subject: id, after: { fileName }, reason: refusal });
+    recordAct(context, { actor: batch.madeBy, act: 'file-refused', sitting: batch.sitting, subject: id, after: { fileName }, reason: problem });
   });
 }
 
-interface MadeFile {
-  readonly upload: UploadRow;
-  readonly batch: BatchRow;
-  readonly pages: readonly { readonly made: MadePage; readonly stored: StoredPage }[];
-  /** The place whose boxes were cut out. */
-  readonly cutPage: string | null;
+const isStill = ({ db }: Context, uploadId: string): boolean => findUpload(db, uploadId)?.state === 'received';
+
+/** One page from picture to row; a page of several that cannot be taken is noted as refused. */
+async function bringIn(context: Context, of: IngestOf, page: PlannedPage, opened: OpenedPage | { readonly refusal: string }): Promise<void> {
+  try {
+    const taken: Taken = 'refusal' in opened ? { ok: false, refusal: opened.refusal } : await makeTaken(context, of, page, opened);
+    if (taken.ok) keepPage(context, of, page, taken);
+    else if (of.isOnePicture) refuse(context, of.upload, of.batch, { problem: taken.refusal, state: taken.isTwin ? 'duplicate' : 'refused' });
+    else noteRefusedPage(context, of, page, taken.refusal);
+  } finally {
+    if ('isPassing' in opened && opened.isPassing) await rm(opened.path, { force: true });
+  }
 }
 
-/** The rows of a file, once all its pictures are on disk: one transaction. */
-function keep(context: Context, { upload, batch, pages, cutPage }: MadeFile): void {
-  const { db } = context;
+async function bringInAll(context: Context, of: IngestOf, todo: readonly PlannedPage[], beat: () => void): Promise<void> {
+  const { opener, parts } = context;
+  const underWay = new Set<Promise<void>>();
+  const failures: unknown[] = [];
+  for await (const { page, opened } of opener.open(todo, await parts.workDir(of.upload.id))) {
+    if (failures.length > 0 || !isStill(context, of.upload.id)) break;
+    const one = bringIn(context, of, page, opened)
+      .then(beat, (error: unknown) => void failures.push(error))
+      .finally(() => underWay.delete(one));
+    underWay.add(one);
+    if (underWay.size >= pagesSideBySide) await Promise.race(underWay);
+  }
+  await Promise.all(underWay);
+  if (failures.length > 0) throw failures[0];
+}
+
+async function ingestFile(context: Context, upload: UploadRow, batch: BatchRow, path: string, beat: () => void): Promise<void> {
+  const { db, opener, parts } = context;
+  const planned = await opener.plan(path, await parts.workDir(upload.id));
+  const done = new Set(pageIndexesOf(db, upload.id));
   inTransaction(db, () => {
-    if (findUpload(db, upload.id)?.state !== 'received') return;
-    const named: Named = pages.length > 1 ? { why: `The file holds ${pages.length} pages. Say whose each is.` } : placeByName(context, batch.sitting, upload.fileName);
-    pages.forEach(({ made, stored }, index) => {
-      const id = uuidv7();
-      noteBlobs(context, made, stored);
-      const place = 'place' in named && named.place.page === cutPage ? named.place : undefined;
-      insertPageImage(db, {
-        id,
-        upload: upload.id,
-        index,
-        sitting: batch.sitting,
-        original: upload.sha256,
-        display: stored.display,
-        thumb: stored.thumb,
-        widthPx: stored.widthPx,
-        heightPx: stored.heightPx,
-        ...(place
-          ? { state: 'placed' as const, page: place.page, mmToPx: mapFor(context, place, stored) }
-          : { state: 'loose' as const, why: 'why' in named ? named.why : 'The class list changed while the page came in.' }),
-      });
-      if (place) fillPlace(context, place, id, stored.crops);
-      if (place) recordAct(context, { actor: batch.madeBy, act: 'page-placed', sitting: batch.sitting, subject: id, after: { page: place.page, from: 'file name' } });
-    });
-    updateUpload(db, upload.id, { state: 'done', problem: null });
+    if (upload.pages === planned.length) return;
+    updateUpload(db, upload.id, { pages: planned.length });
     bumpSitting(db, batch.sitting);
   });
+  const [first] = planned;
+  const of: IngestOf = { upload, batch, path, isOnePicture: planned.length === 1 && first?.name === null };
+  await bringInAll(context, of, planned.filter(({ index }) => !done.has(index)), beat);
+  await finishUpload(context, of);
 }
 
-/** The map of an image that shows the whole page. */
-export function mapFor(context: Pick<Context, 'db'>, place: PagePlace, { widthPx, heightPx }: Pick<StoredPage, 'widthPx' | 'heightPx'>): number[] | null {
-  const cut = cutFor(context, place);
-  return cut ? mapOfWholePage(cut.page, { width: widthPx, height: heightPx }) : null;
-}
-
-/** Makes the pages of one received file and gives them their place. Running it again, after a crash too, changes nothing. */
-export async function ingestUpload(context: Context, uploadId: string): Promise<void> {
-  const { db, storage, pictures } = context;
+/** Makes the pages of one received file and gives them their place, page by page. Running it again, after a crash too, goes on where it was. */
+export async function ingestUpload(context: Context, uploadId: string, beat: () => void = () => undefined): Promise<void> {
+  const { db, storage, parts } = context;
   const upload = findUpload(db, uploadId);
   const batch = upload ? findBatch(db, upload.batch) : undefined;
-  if (!upload || !batch || upload.state !== 'received' || upload.sha256 === null) return;
-  const named = placeByName(context, batch.sitting, upload.fileName);
-  const path = storage.localPath(upload.sha256);
-  const pages: { made: MadePage; stored: StoredPage }[] = [];
-  let expected = 1;
-  for (let index = 0; index < expected; index += 1) {
-    const made = await pictures.make({ path, index, turns: 0, cut: index === 0 && 'place' in named ? cutFor(context, named.place) : null });
-    if (!made.ok) return refuse(context, upload, batch, expected > 1 ? `Page ${index + 1}: ${made.refusal}` : made.refusal);
-    if (made.pages > mostPagesOfFile) return refuse(context, upload, batch, `The file holds ${made.pages} pages; ${mostPagesOfFile} are the most.`);
-    expected = made.pages;
-    pages.push({ made, stored: await storePage(context, made, upload.sha256) });
+  if (!upload || !batch || upload.sha256 === null) return;
+  if (upload.state === 'received') {
+    try {
+      const held = await parts.whole(uploadId);
+      if (held !== null) await ingestFile(context, upload, batch, held, beat);
+      else await storage.withLocalCopy(upload.sha256, (path) => ingestFile(context, upload, batch, path, beat));
+    } catch (error) {
+      if (error instanceof InputRefusal) refuse(context, upload, batch, { problem: error.message, state: 'refused' });
+      else if (isStill(context, uploadId)) throw error;
+    }
   }
-  keep(context, { upload, batch, pages, cutPage: 'place' in named ? named.place.page : null });
+  if (!isStill(context, uploadId)) await parts.drop(uploadId);
 }

@@ -3,7 +3,9 @@ import { insertBlob } from '../../db/queries/blobs';
 import { answersOfScript, pageLayout, saveCrop, setEvidence, setPlaceImage, type PagePlace } from '../../db/queries/page-images';
 import { saveStrip } from '../../db/queries/people-and-paper';
 import type { Context } from '../context';
+import { mapOfWholePage } from '../ingest/cutting';
 import type { PictureResult, PictureTask } from '../ingest/picture-worker';
+import type { SheetReport } from '../ingest/sheet/sheet-task';
 import { settleAnswers } from './settle';
 
 export type MadePage = Extract<PictureResult, { ok: true }>;
@@ -29,6 +31,13 @@ export function cutFor({ db }: Pick<Context, 'db'>, place: Pick<PagePlace, 'layo
   return found ? { page: found, boxes: found.boxes } : null;
 }
 
+/** The map of an image: of a read sheet its own, else that of a picture which shows the whole page. */
+export function mapFor(context: Pick<Context, 'db'>, place: PagePlace, { widthPx, heightPx }: Pick<StoredPage, 'widthPx' | 'heightPx'>, sheet: SheetReport | null): number[] | null {
+  if (sheet?.state === 'read') return [...sheet.mmToPx];
+  const cut = cutFor(context, place);
+  return cut ? mapOfWholePage(cut.page, { width: widthPx, height: heightPx }) : null;
+}
+
 /** Puts the pictures of a page on disk; their rows follow in the transaction of the act. `original` is shown where no other display was made. */
 export async function storePage({ storage }: Pick<Context, 'storage'>, made: MadePage, original: string): Promise<StoredPage> {
   const shaOf = async (bytes: Uint8Array): Promise<string> => (await storage.put(bytes)).sha256;
@@ -50,8 +59,23 @@ export function noteBlobs({ db }: Pick<Context, 'db'>, made: MadePage, stored: S
   stored.crops.forEach(({ blob }, index) => row(blob, made.crops[index]?.jpeg ?? new Uint8Array()));
 }
 
+export interface Filling {
+  readonly crops: readonly StoredCrop[];
+  /** How sure the cut-outs are, where they were cut by codes and frames. */
+  readonly sheet: SheetReport | null;
+}
+
+const allSides = 4;
+
+/** What a read sheet says of one cut-out. */
+function sureness(sheet: SheetReport | null, boxId: string): { evidence: 'in' | 'doubtful'; sidesConfirmed: number | null; ink: 'blank' | 'unsure' | 'written' | null } {
+  const found = sheet?.state === 'read' ? sheet.boxes.find(({ id }) => id === boxId) : undefined;
+  const isDoubtful = found !== undefined && (found.isCutOff || (found.sidesConfirmed !== null && found.sidesConfirmed < allSides));
+  return { evidence: isDoubtful ? 'doubtful' : 'in', sidesConfirmed: found?.sidesConfirmed ?? null, ink: found?.ink ?? null };
+}
+
 /** Fills a place with an image and its cut-outs: its answers can be read from here on. In the transaction of the act. */
-export function fillPlace(context: Pick<Context, 'db' | 'clock'>, place: PagePlace, imageId: string, crops: readonly StoredCrop[]): void {
+export function fillPlace(context: Pick<Context, 'db' | 'clock'>, place: PagePlace, imageId: string, { crops, sheet }: Filling): void {
   const { db } = context;
   setPlaceImage(db, place.page, imageId);
   const layout = place.layout ? pageLayout(db, place.layout, place.pageNo) : undefined;
@@ -62,7 +86,7 @@ export function fillPlace(context: Pick<Context, 'db' | 'clock'>, place: PagePla
     if (region?.use === 'number') saveStrip(db, { script: place.script, pageImage: imageId, blob, widthPx, heightPx });
     const answer = region?.item ? answers.get(region.item) : undefined;
     if (!region || answer === undefined) continue;
-    saveCrop(db, { id: uuidv7(), answer, box, pageImage: imageId, blob, widthPx, heightPx });
+    saveCrop(db, { id: uuidv7(), answer, box, pageImage: imageId, blob, widthPx, heightPx, ...sureness(sheet, box) });
     if (region.use === 'answer') {
       setEvidence(db, answer, 'in');
       readable.add(answer);

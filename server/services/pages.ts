@@ -9,11 +9,12 @@ import type { Actor } from '../auth/access';
 import type { Context } from '../context';
 import { conflict, notAllowed, notFound } from '../errors';
 import { pageFromName } from '../ingest/page-name';
+import type { SheetReport } from '../ingest/sheet/sheet-task';
 import { recordAct } from './audit';
 import { scanners, scanViewers } from './batches';
-import { mapFor } from './ingest';
-import { cutFor, fillPlace, noteBlobs, storePage, type MadePage, type StoredPage } from './page-places';
+import { cutFor, fillPlace, mapFor, noteBlobs, storePage, type MadePage, type StoredPage } from './page-places';
 import { settleAnswers } from './settle';
+import { isSheetOf, pictureOf } from './sheet-pages';
 import { bumpSitting, requireSitting, type SittingAccess } from './sitting-access';
 
 type Found = NonNullable<ReturnType<typeof findPageImage>> & SittingAccess;
@@ -49,17 +50,25 @@ export function looseFor(context: Context, actor: Actor, sittingId: string): { p
 interface Remade {
   readonly made: MadePage;
   readonly stored: StoredPage;
+  readonly sheet: SheetReport | null;
 }
 
 /** Makes the pictures of an image again, cut for a place; they are on disk when this resolves. */
 async function remake(context: Context, image: PageImageRow, turns: number, place: PagePlace | undefined): Promise<Remade> {
-  if (image.original === null) throw notFound();
-  const made = await context.pictures.make({ path: context.storage.localPath(image.original), index: image.index, turns, cut: cutFor(context, place) });
+  const { original, frame } = image;
+  if (original === null) throw notFound();
+  const { made, sheet } = await context.storage.withLocalCopy(original, async (path) => {
+    const task = { path, index: frame, turns, cut: cutFor(context, place) };
+    const found = await pictureOf(context, image.sitting, task);
+    // A sheet of another page than the one it is placed at is cut as any picture is.
+    return place && found.sheet !== null && !isSheetOf(context, found.sheet, place) ? { made: await context.pictures.make(task), sheet: null } : found;
+  });
   if (!made.ok) throw conflict(made.refusal);
-  return { made, stored: await storePage(context, made, image.original) };
+  return { made, stored: await storePage(context, made, original), sheet };
 }
 
 const seen = (found: Found, rev: number): void => {
+  if (found.image.state === 'refused') throw conflict('This page was refused; there is no picture of it. Scan it again.', viewOf(found));
   if (found.image.rev !== rev) throw conflict('Someone sorted this page a moment ago. Yours was not stored.', viewOf(found));
 };
 
@@ -79,13 +88,14 @@ export async function placePage(context: Context, actor: Actor, imageId: string,
     const place = placeOf(db, wanted.candidateId, wanted.pageNo);
     return requireFree(place?.sitting === found.image.sitting ? place : undefined, imageId);
   };
-  const { made, stored } = await remake(context, found.image, found.image.turns, placeNow());
+  const { made, stored, sheet } = await remake(context, found.image, found.image.turns, placeNow());
   inTransaction(db, () => {
     seen(requirePage(context, actor, imageId, scanners), rev);
     const place = placeNow();
     noteBlobs(context, made, stored);
-    updatePageImage(db, imageId, { state: 'placed', page: place.page, why: null, mmToPx: mapFor(context, place, stored) });
-    fillPlace(context, place, imageId, stored.crops);
+    const { display, thumb, widthPx, heightPx } = stored;
+    updatePageImage(db, imageId, { state: 'placed', page: place.page, why: null, display, thumb, widthPx, heightPx, mmToPx: mapFor(context, place, stored, sheet) });
+    fillPlace(context, place, imageId, { crops: stored.crops, sheet });
     bumpSitting(db, found.image.sitting);
     recordAct(context, { actor: actor.personId, act: 'page-placed', sitting: found.image.sitting, subject: imageId, before: { state: found.image.state }, after: { page: place.page, from: 'a person' } });
   });
@@ -99,13 +109,13 @@ export async function turnPage(context: Context, actor: Actor, imageId: string, 
   seen(found, rev);
   const turns = (found.image.turns + by) % 4;
   const place = found.image.page === null ? undefined : placeById(db, found.image.page);
-  const { made, stored } = await remake(context, found.image, turns, place);
+  const { made, stored, sheet } = await remake(context, found.image, turns, place);
   inTransaction(db, () => {
     seen(requirePage(context, actor, imageId, scanners), rev);
     noteBlobs(context, made, stored);
     const { display, thumb, widthPx, heightPx } = stored;
-    updatePageImage(db, imageId, { turns, display, thumb, widthPx, heightPx, mmToPx: place ? mapFor(context, place, stored) : null });
-    if (place) fillPlace(context, place, imageId, stored.crops);
+    updatePageImage(db, imageId, { turns, display, thumb, widthPx, heightPx, mmToPx: place ? mapFor(context, place, stored, sheet) : null });
+    if (place) fillPlace(context, place, imageId, { crops: stored.crops, sheet });
     bumpSitting(db, found.image.sitting);
     recordAct(context, { actor: actor.personId, act: 'page-turned', sitting: found.image.sitting, subject: imageId, before: { turns: found.image.turns }, after: { turns } });
   });

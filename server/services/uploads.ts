@@ -3,16 +3,16 @@ import { basename, join } from 'node:path';
 import { randomUUID } from 'node:crypto';
 import { v7 as uuidv7 } from 'uuid';
 import { inTransaction } from '../../db/client';
-import { insertBlob } from '../../db/queries/blobs';
+import { cancelJobs, deadJobs } from '../../db/queries/jobs';
 import { fileCount, findUpload, insertUpload, partsOf, sameFile, savePart, updateUpload, type BatchRow, type UploadRow } from '../../db/queries/uploads';
 import { mostFilesOfBatch, partBytes, type UploadView } from '../../shared/contracts/scans';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
 import { AppError, conflict, invalidRequest, notFound } from '../errors';
-import { kindOfFile, mediaTypes } from '../ingest/file-kinds';
 import { recordAct } from './audit';
 import { requireBatch, scanners, uploadViews } from './batches';
 import { ingestJob } from './ingest';
+import { requireRoom } from './room';
 import { bumpSitting } from './sitting-access';
 
 const partCount = ({ size, partSize }: UploadRow): number => Math.ceil(size / partSize);
@@ -43,6 +43,7 @@ export function beginUpload(context: Context, actor: Actor, batchId: string, fil
   const { db, clock } = context;
   const { batch } = requireBatch(context, actor, batchId, scanners);
   if (batch.state !== 'open') throw conflict('This batch is cancelled. Begin another for these files.');
+  requireRoom(context, file.size);
   if (fileCount(db, batchId) >= mostFilesOfBatch) throw conflict(`A batch holds ${mostFilesOfBatch} files at most. Begin another.`);
   const id = uuidv7();
   insertUpload(db, { id, batch: batchId, fileName: basename(file.fileName), size: file.size, partSize: partBytes, madeAt: clock.now() });
@@ -70,30 +71,46 @@ export async function keepPart(context: Context, actor: Actor, uploadId: string,
   return viewOf(context, uploadId);
 }
 
-/** All parts are there: keeps the file under its hash and has its pages made; a file that is here already is named, not kept twice. */
+/** All parts are there: the file waits, whole, for its pages to be made; one that is here already is named, not kept twice. */
 export async function completeUpload(context: Context, actor: Actor, uploadId: string): Promise<UploadView> {
-  const { db, parts, storage, jobs } = context;
+  const { db, parts, jobs } = context;
   const { upload, batch } = requireUpload(context, actor, uploadId);
   if (upload.state !== 'sending') return viewOf(context, uploadId);
   const here = partsOf(db, uploadId).length;
   if (here < partCount(upload)) throw conflict(`${upload.fileName}: ${here} of ${partCount(upload)} parts are here. Send the rest first.`);
-  const whole = await parts.join(uploadId, partCount(upload));
-  const twin = sameFile(db, batch.sitting, whole.sha256, uploadId);
-  const mediaType = mediaTypes[await kindOfFile(whole.path)] ?? 'application/octet-stream';
-  if (!twin) await storage.putFile(whole.path, whole.sha256);
+  const whole = await parts.join(uploadId, partCount(upload)).catch((error: unknown) => {
+    // Someone asked for the same twice at once, and the other was first.
+    if (findUpload(db, uploadId)?.state !== 'sending') return null;
+    throw error;
+  });
+  if (whole === null) return viewOf(context, uploadId);
   inTransaction(db, () => {
     if (findUpload(db, uploadId)?.state !== 'sending') return;
     const same = sameFile(db, batch.sitting, whole.sha256, uploadId);
-    if (same) updateUpload(db, uploadId, { state: 'duplicate', sha256: whole.sha256, problem: `The same picture as ${same.fileName} of bundle ${same.bundle}. It was not kept twice.` });
+    if (same) updateUpload(db, uploadId, { state: 'duplicate', sha256: whole.sha256, problem: `The same file as ${same.fileName} of bundle ${same.bundle}. It was not kept twice.` });
     else {
-      insertBlob(db, { sha256: whole.sha256, size: whole.size, mediaType });
       updateUpload(db, uploadId, { state: 'received', sha256: whole.sha256 });
       jobs.add(ingestJob, uploadId, { uploadId });
     }
     bumpSitting(db, batch.sitting);
     recordAct(context, { actor: actor.personId, act: 'file-received', sitting: batch.sitting, subject: uploadId, after: { fileName: upload.fileName, sha256: whole.sha256, isTwin: same !== undefined } });
   });
-  await parts.drop(uploadId);
+  const isReceived = findUpload(db, uploadId)?.state === 'received';
+  await (isReceived ? parts.dropParts(uploadId, partCount(upload)) : parts.drop(uploadId));
+  return viewOf(context, uploadId);
+}
+
+/** Has the pages of a stuck file made again, from where it stopped. */
+export function retryUpload(context: Context, actor: Actor, uploadId: string): UploadView {
+  const { db, jobs } = context;
+  inTransaction(db, () => {
+    const { upload, batch } = requireUpload(context, actor, uploadId);
+    if (upload.state !== 'received' || deadJobs(db, [uploadId]).size === 0) throw conflict('This file is not stuck.', viewOf(context, uploadId));
+    cancelJobs(db, [uploadId]);
+    jobs.add(ingestJob, uploadId, { uploadId });
+    bumpSitting(db, batch.sitting);
+    recordAct(context, { actor: actor.personId, act: 'file-retried', sitting: batch.sitting, subject: uploadId });
+  });
   return viewOf(context, uploadId);
 }
 

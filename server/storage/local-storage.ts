@@ -1,8 +1,19 @@
 import { createHash, randomUUID } from 'node:crypto';
 import { createReadStream } from 'node:fs';
-import { mkdir, open, readFile, rename, stat, unlink } from 'node:fs/promises';
+import { copyFile, link, mkdir, open, readFile, rename, rm, stat } from 'node:fs/promises';
 import { dirname, join } from 'node:path';
 import type { Storage, StoredBlob } from './storage';
+
+async function syncToDisk(path: string): Promise<void> {
+  const file = await open(path, 'r');
+  try {
+    await file.datasync();
+  } finally {
+    await file.close();
+  }
+}
+
+const linkOrCopy = (from: string, to: string): Promise<void> => link(from, to).catch(() => copyFile(from, to));
 
 /** Keeps blobs as files named by their hash, below two levels of folders. */
 export function createLocalStorage(folder: string): Storage {
@@ -16,47 +27,46 @@ export function createLocalStorage(folder: string): Storage {
     }
   };
 
-  const put = async (bytes: Uint8Array): Promise<StoredBlob> => {
-    const sha256 = createHash('sha256').update(bytes).digest('hex');
+  /** Lets `fill` write a blob beside its place and moves it there once it is on disk. */
+  const keep = async (sha256: string, size: number, fill: (passing: string) => Promise<void>): Promise<StoredBlob> => {
+    if ((await sizeOf(sha256)) === size) return { sha256, size };
     const target = pathOf(sha256);
-    if ((await sizeOf(sha256)) === bytes.length) return { sha256, size: bytes.length };
     await mkdir(dirname(target), { recursive: true });
     const passing = `${target}.${randomUUID()}`;
-    const file = await open(passing, 'wx');
     try {
-      await file.writeFile(bytes);
-      await file.datasync();
-    } finally {
-      await file.close();
+      await fill(passing);
+      await rename(passing, target);
+    } catch (error) {
+      await rm(passing, { force: true });
+      throw error;
     }
-    await rename(passing, target);
-    return { sha256, size: bytes.length };
-  };
-
-  const putFile = async (path: string, sha256: string): Promise<StoredBlob> => {
-    const { size } = await stat(path);
-    const target = pathOf(sha256);
-    if ((await sizeOf(sha256)) === size) {
-      await unlink(path);
-      return { sha256, size };
-    }
-    await mkdir(dirname(target), { recursive: true });
-    const file = await open(path, 'r');
-    try {
-      await file.datasync();
-    } finally {
-      await file.close();
-    }
-    await rename(path, target);
     return { sha256, size };
   };
+
+  const put = (bytes: Uint8Array): Promise<StoredBlob> =>
+    keep(createHash('sha256').update(bytes).digest('hex'), bytes.length, async (passing) => {
+      const file = await open(passing, 'wx');
+      try {
+        await file.writeFile(bytes);
+        await file.datasync();
+      } finally {
+        await file.close();
+      }
+    });
+
+  const putFile = async (path: string, sha256: string): Promise<StoredBlob> =>
+    keep(sha256, (await stat(path)).size, async (passing) => {
+      await linkOrCopy(path, passing);
+      await syncToDisk(passing);
+    });
 
   return {
     put,
     putFile,
     read: (sha256) => readFile(pathOf(sha256)),
-    stream: (sha256, range) => createReadStream(pathOf(sha256), range),
+    stream: async (sha256, range) => createReadStream(pathOf(sha256), range),
     size: sizeOf,
-    localPath: pathOf,
+    withLocalCopy: (sha256, work) => work(pathOf(sha256)),
+    remove: (sha256) => rm(pathOf(sha256), { force: true }),
   };
 }

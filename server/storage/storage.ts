@@ -5,15 +5,23 @@ export interface StoredBlob {
   readonly size: number;
 }
 
-/** Bytes by their hash. A blob is on disk, whole, before put answers. */
+export interface ByteRange {
+  readonly start: number;
+  /** The last byte, counted in. */
+  readonly end: number;
+}
+
+/** Bytes by their hash. A blob is kept, whole, before put answers. */
 export interface Storage {
   put(bytes: Uint8Array): Promise<StoredBlob>;
-  /** Takes over a file of the same file system; it is gone from its old place afterwards. */
+  /** Keeps a file of this machine under its hash; it stays where it is. */
   putFile(path: string, sha256: string): Promise<StoredBlob>;
   /** Throws when the blob is not there. */
   read(sha256: string): Promise<Buffer>;
-  stream(sha256: string, range?: { start: number; end: number }): Readable;
+  stream(sha256: string, range?: ByteRange): Promise<Readable>;
   size(sha256: string): Promise<number | null>;
-  /** Path of a blob for a worker on this machine. */
-  localPath(sha256: string): string;
+  /** Gives a worker on this machine the bytes as a file, for as long as the work takes. */
+  withLocalCopy<Result>(sha256: string, work: (path: string) => Promise<Result>): Promise<Result>;
+  /** Removes a blob that nothing names any more; one that is not there is no error. */
+  remove(sha256: string): Promise<void>;
 }

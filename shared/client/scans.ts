@@ -1,9 +1,10 @@
 import { queryOptions, useMutation, useQuery, useQueryClient, type QueryClient } from '@tanstack/react-query';
-import { useSyncExternalStore } from 'react';
+import { useCallback, useSyncExternalStore } from 'react';
 import type { ResponseOf } from '../contracts/route';
 import type { beginUpload, getBatch, listBatches, listLoosePages, makeBatch, placePage } from '../contracts/scans';
 import { api } from './api';
 import { FileSender, type SendingEnds, type SendingFile } from './file-sender';
+import { isTold, useEventsOf } from './sitting-events';
 import { progressQueryOptions } from './sittings';
 
 type Upload = ResponseOf<typeof beginUpload>;
@@ -16,15 +17,15 @@ export const batchesQueryOptions = (sittingId: string) =>
   queryOptions({
     queryKey: ['batches', sittingId],
     queryFn: ({ signal }) => api<ResponseOf<typeof listBatches>>(`/sittings/${sittingId}/batches`, { signal }),
-    // Looked at again while something is on its way.
-    refetchInterval: ({ state }) => (state.data?.batches.some(({ files }) => files.received > 0 || files.sending > 0) ? lookAgainMs : false),
+    // Looked at again while something is on its way, unless the server tells of it.
+    refetchInterval: ({ state }) => (!isTold(sittingId) && state.data?.batches.some(({ files }) => files.received > 0 || files.sending > 0) ? lookAgainMs : false),
   });
 
 export const batchQueryOptions = (batchId: string) =>
   queryOptions({
     queryKey: ['batch', batchId],
     queryFn: ({ signal }) => api<Batch>(`/batches/${batchId}`, { signal }),
-    refetchInterval: ({ state }) => ((state.data?.files.received ?? 0) > 0 || (state.data?.files.sending ?? 0) > 0 ? lookAgainMs : false),
+    refetchInterval: ({ state: { data } }) => (data && !isTold(data.sittingId) && (data.files.received > 0 || data.files.sending > 0) ? lookAgainMs : false),
   });
 
 export const looseQueryOptions = (sittingId: string) =>
@@ -43,6 +44,13 @@ export function lookAtPagesAgain(client: QueryClient, sittingId: string): void {
   void client.invalidateQueries({ queryKey: ['batch'] });
   void client.invalidateQueries({ queryKey: looseQueryOptions(sittingId).queryKey });
   void client.invalidateQueries({ queryKey: progressQueryOptions(sittingId).queryKey });
+}
+
+/** Looks again whenever the server tells that something changed; where it cannot tell, the queries ask by themselves. */
+export function usePagesTold(sittingId: string): void {
+  const client = useQueryClient();
+  const look = useCallback(() => lookAtPagesAgain(client, sittingId), [client, sittingId]);
+  useEventsOf(sittingId, look);
 }
 
 async function begin(batchId: string, file: { readonly name: string; readonly size: number }): Promise<Upload> {
@@ -94,6 +102,15 @@ export function useCancelBatch(sittingId: string) {
       fileSender.drop((file) => file.batchId === batchId);
       lookAtPagesAgain(client, sittingId);
     },
+  });
+}
+
+/** Has the pages of a stuck file made again. */
+export function useRetryUpload(sittingId: string) {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: (uploadId: string) => api<Upload>(`/uploads/${uploadId}/retry`, { method: 'POST' }),
+    onSettled: () => lookAtPagesAgain(client, sittingId),
   });
 }
 

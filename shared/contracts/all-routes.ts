@@ -1,6 +1,7 @@
 import { classListRoutes } from './class-list';
 import { deskRoutes } from './desk';
 import { itemBankRoutes } from './item-bank';
+import { eventRoutes } from './events';
 import { itemRoutes } from './items';
 import { layoutRoutes } from './layouts';
 import { ledgerRoutes } from './ledger';
@@ -31,6 +32,7 @@ export const allRoutes: Readonly<Record<string, RouteContract>> = {
   ...peopleAndPaperRoutes,
   ...printingRoutes,
   ...scanRoutes,
+  ...eventRoutes,
   ...waitingRoutes,
   ...vettingRoutes,
   ...paperFileRoutes,

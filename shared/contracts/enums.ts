@@ -32,6 +32,7 @@ export const batchStates = ['open', 'done', 'cancelled'] as const;
 export const uploadStates = ['sending', 'received', 'done', 'refused', 'duplicate', 'cancelled'] as const;
 export const pageImageStates = ['waiting', 'placed', 'loose', 'refused', 'discarded'] as const;
 export const evidenceKinds = ['none', 'in', 'doubtful'] as const;
+export const inkKinds = ['blank', 'unsure', 'written'] as const;
 export const jobStates = ['waiting', 'running', 'done', 'dead', 'cancelled'] as const;
 
 export const answerStates = [
@@ -81,6 +82,7 @@ export const auditActs = [
   'batch-cancelled',
   'file-received',
   'file-refused',
+  'file-retried',
   'script-bound',
   'scripts-swapped',
   'script-by-hand',

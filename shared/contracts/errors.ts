@@ -11,6 +11,7 @@ export const errorStatuses = {
   too_many_requests: 429,
   internal: 500,
   not_ready: 503,
+  no_space: 507,
 } as const;
 
 export type ErrorCode = keyof typeof errorStatuses;

@@ -9,12 +9,24 @@ const staff = { who: 'course', roles: ['lead', 'reader', 'external'] } as const;
 
 /** Bytes of one part; every part but the last has exactly as many. */
 export const partBytes = 8 * 1024 * 1024;
-export const mostFileBytes = 64 * 1024 * 1024;
+export const mostFileBytes = 2 * 1024 * 1024 * 1024;
 export const mostFilesOfBatch = 5000;
-/** Pages of one file, as of a multi-page TIFF. */
-export const mostPagesOfFile = 100;
 
 const many = z.int().min(0);
+
+export const uploadPage = z.object({
+  id: uuid,
+  index: many,
+  /** Name of its file in an archive. */
+  name: z.string().nullable(),
+  state: z.enum(pageImageStates),
+  place: z.string().nullable(),
+  /** Why it has no place, or was refused. */
+  why: z.string().nullable(),
+  /** Advice for the next scan. */
+  note: z.string().nullable(),
+});
+export type UploadPage = z.infer<typeof uploadPage>;
 
 export const uploadView = z.object({
   id: uuid,
@@ -26,7 +38,11 @@ export const uploadView = z.object({
   state: z.enum(uploadStates),
   /** Why a file was refused, or which one it repeats. */
   problem: z.string().nullable(),
-  pages: z.array(z.object({ id: uuid, index: many, state: z.enum(pageImageStates), place: z.string().nullable(), why: z.string().nullable() })),
+  /** Why its pages could not be made though nothing is wrong with the file; it can be tried again. */
+  stuck: z.string().nullable(),
+  /** How many pages the file holds; null until it was opened. */
+  of: many.nullable(),
+  pages: z.array(uploadPage),
 });
 export type UploadView = z.infer<typeof uploadView>;
 
@@ -39,6 +55,10 @@ export const batchSummary = z.object({
   isOwn: z.boolean(),
   files: z.record(z.enum(uploadStates), many),
   pages: z.record(z.enum(pageImageStates), many),
+  /** Pages made of those the files in the making hold. */
+  making: z.object({ done: many, of: many }),
+  /** Files whose pages could not be made: they wait for someone to try again. */
+  stuck: many,
 });
 export type BatchSummary = z.infer<typeof batchSummary>;
 
@@ -77,7 +97,7 @@ export const getBatch = defineRoute({
 export const changeBatch = defineRoute({
   method: 'patch',
   path: '/batches/:id',
-  summary: 'Cancel a batch: files still on their way are given up; pages that came in stay.',
+  summary: 'Cancel a batch: files on their way or in the making are given up; pages that came in stay.',
   access: scanners,
   params: idParams,
   body: z.strictObject({ state: z.literal('cancelled') }),
@@ -92,7 +112,7 @@ export const beginUpload = defineRoute({
   params: idParams,
   body: z.strictObject({
     fileName: z.string().trim().min(1, 'Name the file.').max(255),
-    size: z.int().min(1, 'The file is empty.').max(mostFileBytes, 'The file is larger than 64 MB.'),
+    size: z.int().min(1, 'The file is empty.').max(mostFileBytes, 'The file is larger than 2 GB. Split it into several.'),
   }),
   response: uploadView,
   status: 201,
@@ -113,6 +133,16 @@ export const completeUpload = defineRoute({
   method: 'post',
   path: '/uploads/:id/complete',
   summary: 'All parts are there: the file is kept, and its pages are made.',
+  access: scanners,
+  params: idParams,
+  response: uploadView,
+  status: 202,
+});
+
+export const retryUpload = defineRoute({
+  method: 'post',
+  path: '/uploads/:id/retry',
+  summary: 'Make the pages of a stuck file again, from where it stopped.',
   access: scanners,
   params: idParams,
   response: uploadView,
@@ -247,6 +277,7 @@ export const scanRoutes = {
   beginUpload,
   putPart,
   completeUpload,
+  retryUpload,
   getUpload,
   listLoosePages,
   getPageImage,

@@ -51,7 +51,7 @@ describe('printing answer sheets', () => {
     const image = uuidv7();
     inTransaction(db, () => {
       insertPageImage(db, { id: image, upload: upload.id, index: 0, sitting: paper.sittingId, state: 'placed', page: place.page });
-      fillPlace(context, place, image, []);
+      fillPlace(context, place, image, { crops: [], sheet: null });
     });
   };
 

@@ -1,4 +1,5 @@
-import { readFileSync } from 'node:fs';
+import { readdirSync } from 'node:fs';
+import { join } from 'node:path';
 import sharp from 'sharp';
 import type { Agent } from 'supertest';
 import { v7 as uuidv7 } from 'uuid';
@@ -54,14 +55,14 @@ describe('scans', () => {
 
   it('names a picture that is here already and keeps it once', async () => {
     const again = await bringIn(server, reader, batchId, 'W4072-p1.jpg', await pageJpeg(1));
-    expect(again).toMatchObject({ state: 'duplicate', problem: 'The same picture as W4071-p1.jpg of bundle A. It was not kept twice.', pages: [] });
+    expect(again).toMatchObject({ state: 'duplicate', problem: 'The same file as W4071-p1.jpg of bundle A. It was not kept twice.', pages: [] });
   });
 
   it.each([
-    ['a text named as a picture', 'notes.jpg', Buffer.from('nothing to see'), 'This is not a picture of a page. Send JPEG, PNG, TIFF or WebP.'],
-    ['a drawing that could run', 'W4073-p1.png', Buffer.from('<svg xmlns="http://www.w3.org/2000/svg" width="900" height="900"/>'), 'This is not a picture of a page. Send JPEG, PNG, TIFF or WebP.'],
-    ['a PDF', 'W4073-p1.pdf', Buffer.from('%PDF-1.7\n%stuff and more'), 'This is a PDF. Send one picture a page: JPEG, PNG, TIFF or WebP.'],
-    ['a phone format', 'W4073-p1.heic', Buffer.concat([Buffer.from([0, 0, 0, 24]), Buffer.from('ftypheic00000000')]), 'This phone format is not read. Set the camera to JPEG, or send JPEG, PNG, TIFF or WebP.'],
+    ['a text named as a picture', 'notes.jpg', Buffer.from('nothing to see'), 'This is not a picture of a page. Send PDF, JPEG, PNG, TIFF or WebP, or a ZIP of them.'],
+    ['a drawing that could run', 'W4073-p1.png', Buffer.from('<svg xmlns="http://www.w3.org/2000/svg" width="900" height="900"/>'), 'This is a drawing (SVG), not the scan of a page. Send PDF, JPEG, PNG, TIFF or WebP, or a ZIP of them.'],
+    ['a PDF that is none', 'W4073-p1.pdf', Buffer.from('%PDF-1.7\n%stuff and more'), 'The PDF is incomplete or damaged. Scan or save it again.'],
+    ['a phone format', 'W4073-p1.heic', Buffer.concat([Buffer.from([0, 0, 0, 24]), Buffer.from('ftypheic00000000')]), 'This phone format (HEIC) is not read. Set the camera to JPEG, or send PDF, JPEG, PNG, TIFF or WebP.'],
   ])('refuses %s by its content', async (_name, fileName, bytes, problem) => {
     expect(await bringIn(server, reader, batchId, fileName, bytes)).toMatchObject({ state: 'refused', problem });
   });
@@ -161,8 +162,8 @@ describe('scans', () => {
   });
 
   it('splits a file of many pages and asks whose each is', async () => {
-    const page = await sharp(await pageJpeg(20)).raw().toBuffer();
-    const stack = await sharp(Buffer.concat([page, page]), { raw: { width: 620, height: 877 * 2, channels: 3, pageHeight: 877 } }).tiff().toBuffer();
+    const [one, two] = await Promise.all([20, 22].map(async (seed) => sharp(await pageJpeg(seed)).raw().toBuffer()));
+    const stack = await sharp(Buffer.concat([one!, two!]), { raw: { width: 620, height: 877 * 2, channels: 3, pageHeight: 877 } }).tiff().toBuffer();
     expect(await bringIn(server, reader, batchId, 'stack.tif', stack)).toMatchObject({
       state: 'done',
       pages: [{ index: 0, state: 'loose', why: 'The file holds 2 pages. Say whose each is.' }, { index: 1, state: 'loose' }],
@@ -215,6 +216,7 @@ it('takes up a received file again after a restart', async () => {
   await first.context.jobs.settle();
   const { body } = await reader.get(`/api/uploads/${upload.id}`).expect(200);
   expect(body).toMatchObject({ state: 'done', pages: [{ place: 'W4071, page 1' }] });
-  expect(readFileSync(first.context.storage.localPath(first.context.db.$client.prepare('select sha256 from upload').pluck().get() as string)).length).toBe(upload.size);
+  expect(await first.context.storage.size(first.context.db.$client.prepare('select sha256 from upload').pluck().get() as string)).toBe(upload.size);
+  expect(readdirSync(join(first.context.config.dataDir, 'parts'))).toEqual(['incoming']);
   await first.close();
 });

@@ -18,9 +18,9 @@ export interface GreyPage {
 
 export const rasterDpi = 200;
 
-/** Pages of a PDF as grey pictures at 200 dpi, by Poppler. */
-export function rasterise(pdf: string, folder: string): GreyPage[] {
-  run('pdftoppm', ['-r', String(rasterDpi), '-gray', pdf, join(folder, 'page')]);
+/** Pages of a PDF as grey pictures, by Poppler. */
+export function rasterise(pdf: string, folder: string, dpi = rasterDpi): GreyPage[] {
+  run('pdftoppm', ['-r', String(dpi), '-gray', pdf, join(folder, 'page')]);
   const files = readdirSync(folder).filter((name) => /^page-\d+\.pgm$/.test(name)).sort();
   return files.map((name) => {
     const path = join(folder, name);

@@ -9,7 +9,7 @@ import { words } from './words';
 /** The pages of one bundle as small pictures with their places, those that need someone first. */
 export function ContactSheet({ batch }: { batch: BatchView }) {
   const colors = useColors();
-  const pages = batch.uploads.flatMap(({ pages: made, fileName }) => made.map((page) => ({ ...page, fileName })));
+  const pages = batch.uploads.flatMap(({ pages: made, fileName }) => made.map((page) => ({ ...page, fileName: page.name ?? (made.length > 1 ? words.sheet.page(fileName, page.index + 1) : fileName) }))).filter(({ state }) => state !== 'refused');
   return (
     <View style={{ gap: 12, padding: 16 }}>
       <Text variant="head" level={2}>

@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react';
 import { View } from 'react-native';
-import { fileSender } from '../../client/scans';
+import { fileSender, useRetryUpload } from '../../client/scans';
 import { Button, ButtonLink } from '../../ui/button';
 import { ProgressRule } from '../../ui/progress-rule';
 import { Text } from '../../ui/text';
@@ -61,6 +61,27 @@ interface TrayRowViewProps {
   readonly onCancel: (batchId: string) => void;
 }
 
+interface StuckProps {
+  readonly row: Extract<TrayRow, { kind: 'stuck' }>;
+  readonly sittingId: string;
+  readonly canSend: boolean;
+}
+
+function Stuck({ row, sittingId, canSend }: StuckProps) {
+  const retry = useRetryUpload(sittingId);
+  const action = canSend ? (
+    <Button isSmall isBusy={retry.isPending} onPress={() => retry.mutate(row.uploadId)} testID="try-again">
+      {words.tryAgain}
+    </Button>
+  ) : null;
+  return (
+    <Frame state="broken" head={words.row.refused(row.bundle, row.fileName)} action={action}>
+      {small(retry.error ? retry.error.message : row.problem, 'methyl')}
+      {small(words.row.stuckDo)}
+    </Frame>
+  );
+}
+
 /** One row of the tray: a sheet that says how it stands, its words, and what can be done. */
 export function TrayRowView({ row, sittingId, canSend, isChosen, onShow, onCancel }: TrayRowViewProps) {
   switch (row.kind) {
@@ -90,6 +111,32 @@ export function TrayRowView({ row, sittingId, canSend, isChosen, onShow, onCance
         <Frame state={row.kind === 'refused' ? 'broken' : 'twice'} head={words.row.refused(row.bundle, row.fileName)}>
           {small(row.problem, row.kind === 'refused' ? 'methyl' : 'iodine')}
           {small(words.row.nothingElse)}
+        </Frame>
+      );
+    case 'stuck':
+      return <Stuck row={row} sittingId={sittingId} canSend={canSend} />;
+    case 'pages-refused':
+      return (
+        <Frame state="broken" head={words.row.refused(row.bundle, row.fileName)}>
+          {row.pages.map(({ name, why }) => (
+            <View key={name}>{small(words.row.page(name, why), 'methyl')}</View>
+          ))}
+          {row.more > 0 ? small(words.row.morePages(row.more), 'methyl') : null}
+          {small(words.row.restIn)}
+        </Frame>
+      );
+    case 'note':
+      return (
+        <Frame state="in" head={words.row.refused(row.bundle, row.fileName)}>
+          {small(row.note, 'iodine')}
+          {small(words.row.notePages(row.pages))}
+        </Frame>
+      );
+    case 'making':
+      return (
+        <Frame state="waiting" head={words.row.refused(row.bundle, row.fileName)}>
+          {small(words.row.makingPages(row.done, row.of))}
+          <ProgressRule done={row.done} of={row.of} label={words.row.refused(row.bundle, row.fileName)} />
         </Frame>
       );
     case 'loose':
@@ -133,7 +180,7 @@ export function TrayRowView({ row, sittingId, canSend, isChosen, onShow, onCance
       const lines = [
         batch.state === 'cancelled' ? words.row.cancelled : '',
         all > 0 ? words.row.pages(all, placed) : batch.state === 'cancelled' ? '' : words.row.noPages,
-        batch.files.received > 0 ? words.row.making(batch.files.received) : '',
+        batch.files.received > batch.stuck ? words.row.making(batch.files.received - batch.stuck) : '',
         brokenOff > 0 ? words.row.waiting(brokenOff) : '',
       ].filter((line) => line !== '');
       return (
@@ -143,7 +190,7 @@ export function TrayRowView({ row, sittingId, canSend, isChosen, onShow, onCance
           isChosen={isChosen}
           action={
             <View style={{ flexDirection: 'row', gap: 6 }}>
-              {canSend && batch.state === 'open' && batch.files.sending > 0 ? (
+              {canSend && batch.state === 'open' && batch.files.sending + batch.files.received > 0 ? (
                 <Button isSmall kind="text" onPress={() => onCancel(batch.id)}>
                   {words.cancel}
                 </Button>

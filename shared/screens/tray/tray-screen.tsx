@@ -1,7 +1,7 @@
 import { useQueryClient } from '@tanstack/react-query';
 import { useEffect, useState } from 'react';
 import { ScrollView, View } from 'react-native';
-import { lookAtPagesAgain, useBatch, useBatches, useCancelBatch, useSendingFiles } from '../../client/scans';
+import { lookAtPagesAgain, useBatch, useBatches, useCancelBatch, usePagesTold, useSendingFiles } from '../../client/scans';
 import { useProgress, useSitting } from '../../client/sittings';
 import type { ProgressView } from '../../contracts/progress';
 import type { BatchSummary } from '../../contracts/scans';
@@ -23,13 +23,14 @@ import { TrayRowView } from './tray-row';
 import { useDrop } from './use-drop';
 import { words } from './words';
 
-const accepted = 'image/jpeg,image/png,image/tiff,image/webp,.jpg,.jpeg,.png,.tif,.tiff,.webp';
+const accepted = 'application/pdf,application/zip,image/jpeg,image/png,image/tiff,image/webp,.pdf,.zip,.jpg,.jpeg,.png,.tif,.tiff,.webp';
 
 /** Where scans arrive, in bundles, over poor connections, without anyone watching. */
 export function TrayScreen({ sittingId }: { sittingId: string }) {
   const sitting = useSitting(sittingId);
   const batches = useBatches(sittingId);
   const progress = useProgress(sittingId);
+  usePagesTold(sittingId);
   return (
     <InSitting sittingId={sittingId} isFixed>
       <QueryState query={sitting} fetching="Fetching the sitting" failed="The sitting did not come.">
@@ -150,7 +151,7 @@ function Tray({ sitting, batches, progress }: TrayProps) {
             </>
           }
         >
-          <Text>{words.cancelling.text(cancelling.files.sending)}</Text>
+          <Text>{words.cancelling.text(cancelling.files.sending + cancelling.files.received)}</Text>
           {cancel.error ? <Text tone="methyl">{cancel.error.message}</Text> : null}
         </Dialog>
       ) : null}
