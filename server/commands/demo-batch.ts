@@ -1,7 +1,7 @@
 import { copyFileSync, mkdirSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { demoSheet } from '../../db/seed/pages/demo-sheet';
-import { drawPages } from '../../db/seed/pages/draw-pages';
+import { drawPages } from './demo-draw/draw-pages';
 import { readConfig } from '../config/config';
 import { demoSeed, demoTruth, secondBatch } from './demo-truth';
 

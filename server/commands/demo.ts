@@ -2,7 +2,7 @@ import { readFileSync, rmSync } from 'node:fs';
 import { join } from 'node:path';
 import { cast, castPassword } from '../../db/seed/cast';
 import { demoSheet } from '../../db/seed/pages/demo-sheet';
-import { drawPages } from '../../db/seed/pages/draw-pages';
+import { drawPages } from './demo-draw/draw-pages';
 import { pageCount, PAGE_HEIGHT_MM, PAGE_WIDTH_MM, sheetBoxes } from '../../db/seed/pages/sheet-layout';
 import { seedPeople } from '../../db/seed/people';
 import { demoItems, workedKey, type DemoItem } from '../../db/seed/truth/demo-items';
@@ -17,9 +17,10 @@ import { candidatesOf, changeAttendance } from '../services/candidates';
 import { importClassList } from '../services/class-list';
 import { createItem } from '../services/items';
 import { saveLayout, saveSample } from '../services/layouts';
+import { printFor } from '../services/printings';
 import { lockPaper } from '../services/paper-lock';
 import { createSitting } from '../services/sittings';
-import { demoSeed, demoTruth, type DemoSitting } from './demo-truth';
+import { demoSeed, demoTruth, secondBatch, type DemoSitting } from './demo-truth';
 
 export const demoIsWanted = ({ config, db }: Context): boolean => config.demo && allCourses(db).length === 0;
 
@@ -77,9 +78,14 @@ export async function seedDemo(context: Context): Promise<DemoSitting> {
   const boxes = sheetBoxes(items.length).map(({ itemNumber, ...box }) => ({ ...box, item: items[itemNumber - 1] ?? '' }));
   saveLayout(context, lead, sitting.id, 0, { pages, boxes });
   await addSamplePages(context, lead, sitting.id);
-  importClassList(context, lead, sitting.id, truth.map(({ candidate }) => candidate).join('\n'));
-  markAbsent(context, lead, sitting.id, truth);
+  const late = new Set(secondBatch(truth).map(({ candidate }) => candidate));
+  const list = (isLate: boolean): string => truth.filter(({ candidate }) => late.has(candidate) === isLate).map(({ candidate }) => candidate).join('\n');
+  importClassList(context, lead, sitting.id, list(false));
   lockPaper(context, lead, sitting.id);
+  printFor(context, lead, sitting.id, { paperSize: 'a4', spares: 4, for: 'all' });
+  // These came too late for a printed sheet: they write on paper without codes, whose regions are drawn.
+  importClassList(context, lead, sitting.id, list(true));
+  markAbsent(context, lead, sitting.id, truth);
   const next = createSitting(context, lead, courseId, { title: 'Paper 3, summer sitting', heldOn: '2026-06-03', secondPolicy: 'none', totalRounding: 'none' });
   addItems(context, lead, next.id, demoItems.slice(4, 8));
   return { sittingId: sitting.id, readers: [people.readerOne, people.readerTwo] };

@@ -1,5 +1,5 @@
 import { demoSheet } from '../../db/seed/pages/demo-sheet';
-import { drawPages } from '../../db/seed/pages/draw-pages';
+import { drawPages } from '../../server/commands/demo-draw/draw-pages';
 import { pageCount, PAGE_HEIGHT_MM, PAGE_WIDTH_MM, sheetBoxes } from '../../db/seed/pages/sheet-layout';
 import { demoItems } from '../../db/seed/truth/demo-items';
 import type { CandidateTruth } from '../../db/seed/truth/written';

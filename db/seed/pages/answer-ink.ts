@@ -4,7 +4,7 @@ import type { WrittenAnswer } from '../truth/written';
 import { handwritten, inkSvg, joined, penLine } from './handwriting';
 import type { Ink, Stroke } from './handwriting';
 import { placeOfItem } from './sheet-layout';
-import type { SheetBox } from './sheet-layout';
+import type { ItemPlace, SheetBox } from './sheet-layout';
 
 interface Place {
   readonly x: number;
@@ -20,8 +20,7 @@ interface Placed extends Ink {
 }
 
 /** Everything a candidate wrote for one item: the working on its lines and the answer in its box. */
-export function answerInk(answer: WrittenAnswer, hand: Hand, random: Random): string {
-  const { answer: box, lines, working } = placeOfItem(answer.itemNumber);
+export function answerInk(answer: WrittenAnswer, hand: Hand, random: Random, { answer: box, lines, working }: ItemPlace = placeOfItem(answer.itemNumber)): string {
   const stroke = { hand, random };
   const pressure = random.between(0.86, 1) * (hand.pen === 'pencil' ? 0.9 : 1);
   const ink = joined([workingInk(stroke, answer.working, lines, working), boxInk(stroke, answer, box)]);

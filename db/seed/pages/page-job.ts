@@ -1,5 +1,18 @@
+import type { CodedSheet } from './coded-page';
 import type { CandidateTruth } from '../truth/written';
 import type { PrintedSheet } from './printed';
+
+/** What the codes of the sheets say, and whose each is. */
+export interface CodedJob {
+  readonly sheet: CodedSheet;
+  readonly sitting: number;
+  readonly layout: number;
+  readonly secret: string;
+  /** Script numbers by candidate number. */
+  readonly scripts: Readonly<Record<string, number>>;
+  /** Candidates who left the box for their number empty. */
+  readonly withoutNumber: readonly string[];
+}
 
 /** What the drawing process is told, as one JSON text on its standard input. */
 export interface PageJob {
@@ -7,6 +20,8 @@ export interface PageJob {
   readonly seed: string;
   readonly sheet: PrintedSheet;
   readonly candidates: readonly CandidateTruth[];
+  /** Printed answer sheets with codes; without them the pages are those of a paper of one's own. */
+  readonly coded?: CodedJob;
   /** Whether the pages are also drawn as they come from the press. */
   readonly withSamples: boolean;
 }

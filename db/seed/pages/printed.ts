@@ -163,3 +163,12 @@ export function printedPage(sheet: PrintedSheet, pageNo: number): string {
 /** The candidate's number, printed before the exam; never a name. */
 export const printedNumber = (candidate: string): string =>
   inked([text(candidate, { x: LEFT_MM, baseline: 43.2, sizeMm: 10.5 }, 'mono')]);
+
+export interface PrintedWord extends Pick<Setting, 'x' | 'baseline' | 'sizeMm'> {
+  readonly text: string;
+  readonly font: PrintFont;
+  readonly align: 'left' | 'right';
+}
+
+/** Words that were set elsewhere, each at its place. */
+export const inkedWords = (words: readonly PrintedWord[]): string => inked(words.map(({ text: own, font, ...setting }) => text(own, { ...setting, ink: '#111' }, font)));

@@ -2,9 +2,9 @@ import { spawn } from 'node:child_process';
 import { createRequire } from 'node:module';
 import { createInterface } from 'node:readline';
 import { fileURLToPath, pathToFileURL } from 'node:url';
-import type { CandidateTruth } from '../truth/written';
-import type { PageDrawn, PageJob } from './page-job';
-import type { PrintedSheet } from './printed';
+import type { CodedJob, PageDrawn, PageJob } from '../../../db/seed/pages/page-job';
+import type { PrintedSheet } from '../../../db/seed/pages/printed';
+import type { CandidateTruth } from '../../../db/seed/truth/written';
 
 export interface DrawPagesOrder {
   readonly outDir: string;
@@ -13,6 +13,7 @@ export interface DrawPagesOrder {
   /** Absent ones are passed over. */
   readonly candidates: readonly CandidateTruth[];
   readonly withSamples?: boolean;
+  readonly coded?: CodedJob;
   readonly onPage?: (page: PageDrawn) => void;
   readonly signal?: AbortSignal;
 }

@@ -2,10 +2,10 @@ import { mkdtempSync, readdirSync, rmSync, statSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
-import { candidateNumbers, inventTruth } from '../truth/truth';
+import { candidateNumbers, inventTruth } from '../../../db/seed/truth/truth';
 import { drawPages } from './draw-pages';
-import type { PageDrawn } from './page-job';
-import type { PrintedSheet } from './printed';
+import type { PageDrawn } from '../../../db/seed/pages/page-job';
+import type { PrintedSheet } from '../../../db/seed/pages/printed';
 
 const sheet: PrintedSheet = {
   title: 'CHM 214, Paper 2',
