@@ -146,7 +146,6 @@ describe('hostile files', () => {
     expect(storedFiles(join(folder.dataDir, 'blobs'))).toEqual([]);
     expect(db.$client.prepare('select count(*) from blob').pluck().get()).toBe(0);
     db.$client.close();
-    console.info(`The server held ${Math.round(server.peakMb())} MB at most.`);
     expect(server.peakMb()).toBeLessThan(1024);
   });
 
