@@ -43,7 +43,13 @@ type TakenPage = {
   readonly cutPage: string | null;
 };
 
-export type Taken = TakenPage | { readonly ok: false; readonly refusal: string; readonly isTwin?: boolean };
+export interface NotTaken {
+  readonly ok: false;
+  readonly refusal: string;
+  readonly isTwin?: boolean;
+}
+
+export type Taken = TakenPage | NotTaken;
 
 async function originalOf({ upload, path }: IngestOf, opened: OpenedPage): Promise<Original> {
   const { size } = await stat(opened.path);
@@ -63,7 +69,7 @@ const toPlace = ({ upload, batch }: IngestOf, page: PlannedPage, sheet: SheetRep
 
 type Twin = NonNullable<ReturnType<typeof samePicture>>;
 
-function twinRefusal({ upload }: IngestOf, twin: Twin): Taken {
+function twinRefusal({ upload }: IngestOf, twin: Twin): NotTaken {
   const where = twin.upload === upload.id ? '' : ` of bundle ${twin.bundle}`;
   const page = twin.pages !== null && twin.pages > 1 && twin.name === null ? `page ${twin.index + 1} of ` : '';
   return { ok: false, isTwin: true, refusal: `The same picture as ${page}${twin.name ?? twin.fileName}${where}. It was not kept twice.` };
@@ -90,13 +96,15 @@ export async function makeTaken(context: Context, of: IngestOf, page: PlannedPag
 /** Whether the row of a page may still be written: its file was not given up, and no earlier run wrote it. */
 const isOpen = ({ db }: Context, { upload }: IngestOf, page: PlannedPage): boolean => findUpload(db, upload.id)?.state === 'received' && pageImageAt(db, upload.id, page.index) === undefined;
 
-/** Writes the rows of one page, and gives it its place: one transaction. */
-export function keepPage(context: Context, of: IngestOf, page: PlannedPage, taken: TakenPage): void {
+/** Writes the rows of one page, and gives it its place: one transaction. Tells where the same picture came in beside it meanwhile. */
+export function keepPage(context: Context, of: IngestOf, page: PlannedPage, taken: TakenPage): NotTaken | null {
   const { db } = context;
   const { upload, batch } = of;
-  inTransaction(db, () => {
-    if (!isOpen(context, of, page)) return;
+  return inTransaction(db, () => {
+    if (!isOpen(context, of, page)) return null;
     const { made, stored, original, frame, note, sheet } = taken;
+    const twin = samePicture(db, batch.sitting, { original: original.sha256, frame }, stored.display);
+    if (twin) return twinRefusal(of, twin);
     const id = uuidv7();
     insertBlob(db, { ...original, mediaType: made.mediaType });
     noteBlobs(context, made, stored);
@@ -124,6 +132,7 @@ export function keepPage(context: Context, of: IngestOf, page: PlannedPage, take
     if (place) fillPlace(context, place, id, { crops: stored.crops, sheet });
     if (place && 'from' in placing) recordAct(context, { actor: batch.madeBy, act: 'page-placed', sitting: batch.sitting, subject: id, after: { page: place.page, from: placing.from } });
     bumpSitting(db, batch.sitting);
+    return null;
   });
 }
 

@@ -31,9 +31,10 @@ const isStill = ({ db }: Context, uploadId: string): boolean => findUpload(db, u
 async function bringIn(context: Context, of: IngestOf, page: PlannedPage, opened: OpenedPage | { readonly refusal: string }): Promise<void> {
   try {
     const taken: Taken = 'refusal' in opened ? { ok: false, refusal: opened.refusal } : await makeTaken(context, of, page, opened);
-    if (taken.ok) keepPage(context, of, page, taken);
-    else if (of.isOnePicture) refuse(context, of.upload, of.batch, { problem: taken.refusal, state: taken.isTwin ? 'duplicate' : 'refused' });
-    else noteRefusedPage(context, of, page, taken.refusal);
+    const notTaken = taken.ok ? keepPage(context, of, page, taken) : taken;
+    if (notTaken === null) return;
+    if (of.isOnePicture) refuse(context, of.upload, of.batch, { problem: notTaken.refusal, state: notTaken.isTwin ? 'duplicate' : 'refused' });
+    else noteRefusedPage(context, of, page, notTaken.refusal);
   } finally {
     if ('isPassing' in opened && opened.isPassing) await rm(opened.path, { force: true });
   }
