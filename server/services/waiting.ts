@@ -1,3 +1,4 @@
+import { countStripsToRead } from '../../db/queries/people-and-paper';
 import { answerCounts, pageCounts } from '../../db/queries/progress';
 import { isPaperLocked } from '../../db/queries/sittings';
 import { heldStates } from '../../shared/contracts/enums';
@@ -6,12 +7,20 @@ import type { SittingView } from '../../shared/contracts/sittings';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
 import { deskStanding } from './desk';
+import { handScripts } from './people/by-hand';
+import { viewOf } from './people/overview';
 import { coursesOf, sittingsIn } from './sittings';
 
 function toRead(context: Context, actor: Actor, sitting: SittingView): Pick<WaitingLine, 'count' | 'item'> {
   const { items } = deskStanding(context, actor, sitting.id);
   const most = items.reduce<(typeof items)[number] | null>((found, item) => (item.toRead > (found?.toRead ?? 0) ? item : found), null);
   return { count: most?.toRead ?? 0, item: most ? { id: most.id, number: most.number, label: most.label } : null };
+}
+
+/** Sheets that carry another's number, and spare ones that are nobody's. */
+function differing(context: Context, sittingId: string): number {
+  const { differ, spares } = viewOf(context, sittingId);
+  return differ.length + spares.length;
 }
 
 function linesOf(context: Context, actor: Actor, sitting: SittingView): WaitingLine[] {
@@ -27,7 +36,8 @@ function linesOf(context: Context, actor: Actor, sitting: SittingView): WaitingL
     const { count, item } = toRead(context, actor, sitting);
     lines.push(line('read', count, item));
   }
-  if (isLead) lines.push(line('rule', answerCounts(db, id, heldStates)?.held ?? 0));
+  if (isLead) lines.push(line('rule', answerCounts(db, id, heldStates)?.held ?? 0), line('differ', differing(context, id)));
+  lines.push(line('numbers', countStripsToRead(db, id)), line('by-hand', handScripts(context, actor, id).length));
   return lines.filter(({ count }) => count > 0);
 }
 

@@ -1,4 +1,4 @@
-import { useId, type ReactNode } from 'react';
+import { useId, useState, type ReactNode } from 'react';
 import { ScrollView, View } from 'react-native';
 import { Text } from './text';
 import { useColors } from './theme';
@@ -22,6 +22,10 @@ export function Dialog({ title, children, actions, onClose, width = 480, testID 
   const isPhone = useIsPhone();
   const heading = useId();
   const modal = useModal(onClose);
+  // What is longer than its room is scrolled by keyboard, so it takes the focus.
+  const [room, setRoom] = useState(0);
+  const [content, setContent] = useState(0);
+  const isLonger = room > 0 && content > room + 1;
   return (
     <dialog
       {...modal}
@@ -47,7 +51,14 @@ export function Dialog({ title, children, actions, onClose, width = 480, testID 
             {title}
           </Text>
         </View>
-        <ScrollView contentContainerStyle={{ paddingHorizontal: 24, paddingBottom: 16, gap: 12 }}>{children}</ScrollView>
+        <ScrollView
+          {...(isLonger ? { tabIndex: 0 as const } : {})}
+          onLayout={({ nativeEvent }) => setRoom(nativeEvent.layout.height)}
+          onContentSizeChange={(_width, height) => setContent(height)}
+          contentContainerStyle={{ paddingHorizontal: 24, paddingBottom: 16, gap: 12 }}
+        >
+          {children}
+        </ScrollView>
         {actions === undefined ? null : (
           <View style={{ flexDirection: isPhone ? 'column' : 'row-reverse', gap: 10, padding: 20, paddingTop: 8 }}>{actions}</View>
         )}

@@ -87,7 +87,7 @@ describe('axe finds nothing', () => {
     // Without events the network comes to rest, and the tray asks by itself.
     await page.addInitScript(() => void Reflect.deleteProperty(window, 'EventSource'));
     const { open, locked, kinds } = world;
-    for (const path of ['', 'settings', `sittings/${locked}`, `sittings/${open}/paper`, ...kinds.map((item) => `sittings/${open}/paper?item=${item}`), `sittings/${open}/vetting`, `sittings/${open}/regions`, `sittings/${locked}/regions`, `sittings/${locked}/class-list`, `sittings/${locked}/sheets`, `sittings/${open}/sheets`, `sittings/${locked}/scans`, `sittings/${locked}/sorting`, `sittings/${locked}/moderation`, `sittings/${locked}/marks`, 'nowhere']) {
+    for (const path of ['', 'settings', `sittings/${locked}`, `sittings/${open}/paper`, ...kinds.map((item) => `sittings/${open}/paper?item=${item}`), `sittings/${open}/vetting`, `sittings/${open}/regions`, `sittings/${locked}/regions`, `sittings/${locked}/class-list`, `sittings/${locked}/sheets`, `sittings/${open}/sheets`, `sittings/${locked}/scans`, `sittings/${locked}/sorting`, `sittings/${locked}/people`, `sittings/${locked}/numbers`, `sittings/${locked}/by-hand`, `sittings/${locked}/moderation`, `sittings/${locked}/marks`, 'nowhere']) {
       await page.goto(`${bench.address}/${path}`);
       await settled(page);
       expect(await axeViolations(page), path || 'bench').toEqual([]);

@@ -14,6 +14,9 @@ const glyphs: Readonly<Record<WaitingLine['kind'], ReactNode>> = {
   rule: <PairGlyph state="discordant" scale={1.3} />,
   read: <PairGlyph state="single" scale={1.3} />,
   sort: <Icon name="page" size={26} tone="iodine" />,
+  differ: <Icon name="page" size={26} tone="iodine" />,
+  numbers: <Icon name="note" size={26} tone="ink2" />,
+  'by-hand': <Icon name="note" size={26} tone="ink2" />,
   lock: <Icon name="note" size={26} tone="ink2" />,
 };
 
@@ -21,6 +24,9 @@ const hrefs: Readonly<Record<WaitingLine['kind'], (line: WaitingLine) => string>
   rule: ({ sittingId }) => `/sittings/${sittingId}/moderation?show=to-rule`,
   read: ({ sittingId, item }) => `/desk/${sittingId}${item ? `?item=${item.id}` : ''}`,
   sort: ({ sittingId }) => `/sittings/${sittingId}/sorting`,
+  differ: ({ sittingId }) => `/sittings/${sittingId}/people`,
+  numbers: ({ sittingId }) => `/sittings/${sittingId}/numbers`,
+  'by-hand': ({ sittingId }) => `/sittings/${sittingId}/by-hand`,
   lock: ({ sittingId }) => `/sittings/${sittingId}/paper`,
 };
 

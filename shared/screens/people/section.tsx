@@ -27,7 +27,7 @@ export function Row({ children, acts, testID }: { children: ReactNode; acts?: Re
   return (
     <View role="listitem" testID={testID} style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center', columnGap: 20, rowGap: 10, paddingVertical: 12, borderTopWidth: 1, borderColor: colors.hair }}>
       <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: 280, gap: 6 }}>{children}</View>
-      {acts ? <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 10 }}>{acts}</View> : null}
+      {acts ? <View style={{ flexDirection: 'row', flexWrap: 'wrap', flexShrink: 1, columnGap: 10, rowGap: 4 }}>{acts}</View> : null}
     </View>
   );
 }

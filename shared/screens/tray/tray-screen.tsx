@@ -6,7 +6,7 @@ import { useProgress, useSitting } from '../../client/sittings';
 import type { ProgressView } from '../../contracts/progress';
 import type { BatchSummary } from '../../contracts/scans';
 import type { SittingView } from '../../contracts/sittings';
-import { Button } from '../../ui/button';
+import { Button, ButtonLink } from '../../ui/button';
 import { Dialog } from '../../ui/dialog';
 import { Empty } from '../../ui/page-state';
 import { ProgressRule } from '../../ui/progress-rule';
@@ -98,6 +98,7 @@ function Tray({ sitting, batches, progress }: TrayProps) {
           {isPhone ? null : actions}
         </View>
         {progress ? <PagesIn pages={progress.pages} bundles={batches.length} /> : null}
+        {progress && progress.pages.in > 0 ? <PeopleLinks sitting={sitting} /> : null}
       </View>
       <View style={{ flex: 1, minHeight: 0, flexDirection: isWide ? 'row' : 'column' }}>
         <ScrollView style={{ flex: 1, maxWidth: isWide ? 620 : undefined, backgroundColor: colors.bench }}>
@@ -154,6 +155,26 @@ function Tray({ sitting, batches, progress }: TrayProps) {
           <Text>{words.cancelling.text(cancelling.files.sending + cancelling.files.received)}</Text>
           {cancel.error ? <Text tone="methyl">{cancel.error.message}</Text> : null}
         </Dialog>
+      ) : null}
+    </View>
+  );
+}
+
+/** From the pages to the people: whose they are, and the numbers that candidates wrote. */
+function PeopleLinks({ sitting }: { sitting: SittingView }) {
+  const isOverseer = sitting.roles.includes('lead') || sitting.roles.includes('external');
+  const canRead = sitting.roles.includes('lead') || sitting.roles.includes('reader');
+  return (
+    <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 10 }}>
+      {isOverseer ? (
+        <ButtonLink kind="text" isSmall href={`/sittings/${sitting.id}/people`} testID="to-people">
+          {words.toPeople}
+        </ButtonLink>
+      ) : null}
+      {canRead ? (
+        <ButtonLink kind="text" isSmall href={`/sittings/${sitting.id}/numbers`} testID="to-numbers">
+          {words.toNumbers}
+        </ButtonLink>
       ) : null}
     </View>
   );

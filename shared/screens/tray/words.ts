@@ -2,6 +2,8 @@ const plural = (n: number, one: string, many = `${one}s`): string => `${n.toLoca
 
 export const words = {
   title: 'Batch tray',
+  toPeople: 'People and paper',
+  toNumbers: 'Read hand-written numbers',
   pagesIn: (due: number) => `of ${due.toLocaleString('en-GB')} pages in`,
   pagesInLabel: 'pages in',
   bundles: (n: number) => plural(n, 'bundle'),
