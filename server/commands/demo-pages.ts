@@ -1,21 +1,16 @@
 import { existsSync, mkdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { demoSheet } from '../../db/seed/pages/demo-sheet';
+import { codedJob } from './demo-draw/coded-job';
 import { drawPages } from './demo-draw/draw-pages';
-import type { CodedJob } from '../../db/seed/pages/page-job';
 import { pageCount } from '../../db/seed/pages/sheet-layout';
 import { demoItems } from '../../db/seed/truth/demo-items';
 import { saveTruth } from '../../db/seed/truth/truth-file';
-import { candidateStandings } from '../../db/queries/candidates';
 import { placesOfSitting } from '../../db/queries/page-images';
-import { printingsOfSitting } from '../../db/queries/printings';
-import { findSitting } from '../../db/queries/sittings';
 import { batchesOf } from '../../db/queries/uploads';
 import type { Actor } from '../auth/access';
 import type { Context } from '../context';
-import { measuringDocument, setHead } from '../print/sheet-setting';
 import { createBatch } from '../services/batches';
-import { headingOf, planOf, printedItems } from '../services/sheet-order';
 import { receiveFile } from '../services/uploads';
 import { readAhead } from './demo-readings';
 import { demoSeed, demoTruth, firstBatch, type DemoSitting } from './demo-truth';
@@ -34,19 +29,6 @@ export function noteUnfinished(context: Context, demo: DemoSitting): void {
 
 /** The demo whose pages are not all in yet; also after a stop half way. */
 export const unfinishedDemo = (context: Context): DemoSitting | null => (existsSync(unfinishedPath(context)) ? (JSON.parse(readFileSync(unfinishedPath(context), 'utf8')) as DemoSitting) : null);
-
-/** What the press put on the sheets of the demo's first printing. */
-export function codedJob({ db, config }: Context, sittingId: string): CodedJob {
-  const sitting = findSitting(db, sittingId);
-  const printed = printingsOfSitting(db, sittingId).at(-1);
-  if (!sitting || !printed) throw new Error('The demo’s sheets are not printed.');
-  const { paperSize } = printed.printing;
-  const planned = planOf(printedItems(db, sittingId), paperSize);
-  if (!planned.ok) throw new Error('The demo’s sheets cannot be planned.');
-  const { title, held } = headingOf(db, sitting);
-  const scripts = Object.fromEntries(candidateStandings(db, sittingId).map(({ number, scriptNumber }) => [number, scriptNumber ?? 0]));
-  return { sheet: { plan: planned.plan, head: setHead(measuringDocument(), title, held, printed.layout) }, sitting: sitting.printNumber, layout: printed.layout, secret: config.sheetSecret, scripts, withoutNumber: ['W4090', 'W4133'] };
-}
 
 /** Draws the demo's pages in a process of their own and brings each in as soon as it is drawn. Pages that are in already are passed over. */
 export async function bringDemoPages(context: Context, demo: DemoSitting, say: (line: string) => void, signal?: AbortSignal): Promise<void> {
@@ -71,7 +53,7 @@ export async function bringDemoPages(context: Context, demo: DemoSitting, say: (
     begun += 1;
     if (begun % sayEvery === 0 || begun === all) say(`${begun} of ${all} pages of the demo are drawn. Reading can go on meanwhile.`);
   };
-  await drawPages({ outDir, seed: demoSeed, sheet: demoSheet, candidates: truth, coded: codedJob(context, demo.sittingId), onPage: ({ file }) => afterTheOthers(file), ...(signal ? { signal } : {}) });
+  await drawPages({ outDir, seed: demoSeed, sheet: demoSheet, candidates: truth, coded: codedJob(context, demo.sittingId, { W4090: null, W4104: null }), onPage: ({ file }) => afterTheOthers(file), ...(signal ? { signal } : {}) });
   await bringing;
   await context.jobs.settle();
   readAhead(context, demo, firstBatch(demoTruth()));

@@ -10,8 +10,8 @@ export interface CodedJob {
   readonly secret: string;
   /** Script numbers by candidate number. */
   readonly scripts: Readonly<Record<string, number>>;
-  /** Candidates who left the box for their number empty. */
-  readonly withoutNumber: readonly string[];
+  /** What stands in the box for the own number where it is not that number; null for nothing. */
+  readonly ownNumbers: Readonly<Record<string, string | null>>;
 }
 
 /** What the drawing process is told, as one JSON text on its standard input. */

@@ -24,7 +24,8 @@ function codesOf({ sitting, layout, secret, sheet }: CodedJob, script: number, p
 function drawCoded(seed: string, coded: CodedJob, { candidate, hand, answers }: Pick<CandidateTruth, 'candidate' | 'hand' | 'answers'>, pageNo: number): Promise<Buffer> {
   const script = coded.scripts[candidate];
   if (script === undefined) throw new Error(`No sheet was printed for ${candidate}.`);
-  const ownNumber = coded.withoutNumber.includes(candidate) ? null : candidate;
+  const written = coded.ownNumbers[candidate];
+  const ownNumber = written === undefined ? candidate : written;
   return drawCodedPage({ seed, sheet: coded.sheet, pageNo, owner: { candidateNumber: candidate, script }, codes: codesOf(coded, script, pageNo), hand, answers, ownNumber });
 }
 
