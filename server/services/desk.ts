@@ -47,7 +47,7 @@ export function describeLeases(db: Database, leaseIds: readonly string[]): DeskL
       pageImageRev: row.pageImageRev,
       crops: [],
     };
-    leases.set(row.id, { ...known, crops: [...known.crops, { box: row.box, version: pictureVersion(row.blob), use: row.use, widthPx: row.widthPx, heightPx: row.heightPx }] });
+    leases.set(row.id, { ...known, crops: [...known.crops, { box: row.box, version: pictureVersion(row.blob), use: row.use, widthPx: row.widthPx, heightPx: row.heightPx, isDoubtful: row.evidence === 'doubtful' }] });
   }
   return leaseIds.flatMap((id) => leases.get(id) ?? []);
 }
