@@ -1,5 +1,6 @@
 import { v7 as uuidv7 } from 'uuid';
 import { inTransaction, type Database } from '../../db/client';
+import { emptyCounts } from '../../db/queries/blanks';
 import {
   courseCodeOf,
   deskItems,
@@ -111,6 +112,7 @@ export function deskStanding(context: Context, actor: Actor, sittingId: string) 
     courseCode: courseCodeOf(db, sitting.course),
     title: sitting.title,
     isOpenForReading: sitting.schemeVersion !== null && sitting.status === 'draft',
+    emptyBoxes: [...emptyCounts(db, actor.personId, sittingId).values()].reduce((sum, count) => sum + count, 0),
     items,
   };
 }

@@ -136,6 +136,8 @@ export const getDeskStanding = defineRoute({
     courseCode: z.string(),
     title: z.string(),
     isOpenForReading: z.boolean(),
+    /** Boxes that look empty: they can be looked at many at once. */
+    emptyBoxes: z.int(),
     items: z.array(deskItem),
   }),
 });
