@@ -1,4 +1,4 @@
-import { and, asc, count, eq, exists, isNull, ne, notExists, or, sql, type SQL } from 'drizzle-orm';
+import { and, asc, count, eq, exists, isNotNull, isNull, ne, notExists, or, sql, type SQL } from 'drizzle-orm';
 import type { Database } from '../client';
 import { answer, box, crop, lease, reading, readingEnd, script } from '../schema';
 
@@ -9,11 +9,19 @@ const cropsOf = (db: Database, which: SQL | undefined) =>
     .innerJoin(box, eq(box.id, crop.box))
     .where(and(eq(crop.answer, answer.id), which));
 
-/** Empty by its ink, frame seen whole, and nothing in the working either: a value may stand there. */
+/** A crop that keeps its answer off the sheet. Most workings have no frame to judge ink by: those are shown, and people look. */
+const speaksAgainst = () =>
+  or(
+    ne(crop.evidence, 'in'),
+    and(eq(box.use, 'answer'), or(isNull(crop.ink), ne(crop.ink, 'blank'))),
+    and(eq(box.use, 'working'), isNotNull(crop.ink), ne(crop.ink, 'blank')),
+  );
+
+/** Empty by its ink, its frame seen whole, and no working that is known to hold something: a value may stand there. */
 const looksEmpty = (db: Database) =>
   and(
     exists(cropsOf(db, eq(box.use, 'answer'))),
-    notExists(cropsOf(db, and(ne(box.use, 'number'), or(isNull(crop.ink), ne(crop.ink, 'blank'), ne(crop.evidence, 'in'))))),
+    notExists(cropsOf(db, and(ne(box.use, 'number'), speaksAgainst()))),
   );
 
 /** Still due, not read by this reader, and typed from a picture. */

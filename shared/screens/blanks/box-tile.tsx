@@ -25,7 +25,7 @@ interface BoxTileProps {
 export function BoxTile({ lease, width, isBlank, isCurrent, host, onToggle, onKey, onFocus }: BoxTileProps) {
   const colors = useColors();
   const [isHovered, setHovered] = useState(false);
-  const pictures = lease.crops.filter(({ use }) => use === 'answer');
+  const pictures = [...lease.crops].sort((one, other) => one.use.localeCompare(other.use));
   const inner = Math.max(1, width - 2 * 6);
   // NOTE a plain view: the pressable of the kit keeps Enter for itself, which here records the sheet.
   const web = { role: 'checkbox', tabIndex: isCurrent ? 0 : -1, 'aria-checked': isBlank, 'aria-label': words.box(lease.candidateNumber), onClick: onToggle, onKeyDown: onKey, onFocus, onMouseEnter: () => setHovered(true), onMouseLeave: () => setHovered(false) };
@@ -38,7 +38,7 @@ export function BoxTile({ lease, width, isBlank, isCurrent, host, onToggle, onKe
     >
       <View aria-hidden style={{ backgroundColor: colors.mat, borderRadius: radius.scan, gap: 4 }}>
         {pictures.map((crop) => (
-          <ScanPicture key={crop.box} src={cropUrl(lease.answerId, crop)} alt={words.picture(lease.candidateNumber)} width={inner} height={Math.round((inner * crop.heightPx) / Math.max(1, crop.widthPx))} turns={0} />
+          <ScanPicture key={crop.box} src={cropUrl(lease.answerId, crop)} alt={words.picture(crop.use, lease.candidateNumber)} width={inner} height={Math.round((inner * crop.heightPx) / Math.max(1, crop.widthPx))} turns={0} />
         ))}
       </View>
       <View style={{ minHeight: 24, flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center', columnGap: 6 }}>

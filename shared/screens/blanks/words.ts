@@ -9,7 +9,7 @@ export const words = {
   helpKeys: 'Arrows move, space unticks.',
   sheet: 'Boxes that look empty',
   box: (number: string) => `${number}, blank`,
-  picture: (number: string) => `Answer box of ${number}`,
+  picture: (use: 'answer' | 'working', number: string) => `${use === 'answer' ? 'Answer box' : 'Working'} of ${number}`,
   blank: 'blank',
   toDesk: 'to the desk',
   these: (count: number) => (count === 1 ? 'This one is blank' : `These ${n(count)} are blank`),
