@@ -51,7 +51,7 @@ export function answerHead(db: Database, answerId: string) {
 
 export function cropsOfAnswer(db: Database, answerId: string) {
   return db
-    .select({ box: box.id, use: box.use, widthPx: crop.widthPx, heightPx: crop.heightPx, blob: crop.blob, pageImage: crop.pageImage, pageNo: box.pageNo })
+    .select({ box: box.id, use: box.use, widthPx: crop.widthPx, heightPx: crop.heightPx, blob: crop.blob, evidence: crop.evidence, pageImage: crop.pageImage, pageNo: box.pageNo })
     .from(crop)
     .innerJoin(box, and(eq(box.id, crop.box), ne(box.use, 'number')))
     .where(eq(crop.answer, answerId))

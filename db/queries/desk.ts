@@ -159,6 +159,7 @@ export function leasedAnswers(db: Database, leaseIds: readonly string[]) {
       pageImageId: crop.pageImage,
       pageImageRev: pageImage.rev,
       blob: crop.blob,
+      evidence: crop.evidence,
       widthPx: crop.widthPx,
       heightPx: crop.heightPx,
       pageCount: sql<number>`(select count(*) from ${page} where ${page.script} = ${script.id})`,

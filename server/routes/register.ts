@@ -1,6 +1,7 @@
 import type { Router } from 'express';
 import type { AppPassport } from '../auth/passport';
 import type { Context } from '../context';
+import { blankRoutes } from './blanks';
 import { classListRoutes } from './class-list';
 import { deskRoutes } from './desk';
 import { eventRoutes } from './events';
@@ -21,6 +22,7 @@ export function registerRoutes(router: Router, context: Context, passport: AppPa
   serviceRoutes(router, context);
   sessionRoutes(router, context, passport);
   deskRoutes(router, context);
+  blankRoutes(router, context);
   ledgerRoutes(router, context);
   sittingRoutes(router, context);
   layoutRoutes(router, context);

@@ -151,7 +151,7 @@ export function answerView(context: Context, actor: Actor, answerId: string): An
     follows: followsView(db, found),
     isCovered: covered,
     cannotSettle: cannotSettle(actor, access.roles.has('lead'), readings),
-    crops: crops.flatMap(({ box, use, blob, widthPx, heightPx }) => (use === 'number' ? [] : [{ box, version: pictureVersion(blob), use, widthPx, heightPx }])),
+    crops: crops.flatMap(({ box, use, blob, widthPx, heightPx, evidence }) => (use === 'number' ? [] : [{ box, version: pictureVersion(blob), use, widthPx, heightPx, isDoubtful: evidence === 'doubtful' }])),
     pageImageId: onPage?.image ?? null,
     pageImageRev: onPage?.rev ?? 1,
     pageNo: answerCrop?.pageNo ?? null,

@@ -1,5 +1,6 @@
 import { v7 as uuidv7 } from 'uuid';
 import { inTransaction, type Database } from '../../db/client';
+import { emptyCounts } from '../../db/queries/blanks';
 import {
   courseCodeOf,
   deskItems,
@@ -47,7 +48,7 @@ export function describeLeases(db: Database, leaseIds: readonly string[]): DeskL
       pageImageRev: row.pageImageRev,
       crops: [],
     };
-    leases.set(row.id, { ...known, crops: [...known.crops, { box: row.box, version: pictureVersion(row.blob), use: row.use, widthPx: row.widthPx, heightPx: row.heightPx }] });
+    leases.set(row.id, { ...known, crops: [...known.crops, { box: row.box, version: pictureVersion(row.blob), use: row.use, widthPx: row.widthPx, heightPx: row.heightPx, isDoubtful: row.evidence === 'doubtful' }] });
   }
   return leaseIds.flatMap((id) => leases.get(id) ?? []);
 }
@@ -111,6 +112,7 @@ export function deskStanding(context: Context, actor: Actor, sittingId: string) 
     courseCode: courseCodeOf(db, sitting.course),
     title: sitting.title,
     isOpenForReading: sitting.schemeVersion !== null && sitting.status === 'draft',
+    emptyBoxes: [...emptyCounts(db, actor.personId, sittingId).values()].reduce((sum, count) => sum + count, 0),
     items,
   };
 }

@@ -1,6 +1,6 @@
 import { countStripsToRead } from '../../db/queries/people-and-paper';
 import { answerCounts, pageCounts } from '../../db/queries/progress';
-import { isPaperLocked } from '../../db/queries/sittings';
+import { findSitting, isPaperLocked } from '../../db/queries/sittings';
 import { heldStates } from '../../shared/contracts/enums';
 import { waitingKinds, type WaitingLine } from '../../shared/contracts/waiting';
 import type { SittingView } from '../../shared/contracts/sittings';
@@ -9,6 +9,7 @@ import type { Context } from '../context';
 import { deskStanding } from './desk';
 import { handScripts } from './people/by-hand';
 import { viewOf } from './people/overview';
+import { emptyItems } from './blanks';
 import { coursesOf, sittingsIn } from './sittings';
 
 function toRead(context: Context, actor: Actor, sitting: SittingView): Pick<WaitingLine, 'count' | 'item'> {
@@ -23,6 +24,12 @@ function differing(context: Context, sittingId: string): number {
   return differ.length + spares.length;
 }
 
+/** Boxes that look empty, for one glance at many. */
+function emptyBoxes({ db }: Context, actor: Actor, sittingId: string): Pick<WaitingLine, 'count'> {
+  const sitting = findSitting(db, sittingId);
+  return { count: sitting ? emptyItems({ db }, actor.personId, sitting).reduce((sum, { count }) => sum + count, 0) : 0 };
+}
+
 function linesOf(context: Context, actor: Actor, sitting: SittingView): WaitingLine[] {
   const { db } = context;
   const { id } = sitting;
@@ -34,7 +41,7 @@ function linesOf(context: Context, actor: Actor, sitting: SittingView): WaitingL
   const lines = [line('sort', pageCounts(db, id).loose)];
   if (isReader) {
     const { count, item } = toRead(context, actor, sitting);
-    lines.push(line('read', count, item));
+    lines.push(line('read', count, item), line('blanks', emptyBoxes(context, actor, id).count));
   }
   if (isLead) lines.push(line('rule', answerCounts(db, id, heldStates)?.held ?? 0), line('differ', differing(context, id)));
   lines.push(line('numbers', countStripsToRead(db, id)), line('by-hand', handScripts(context, actor, id).length));

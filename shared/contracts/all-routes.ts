@@ -1,3 +1,4 @@
+import { blankRoutes } from './blanks';
 import { classListRoutes } from './class-list';
 import { deskRoutes } from './desk';
 import { itemBankRoutes } from './item-bank';
@@ -22,6 +23,7 @@ export const allRoutes: Readonly<Record<string, RouteContract>> = {
   ...serviceRoutes,
   ...sessionRoutes,
   ...deskRoutes,
+  ...blankRoutes,
   ...ledgerRoutes,
   ...sittingRoutes,
   ...progressRoutes,

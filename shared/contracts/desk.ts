@@ -14,6 +14,8 @@ export const deskCrop = z.object({
   use: z.enum(['answer', 'working']),
   widthPx: z.int(),
   heightPx: z.int(),
+  /** Not all four sides of its printed frame were seen: what was cut out may lie beside the box. */
+  isDoubtful: z.boolean(),
 });
 
 export const deskLease = z.object({
@@ -134,6 +136,8 @@ export const getDeskStanding = defineRoute({
     courseCode: z.string(),
     title: z.string(),
     isOpenForReading: z.boolean(),
+    /** Boxes that look empty: they can be looked at many at once. */
+    emptyBoxes: z.int(),
     items: z.array(deskItem),
   }),
 });

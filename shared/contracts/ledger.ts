@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { answerStates, attendances, exportKinds, itemKinds, ledgerChips, ledgerSorts, rulingKinds } from './enums';
+import { deskCrop } from './desk';
 import { code, grains, idParams, instant, rev, uuid } from './parts';
 import { defineRoute } from './route';
 
@@ -95,7 +96,7 @@ export const answerView = z.object({
   isCovered: z.boolean(),
   /** Why this person cannot type a third reading here, or null. */
   cannotSettle: z.string().nullable(),
-  crops: z.array(z.object({ box: uuid, version: z.string(), use: z.enum(['answer', 'working']), widthPx: z.int(), heightPx: z.int() })),
+  crops: z.array(deskCrop),
   pageImageId: uuid.nullable(),
   pageImageRev: z.int(),
   pageNo: z.int().nullable(),

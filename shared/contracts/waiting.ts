@@ -2,8 +2,8 @@ import { z } from 'zod';
 import { uuid } from './parts';
 import { defineRoute } from './route';
 
-/** What waits: answers to read, held answers to rule, loose pages to sort, sheets with another's number, numbers to read, scripts to type from the paper, a paper to lock. */
-export const waitingKinds = ['rule', 'read', 'sort', 'differ', 'numbers', 'by-hand', 'lock'] as const;
+/** What waits: answers to read, boxes that look empty, held answers to rule, loose pages to sort, sheets with another's number, numbers to read, scripts to type from the paper, a paper to lock. */
+export const waitingKinds = ['rule', 'read', 'blanks', 'sort', 'differ', 'numbers', 'by-hand', 'lock'] as const;
 
 export const waitingLine = z.object({
   kind: z.enum(waitingKinds),

@@ -22,7 +22,7 @@ interface InSittingProps {
 /** On a phone four sections stand at the foot beside the overview, the work before the building. */
 const atFoot: readonly Section[] = ['reading', 'moderation', 'marks', 'scans', 'paper', 'class-list', 'sheets', 'regions'];
 
-const sectionOf = (path: string): Section | null => (path.startsWith('/desk/') ? 'reading' : /\/(sorting|people|numbers|by-hand)$/.test(path) ? 'scans' : path.endsWith('/vetting') ? 'paper' : (sections.find((section) => path.endsWith(`/${section}`)) ?? null));
+const sectionOf = (path: string): Section | null => (path.startsWith('/desk/') || path.endsWith('/blanks') ? 'reading' : /\/(sorting|people|numbers|by-hand)$/.test(path) ? 'scans' : path.endsWith('/vetting') ? 'paper' : (sections.find((section) => path.endsWith(`/${section}`)) ?? null));
 
 /** What stands round every screen of a sitting: its burette at the left of a wide screen, its places at the foot of a phone. */
 export function InSitting({ sittingId, children, isFixed = false, isSlim = false, isBarHidden = false, side }: InSittingProps) {

@@ -55,6 +55,7 @@ function buildWorld(server: TestServer): World {
       saveBoxes: layoutFor(items),
       takeLeases: { itemId: items[0] ?? '' },
       recordReading: { answerId, leaseId, text: '6.10', openedAt: now },
+      recordBlankReadings: { readings: [], openedAt: now },
       recordThirdReading: { text: '6.10', openedAt: now },
       ruleAnswer: { kind: 'value', text: '6.10' },
       makeExport: { kind: 'marks-csv' },

@@ -14,6 +14,7 @@ import { createBatch } from '../../server/services/batches';
 import { receiveFile } from '../../server/services/uploads';
 import { axeViolations } from '../support/axe';
 import { openPage, startBrowserBench, type BrowserBench } from '../support/browser';
+import { judgeInk } from '../support/empty-boxes';
 import { giveEvidence } from '../support/evidence';
 import { actorOf, buildPaper, itemDraft } from '../support/paper';
 import { pageJpeg } from '../support/pictures';
@@ -32,7 +33,7 @@ function ofEveryKind(first: string): ItemDraft[] {
 }
 
 /** A sitting with something of everything: an open paper beside it, pairs that agree and differ, a loose page. */
-async function somethingOfEverything(bench: BrowserBench): Promise<{ open: string; locked: string; kinds: readonly string[] }> {
+async function somethingOfEverything(bench: BrowserBench): Promise<{ open: string; locked: string; empty: string; kinds: readonly string[] }> {
   const { server } = bench;
   const { context, people } = server;
   const paper = buildPaper(server, { locked: false });
@@ -55,7 +56,9 @@ async function somethingOfEverything(bench: BrowserBench): Promise<{ open: strin
   const batch = createBatch(context, actorOf(server, 'readerOne'), locked, 'B');
   await receiveFile(context, actorOf(server, 'readerOne'), batch.id, join(folder, 'scan0001.jpg'));
   await context.jobs.settle();
-  return { open, locked, kinds };
+  const empty = buildPaper(server, { candidates: Array.from({ length: 30 }, (_, index) => `W${4071 + index}`) }).sittingId;
+  judgeInk(server, giveEvidence(server, empty));
+  return { open, locked, empty, kinds };
 }
 
 const settled = async (page: Page): Promise<void> => {
@@ -65,7 +68,7 @@ const settled = async (page: Page): Promise<void> => {
 
 describe('axe finds nothing', () => {
   let bench: BrowserBench;
-  let world: { open: string; locked: string; kinds: readonly string[] };
+  let world: { open: string; locked: string; empty: string; kinds: readonly string[] };
   beforeAll(async () => {
     bench = await startBrowserBench();
     world = await somethingOfEverything(bench);
@@ -108,6 +111,18 @@ describe('axe finds nothing', () => {
     await page.getByTestId('rule').waitFor();
     await settled(page);
     expect(await axeViolations(page), 'uncovered').toEqual([]);
+    await context.close();
+  });
+
+  it.each(variants)('on a sheet of empty boxes, whole and with one unticked, $viewport, $scheme', async ({ viewport, scheme }) => {
+    const { page, context } = await openPage(bench, 'readerOne', viewport, scheme);
+    await page.goto(`${bench.address}/sittings/${world.empty}/blanks`);
+    await page.locator('[data-testid^="box-"]').first().waitFor();
+    await settled(page);
+    expect(await axeViolations(page), 'whole').toEqual([]);
+    await page.locator('[data-testid^="box-"]').first().click();
+    await page.getByText('1 stays for the desk').waitFor();
+    expect(await axeViolations(page), 'unticked').toEqual([]);
     await context.close();
   });
 

@@ -43,7 +43,7 @@ function printedFace({ words, lines }: PageFace, page: PlannedPage, codes: strin
     inkedWords(words.map(({ text, fount, sizeMm, x, y, side }) => ({ text, font: founts[fount], sizeMm, x, baseline: y, align: side }))),
     `<path fill="none" stroke="${workingRule}" stroke-width="0.18" d="${rules}"/>`,
     `<path fill="none" stroke="#000" stroke-width="${frameLineMm}" d="${frames}"/>`,
-    `<path fill="#000" shape-rendering="crispEdges" d="${codes}"/>`,
+    `<path fill="#000" d="${codes}"/>`,
   ].join('');
 }
 

@@ -13,6 +13,7 @@ import { words } from './words';
 const glyphs: Readonly<Record<WaitingLine['kind'], ReactNode>> = {
   rule: <PairGlyph state="discordant" scale={1.3} />,
   read: <PairGlyph state="single" scale={1.3} />,
+  blanks: <PairGlyph state="blank" scale={1.3} />,
   sort: <Icon name="page" size={26} tone="iodine" />,
   differ: <Icon name="page" size={26} tone="iodine" />,
   numbers: <Icon name="note" size={26} tone="ink2" />,
@@ -23,6 +24,7 @@ const glyphs: Readonly<Record<WaitingLine['kind'], ReactNode>> = {
 const hrefs: Readonly<Record<WaitingLine['kind'], (line: WaitingLine) => string>> = {
   rule: ({ sittingId }) => `/sittings/${sittingId}/moderation?show=to-rule`,
   read: ({ sittingId, item }) => `/desk/${sittingId}${item ? `?item=${item.id}` : ''}`,
+  blanks: ({ sittingId }) => `/sittings/${sittingId}/blanks`,
   sort: ({ sittingId }) => `/sittings/${sittingId}/sorting`,
   differ: ({ sittingId }) => `/sittings/${sittingId}/people`,
   numbers: ({ sittingId }) => `/sittings/${sittingId}/numbers`,

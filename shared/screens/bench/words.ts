@@ -7,6 +7,7 @@ export const words = {
   lines: {
     rule: { what: () => 'to rule', go: 'Rule them' },
     read: { what: () => 'to read', go: 'Go to the desk' },
+    blanks: { what: (n: number) => (n === 1 ? 'box looks empty' : 'boxes look empty'), go: 'Look at them' },
     sort: { what: (n: number) => (n === 1 ? 'page to sort' : 'pages to sort'), go: 'Sort them' },
     differ: { what: (n: number) => (n === 1 ? 'sheet with another’s number' : 'sheets with another’s number'), go: 'Look at them' },
     numbers: { what: (n: number) => (n === 1 ? 'hand-written number to read' : 'hand-written numbers to read'), go: 'Read them' },

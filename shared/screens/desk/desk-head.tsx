@@ -1,11 +1,13 @@
 import { View } from 'react-native';
 import type { DeskItem } from '../../contracts/desk';
+import { ButtonLink } from '../../ui/button';
 import { IconLink } from '../../ui/icon-button';
 import { ProgressRule } from '../../ui/progress-rule';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
 import { useIsWide } from '../../ui/use-breakpoint';
 import { ChemText } from '../chem-text';
+import { words as blankWords } from '../blanks/words';
 import { ItemMenu } from './item-menu';
 import { words } from './words';
 
@@ -15,12 +17,13 @@ interface DeskHeadProps {
   readonly title: string;
   readonly item: DeskItem;
   readonly items: readonly DeskItem[];
+  readonly emptyBoxes: number;
   /** Read on this page since the counts were fetched. */
   readonly readHere: number;
 }
 
 /** Item, sitting and progress: 60 high on wide; on a phone 56 and the rule under it. */
-export function DeskHead({ sittingId, course, title, item, items, readHere }: DeskHeadProps) {
+export function DeskHead({ sittingId, course, title, item, items, emptyBoxes, readHere }: DeskHeadProps) {
   const colors = useColors();
   const isWide = useIsWide();
   const of = item.read + item.toRead;
@@ -44,6 +47,11 @@ export function DeskHead({ sittingId, course, title, item, items, readHere }: De
           </Text>
           <Text variant="small" tone="ink2" lines={1}>{`${course}, ${title}`}</Text>
         </View>
+        {isWide && emptyBoxes > 0 ? (
+          <ButtonLink kind="text" isSmall iconAfter="forward" href={`/sittings/${sittingId}/blanks`} testID="empty-boxes-head">
+            {blankWords.lookEmpty(emptyBoxes)}
+          </ButtonLink>
+        ) : null}
         {isWide ? (
           <View style={{ width: 240, alignItems: 'flex-end', gap: 2 }}>
             {count}
@@ -52,7 +60,7 @@ export function DeskHead({ sittingId, course, title, item, items, readHere }: De
         ) : (
           count
         )}
-        <ItemMenu sittingId={sittingId} items={items} chosen={item.id} />
+        <ItemMenu sittingId={sittingId} items={items} chosen={item.id} emptyBoxes={emptyBoxes} />
       </View>
       {isWide ? null : rule}
     </View>

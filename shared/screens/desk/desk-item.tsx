@@ -10,6 +10,7 @@ import { useColors } from '../../ui/theme';
 import { useIsWide } from '../../ui/use-breakpoint';
 import { useKeys } from '../../ui/use-keys';
 import { struckWords } from '../method-words';
+import { CheckPosition } from '../check-position';
 import { PageOnMat } from '../page-on-mat';
 import { useMethodMarks } from '../use-method-marks';
 import { CodeSheet, rareCodes } from './code-choice';
@@ -33,6 +34,7 @@ export interface DeskItemProps {
   readonly personId: string;
   readonly item: DeskItem;
   readonly items: readonly DeskItem[];
+  readonly emptyBoxes: number;
   /** When the counts of the items were fetched. */
   readonly countedAt: number;
 }
@@ -42,7 +44,7 @@ const closest = 3;
 const view = { turns: 0, zoom: 1, isWhole: false };
 
 /** One item at the desk: its answers one after the other, in random order. */
-export function DeskItemWork({ sittingId, course, title, personId, item, items, countedAt }: DeskItemProps) {
+export function DeskItemWork({ sittingId, course, title, personId, item, items, emptyBoxes, countedAt }: DeskItemProps) {
   const colors = useColors();
   const router = useRouter();
   const isWide = useIsWide();
@@ -155,7 +157,7 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
   const last = work.done.filter(({ readingId }) => !refused.has(readingId)).at(-1);
   return (
     <View {...(keepFocusIn(field) as object)} style={{ flex: 1, minHeight: 0 }}>
-      <DeskHead sittingId={sittingId} course={course} title={title} item={item} items={items} readHere={readHere} />
+      <DeskHead sittingId={sittingId} course={course} title={title} item={item} items={items} emptyBoxes={emptyBoxes} readHere={readHere} />
       <DeskStrips queue={work.justDone} problem={work.problem} onSignIn={work.signIn} onForget={work.forgetRefused} onSendAgain={work.sendRefused} />
       <Text variant="micro" live="polite" style={{ position: 'absolute', width: 1, height: 1, overflow: 'hidden', opacity: 0 }} testID="desk-said">
         {work.message}
@@ -165,6 +167,7 @@ export function DeskItemWork({ sittingId, course, title, personId, item, items, 
           {lease ? (
             <>
               {picture.isWhole ? <PageOnMat id={lease.pageImageId} rev={lease.pageImageRev} label={words.pagePicture(lease.candidateNumber, lease.pageNo)} isWhole={false} /> : <ScanMat lease={lease} turns={picture.turns} zoom={picture.zoom} />}
+              {lease.crops.some(({ isDoubtful }) => isDoubtful) ? <CheckPosition isWhole={picture.isWhole} onWhole={whole} /> : null}
               <DeskTools lease={lease} isWhole={picture.isWhole} zoom={picture.zoom} onTurn={turn} onCloser={() => zoom(1.5)} onFarther={() => zoom(1 / 1.5)} onWhole={whole} />
               {shown.kind === 'done' ? (
                 <View style={{ minHeight: isWide ? 240 : 168, gap: 12, padding: isWide ? 40 : 16, borderTopWidth: 1, borderColor: colors.hair }}>

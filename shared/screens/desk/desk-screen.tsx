@@ -36,7 +36,7 @@ interface DeskProps {
 }
 
 function Desk({ standing, countedAt, itemId }: DeskProps) {
-  const { sittingId, items, isOpenForReading, courseCode, title } = standing;
+  const { sittingId, items, isOpenForReading, emptyBoxes, courseCode, title } = standing;
   const { data: me } = useMe();
   // Chosen once: counts that change while someone reads do not move them to another item.
   const [chosen] = useState(() => items.find(({ id }) => id === itemId)?.id ?? mostToRead(items)?.id);
@@ -50,5 +50,5 @@ function Desk({ standing, countedAt, itemId }: DeskProps) {
   }
   // In the address, so that looking at the page anew stays with the item.
   if (item.id !== itemId) return <Redirect href={`/desk/${sittingId}?item=${item.id}`} />;
-  return <DeskItemWork sittingId={sittingId} course={courseCode} title={title} personId={me.id} item={item} items={items} countedAt={countedAt} />;
+  return <DeskItemWork sittingId={sittingId} course={courseCode} title={title} personId={me.id} item={item} items={items} emptyBoxes={emptyBoxes} countedAt={countedAt} />;
 }

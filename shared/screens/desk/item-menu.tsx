@@ -7,16 +7,18 @@ import { Popover } from '../../ui/popover';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
 import { ChemText } from '../chem-text';
+import { words as blankWords } from '../blanks/words';
 import { words } from './words';
 
 interface ItemMenuProps {
   readonly sittingId: string;
   readonly items: readonly DeskItem[];
   readonly chosen: string;
+  readonly emptyBoxes: number;
 }
 
 /** The items of the sitting with what is left of each. */
-export function ItemMenu({ sittingId, items, chosen }: ItemMenuProps) {
+export function ItemMenu({ sittingId, items, chosen, emptyBoxes }: ItemMenuProps) {
   const colors = useColors();
   const menu = useId();
   const [isOpen, setOpen] = useState(false);
@@ -25,6 +27,16 @@ export function ItemMenu({ sittingId, items, chosen }: ItemMenuProps) {
       <IconButton icon="more" label={words.items} onPress={() => setOpen(!isOpen)} isExpanded={isOpen} testID="items" />
       {isOpen ? (
         <Popover id={menu} label={words.items} onClose={() => setOpen(false)} style={{ right: 12, top: 60, width: 270, maxHeight: '80vh', overflowY: 'auto' }}>
+          {emptyBoxes > 0 ? (
+            <Link
+              href={`/sittings/${sittingId}/blanks`}
+              isFocusInside
+              testID="empty-boxes"
+              style={({ isHovered }) => ({ minHeight: 48, justifyContent: 'center', paddingHorizontal: 12, borderBottomWidth: 1, borderColor: colors.hair, backgroundColor: isHovered ? colors.well : 'transparent' })}
+            >
+              <Text weight={600}>{blankWords.lookEmpty(emptyBoxes)}</Text>
+            </Link>
+          ) : null}
           {items.map(({ id, number, label, toRead }) => (
             <Link
               key={id}

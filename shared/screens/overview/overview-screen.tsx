@@ -8,6 +8,7 @@ import { ProgressRule } from '../../ui/progress-rule';
 import { Text } from '../../ui/text';
 import { useColors } from '../../ui/theme';
 import { useIsPhone } from '../../ui/use-breakpoint';
+import { EmptyBoxesLine } from '../blanks/empty-boxes-line';
 import { iconOf, stagesOf } from '../frame/stages';
 import { InSitting } from '../in-sitting';
 import { QueryState } from '../query-state';
@@ -47,6 +48,7 @@ function Overview({ sitting, progress }: { sitting: SittingView; progress: Progr
           {answers.held !== null && answers.held > 0 ? <Text weight={600}>{words.heldAnswers(answers.held)}</Text> : null}
         </View>
       ) : null}
+      <EmptyBoxesLine sittingId={sitting.id} />
       <Sections sitting={sitting} progress={progress} />
       <Text variant="small" tone="ink2">
         {words.provisional}
