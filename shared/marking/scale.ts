@@ -22,8 +22,6 @@ export interface ScaleData {
 }
 
 const graduations = [
-  { upTo: 0.6, major: 0.1, minor: 0.02, decimals: 2 },
-  { upTo: 1.5, major: 0.25, minor: 0.05, decimals: 2 },
   { upTo: 4, major: 0.5, minor: 0.1, decimals: 1 },
   { upTo: 8, major: 1, minor: 0.2, decimals: 0 },
   { upTo: 20, major: 2, minor: 0.5, decimals: 0 },
@@ -50,8 +48,11 @@ function roundingsApart(scheme: ItemScheme): { at: number; label: string }[] {
   return [...found].map(([label, at]) => ({ at, label }));
 }
 
-/** Limits, graduations, key, roundings, alternatives and bands of an item; `also` are values that must be on it, such as readings. */
-export function scaleOf(scheme: ItemScheme, also: readonly number[] = []): ScaleData {
+/** Binary floats put a limit that is on a line just beside it. */
+const nearly = 1e-9;
+
+/** Limits, graduations, key, roundings, alternatives and bands of an item. */
+export function scaleOf(scheme: ItemScheme): ScaleData {
   const key = fromFractionText(scheme.key.value);
   const at = toApproximate(key);
   const bands = scheme.bands.map((band) => {
@@ -61,11 +62,11 @@ export function scaleOf(scheme: ItemScheme, also: readonly number[] = []): Scale
   const alternatives = scheme.alternatives.map((one) => ({ at: toApproximate(fromFractionText(one.value)), label: one.text, grains: one.grains }));
   const apart = roundingsApart(scheme);
   const slips = (scheme.slips ?? []).map(({ letter, name, value, text, grains }) => ({ at: toApproximate(fromFractionText(value)), letter, name, text, grains }));
-  const reach = [...bands.flatMap(({ from, to }) => [from, to]), ...alternatives.map((one) => one.at), ...apart.map((one) => one.at), ...also];
+  const reach = [...bands.flatMap(({ from, to }) => [from, to]), ...alternatives.map((one) => one.at), ...apart.map((one) => one.at)];
   const farthest = Math.max(1.2, ...reach.map((value) => Math.abs(value - at) * 1.15));
   const { major, minor, decimals } = graduationFor(2 * farthest);
-  const lo = Math.floor((at - farthest) / minor) * minor;
-  const hi = Math.ceil((at + farthest) / minor) * minor;
+  const lo = Math.floor((at - farthest) / minor + nearly) * minor;
+  const hi = Math.ceil((at + farthest) / minor - nearly) * minor;
   const places = Math.max(scheme.key.decimals, Math.min(6, exactDecimals(key) ?? 0));
   return { lo, hi, major, minor, decimals, maxGrains: scheme.maxGrains, key: { at, label: toDecimals(key, places) }, roundings: apart, alternatives, bands, slips };
 }

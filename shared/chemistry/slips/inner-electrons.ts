@@ -23,8 +23,9 @@ const aboveShell = (context: SlipContext, outcome: () => Outcome): Outcome | nul
 const aboveD = (context: SlipContext, outcome: () => Outcome): Outcome | null =>
   context.kind === 'sp' && electronsWhere(context, (occupation) => isBelowDf(context, occupation)) > 0 ? outcome() : null;
 
+const screening = (count: number, coefficient: string): string => (count === 1 ? `screens ${coefficient}` : `screen ${coefficient} each`);
 const shellBelowRule = (context: SlipContext): string =>
-  `For ${electronText(context)} the ${counted(below(context))} of shell ${context.electron.n - 1}, one shell in, screen 0.85 each.`;
+  `For ${electronText(context)} the ${counted(below(context))} of shell ${context.electron.n - 1}, one shell in, ${screening(below(context), '0.85')}.`;
 const leftRule = (context: SlipContext): string => `For ${electronText(context)} every electron to the left in Slater’s order screens 1.00.`;
 const innerRule = (context: SlipContext): string =>
   context.kind === 'sp' ? `For ${electronText(context)} only the shell one in screens 0.85; every deeper electron screens 1.00.` : leftRule(context);
@@ -85,7 +86,7 @@ export const innerElectronSlips: readonly Slip[] = [
     id: 'deep-core-left-out',
     name: 'deep core left out',
     outcome: (context) => (context.kind === 'sp' && deep(context) > 0 ? changing(context, (occupation) => isDeeper(context, occupation), zero) : null),
-    rule: (context) => `For ${electronText(context)} the ${counted(deep(context))} two or more shells in screen 1.00 each.`,
+    rule: (context) => `For ${electronText(context)} the ${counted(deep(context))} two or more shells in ${screening(deep(context), '1.00')}.`,
     leads: () => 'Without them',
   },
   {
@@ -116,8 +117,11 @@ export const innerElectronSlips: readonly Slip[] = [
       const isAbove4f = ['6s', '6p', '5d'].includes(subshellLabel(context.electron));
       return isAbove4f && electronsWhere(context, is4f) > 0 ? changing(context, is4f, zero) : null;
     },
-    rule: (context) => `For ${electronText(context)} the ${counted(electronsWhere(context, is4f), '4f electron')} screen 1.00 each.`,
-    leads: () => 'Without them',
+    rule: (context) => {
+      const count = electronsWhere(context, is4f);
+      return `For ${electronText(context)} the ${counted(count, '4f electron')} ${screening(count, '1.00')}.`;
+    },
+    leads: (context) => (electronsWhere(context, is4f) === 1 ? 'With it left out' : 'Without them'),
   },
   {
     id: 'inner-octet-left-out',

@@ -110,8 +110,13 @@ const closed: Readonly<Record<string, Closed>> = {
 /** Slips whose species, electron or configuration is another one: worked again on a configuration built here by hand. */
 const rebuilt = ['neutral-atom-electrons', 'charge-sign-reversed', 'd-removed-before-s', 'exception-ignored', 'group-inward', 'group-outward', 'element-before', 'element-after', 'zeff-for-sigma'];
 
-const species = elements.flatMap((element) =>
-  Array.from({ length: 8 }, (_, index) => index - 3).flatMap((charge) => {
+/** Every element; of each kind one where mutants are tested, or each of them would take the whole sweep. */
+const isThin = process.env.SWEEP === 'thin';
+const thin = ['H', 'He', 'Li', 'B', 'O', 'Cl', 'K', 'Cr', 'Fe', 'Ga', 'Cd', 'Au', 'Pb'];
+const swept = isThin ? elements.filter(({ symbol }) => thin.includes(symbol)) : elements;
+
+const species = swept.flatMap((element) =>
+  (isThin ? [-1, 0, 3] : [-3, -2, -1, 0, 1, 2, 3, 4]).flatMap((charge) => {
     const result = speciesOf({ symbol: element.symbol, charge });
     return result.ok ? [result.value] : [];
   }),
@@ -146,7 +151,7 @@ describe('every slip with a closed form', () => {
         expect(wrong).toEqual([]);
       }
     }
-    expect(checked).toBeGreaterThan(150_000);
+    expect(checked).toBeGreaterThan(isThin ? 5_000 : 150_000);
   }, 240_000);
 });
 
@@ -239,7 +244,7 @@ describe('what is said about a slip', () => {
   });
 
   it('never blames, and is never empty', () => {
-    for (const one of species.filter((_, index) => index % 23 === 0)) {
+    for (const one of species.filter((_, index) => index % (isThin ? 5 : 23) === 0)) {
       for (const occupation of one.configuration) {
         for (const { feedback, oneLine, name } of slips(one.element.symbol, subshellLabel(occupation), one.charge)) {
           expect(feedback).not.toMatch(/\byou\b|wrong|mistake|undefined|NaN|-\d/i);
