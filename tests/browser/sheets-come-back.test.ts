@@ -115,6 +115,31 @@ describe('sheets out, scans in', () => {
     await page.waitForFunction((left) => document.body.innerText.includes('Every page has its script') || document.body.innerText.includes(`of ${left}`), rows.length - 1);
   }
 
+  it('what looks empty is confirmed on the contact sheet, and nothing that is written', async () => {
+    const { page, context, complaints } = await openPage(bench, 'readerOne', 'phone');
+    await page.goto(`${bench.address}/sittings/${sittingId}/blanks`);
+    for (;;) {
+      await page.getByTestId('record-blanks').or(page.getByTestId('to-desk')).first().waitFor();
+      if ((await page.getByTestId('record-blanks').count()) === 0) break;
+      const before = blanksRead();
+      await page.getByTestId('record-blanks').click();
+      await expect.poll(blanksRead, { timeout: 15_000 }).not.toEqual(before);
+    }
+    const empty = truth.flatMap(({ candidate, answers }) => answers.filter(({ kind }) => kind === 'blank').map(({ itemNumber }) => `${candidate} ${itemNumber}`));
+    expect(empty.length).toBeGreaterThan(0);
+    expect(empty).toEqual(expect.arrayContaining(blanksRead()));
+    expect(blanksRead().length).toBeGreaterThan(empty.length / 2);
+    expect(complaints).toEqual([]);
+    await context.close();
+  }, 120_000);
+
+  /** Candidate and item of every reading that says blank. */
+  const blanksRead = (): string[] =>
+    bench.server.context.db.$client
+      .prepare("select c.number || ' ' || i.number from reading r join answer a on a.id = r.answer join item i on i.id = a.item join script s on s.id = a.script join candidate c on c.id = s.candidate where r.code = 'blank' order by 1")
+      .pluck()
+      .all() as string[];
+
   it('the numbers are read blind, one by one', async () => {
     const { page, context, complaints } = await openPage(bench, 'readerTwo', 'phone', 'dark');
     const lead = actorOf(bench.server, 'lead');
