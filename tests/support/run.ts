@@ -48,7 +48,7 @@ async function browserTests(): Promise<boolean> {
   return tests('browser');
 }
 
-/** Types, lint, unit, API and browser tests, all of them even when one fails; the last line counts the tests. */
+/** Types, lint, unit, API, sheet and browser tests, all of them even when one fails; the last line counts the tests. */
 async function runAll(): Promise<boolean> {
   const outcomes = [
     step('types: app', 'tsc', ['-p', 'tsconfig.json', '--noEmit']),
@@ -56,6 +56,7 @@ async function runAll(): Promise<boolean> {
     step('lint', 'eslint', ['.', '--max-warnings', '0']),
     tests('unit'),
     apiTests(),
+    tests('sheets'),
     await browserTests(),
   ];
   return outcomes.every(Boolean);
